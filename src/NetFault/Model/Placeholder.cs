@@ -1,0 +1,2 @@
+namespace NetFault;
+internal static class Placeholder;

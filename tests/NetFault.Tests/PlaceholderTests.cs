@@ -1,0 +1,2 @@
+namespace NetFault.Tests;
+public class PlaceholderTests { [Fact] public void X() => 1.Should().Be(1); }
