@@ -1,0 +1,193 @@
+namespace NetFault;
+
+/// <summary>
+/// What an element's <see cref="NetworkElement.Check"/> speaks to: simple rules on one key or a few. A key that the reader has already
+/// complained about is passed over, so that one mistake is reported once.
+/// </summary>
+internal sealed class ElementCheck
+{
+    private readonly NetworkDraft _draft;
+    private readonly List<Diagnostic> _found;
+    private NetworkElement _element;
+    private IReadOnlyCollection<string>? _reported;
+
+    public ElementCheck(NetworkDraft draft, List<Diagnostic> found, NetworkElement first)
+    {
+        _draft = draft;
+        _found = found;
+        _element = first;
+    }
+
+    /// <summary>Runs the rules of one element.</summary>
+    public void Run(NetworkElement element, IReadOnlyCollection<string>? reportedKeys)
+    {
+        _element = element;
+        _reported = reportedKeys;
+        element.Check(this);
+    }
+
+    /// <summary>Reports a problem of a key; of the element as a whole where the key is null.</summary>
+    public void Say(string? key, Problem problem)
+    {
+        if (!IsReported(key))
+            _found.Add(problem.At(_element.Section, _element.Id, key));
+    }
+
+    public void Positive(string key, double? value)
+    {
+        if (Finite(key, value) && value <= 0)
+            Say(key, Problems.NotPositive(value.GetValueOrDefault()));
+    }
+
+    public void NotNegative(string key, double? value)
+    {
+        if (Finite(key, value) && value < 0)
+            Say(key, Problems.Negative(value.GetValueOrDefault()));
+    }
+
+    public void WithinPercent(string key, double? value)
+    {
+        if (Finite(key, value) && value is < 0 or > 100)
+            Say(key, Problems.OutsidePercent(value.GetValueOrDefault()));
+    }
+
+    public void AboveZeroUpToOne(string key, double? value)
+    {
+        if (Finite(key, value) && value is <= 0 or > 1)
+            Say(key, Problems.NotAFraction(value.GetValueOrDefault()));
+    }
+
+    public void AtLeastOne(string key, int? value)
+    {
+        if (value < 1)
+            Say(key, Problems.LessThanOne(value.GetValueOrDefault()));
+    }
+
+    public void OneOf<T>(string key, T value, string allowed) where T : struct, Enum
+    {
+        if (!Enum.IsDefined(typeof(T), value))
+            Say(key, Problems.NotOneOf(value, allowed));
+    }
+
+    public void NotAbove(string key, double? value, string otherKey, double? other)
+    {
+        if (value > other && !IsReported(otherKey))
+            Say(key, Problems.Above(value.GetValueOrDefault(), otherKey, other.GetValueOrDefault()));
+    }
+
+    /// <summary>Warns of a value outside what is common; what is impossible is left to the other rules.</summary>
+    public void Unusual(string key, double value, double low, double high, string unit)
+    {
+        if (value > 0 && (value < low || value > high) && !double.IsInfinity(value))
+            Say(key, Problems.UnusualValue(value, low, high, unit));
+    }
+
+    public void PositiveMaxMin(string key, MaxMin? value)
+    {
+        if (value is not { } pair)
+            return;
+        Positive(pair.Min is null ? key : key + ".max", pair.Max);
+        Positive(key + ".min", pair.Min);
+        if (pair.Min > pair.Max)
+            Say(key + ".min", Problems.MinimumAboveMaximum(pair.Min.GetValueOrDefault(), pair.Max));
+    }
+
+    public void ReactanceRatio(double? xOverR, double? rOverX)
+    {
+        Positive("x_over_r", xOverR);
+        NotNegative("r_over_x", rOverX);
+    }
+
+    public void SeriesImpedance(string key, Impedance? impedance)
+    {
+        if (impedance is not { } z)
+            return;
+        NotNegative(key + ".r", z.R);
+        Finite(key + ".x", z.X);
+        if (z is { R: 0, X: 0 } && !IsReported(key + ".r") && !IsReported(key + ".x"))
+            Say(key, Problems.NoImpedance());
+    }
+
+    public void Needed(string key, double? value, string reason)
+    {
+        if (value is null)
+            Say(key, Problems.NeededFor(reason));
+    }
+
+    public void ExactlyOne(params (string Key, bool Given)[] forms)
+    {
+        AtMostOne(forms);
+        if (!forms.Any(form => form.Given || IsReported(form.Key)))
+            Say(null, Problems.NoForm(string.Join(", ", forms.Select(form => form.Key))));
+    }
+
+    public void AtMostOne(params (string Key, bool Given)[] forms)
+    {
+        var given = forms.Where(form => form.Given || IsReported(form.Key)).Select(form => form.Key).ToList();
+        for (var i = 1; i < given.Count; i++)
+            Say(given[i], Problems.BothForms(given[0], given[i]));
+    }
+
+    public void RatedVoltage(string key, double? ratedKv, string? bus)
+    {
+        Positive(key, ratedKv);
+        if (ratedKv is { } rated && bus is not null && _draft.FindBus(bus) is { NominalKv: > 0 } at && OffByMoreThan(1.3, rated, at.NominalKv))
+            Say(key, Problems.RatedVoltageFarOff(rated, bus, at.NominalKv));
+    }
+
+    public void HighVoltageFirst(string hvKey, double hvKv, string lvKey, double lvKv)
+    {
+        if (hvKv < lvKv && !IsReported(lvKey))
+            Say(hvKey, Problems.WindingsSwapped(hvKv, lvKv));
+    }
+
+    public void BusReference(string key, string bus)
+    {
+        if (!_draft.HasBus(bus))
+            Say(key, Problems.UnknownBus(bus, NearestNames.Suggestion(bus, _draft.BusIds)));
+    }
+
+    public void TransformerReference(string key, string id, string bus)
+    {
+        if (!_draft.Declares("transformers", id))
+            Say(key, Problems.UnknownTransformer(id, NearestNames.Suggestion(id, _draft.IdsOf("transformers"))));
+        else if (_draft.Find("transformers", id) is Transformer transformer && transformer.Hv != bus && transformer.Lv != bus)
+            Say(key, Problems.UnitTransformerElsewhere(id, bus));
+    }
+
+    public void DifferentBuses(string oneKey, string one, string otherKey, string other)
+    {
+        if (one == other && !IsReported(oneKey))
+            Say(otherKey, Problems.SameBus(one));
+    }
+
+    public void SameNominalVoltage(string from, string to, bool perUnit)
+    {
+        if (_draft.FindBus(from) is not { } one || _draft.FindBus(to) is not { } other || one.NominalKv.Equals(other.NominalKv))
+            return;
+        Say(null, perUnit
+            ? Problems.UnitRatio(from, one.NominalKv, to, other.NominalKv)
+            : Problems.UnequalVoltages(from, one.NominalKv, to, other.NominalKv));
+    }
+
+    private static bool OffByMoreThan(double factor, double one, double other) => one > factor * other || other > factor * one;
+
+    private bool Finite(string key, double? value)
+    {
+        if (value is not { } number)
+            return false;
+        if (!double.IsNaN(number) && !double.IsInfinity(number))
+            return true;
+        Say(key, Problems.NotFinite(number));
+        return false;
+    }
+
+    /// <summary>Whether the reader has complained about this key or about the mapping it stands in.</summary>
+    private bool IsReported(string? key)
+    {
+        if (_reported is null || key is null)
+            return false;
+        var dot = key.IndexOf('.');
+        return _reported.Contains(key) || (dot > 0 && _reported.Contains(key.Substring(0, dot)));
+    }
+}

@@ -1,0 +1,43 @@
+namespace NetFault;
+
+/// <summary>A network that was built by a program has errors. <see cref="Exception.Message"/> shows them all.</summary>
+public sealed class InvalidNetworkException : Exception
+{
+    internal InvalidNetworkException(IReadOnlyList<Diagnostic> diagnostics)
+        : base(DiagnosticText.Render("The network is not valid.", diagnostics))
+    {
+        Diagnostics = diagnostics;
+    }
+
+    /// <summary>Every problem, warnings included.</summary>
+    public IReadOnlyList<Diagnostic> Diagnostics { get; }
+}
+
+/// <summary>An id was asked for that the network does not have.</summary>
+public sealed class UnknownIdException : ArgumentException
+{
+    internal UnknownIdException(string section, string id, IEnumerable<string> known)
+        : this(section, id, NearestNames.Find(id, known, 3))
+    {
+    }
+
+    private UnknownIdException(string section, string id, IReadOnlyList<string> nearest)
+        : base($"There is no \"{id}\" in {section}." + Suggestion(nearest))
+    {
+        Section = section;
+        Id = id;
+        NearestIds = nearest;
+    }
+
+    /// <summary>The section that was searched, such as <c>buses</c>.</summary>
+    public string Section { get; }
+
+    /// <summary>The id that was asked for.</summary>
+    public string Id { get; }
+
+    /// <summary>The ids that look most like it, nearest first; at most three.</summary>
+    public IReadOnlyList<string> NearestIds { get; }
+
+    private static string Suggestion(IReadOnlyList<string> nearest) =>
+        nearest.Count == 0 ? string.Empty : " The nearest are " + string.Join(", ", nearest.Select(one => $"\"{one}\"")) + ".";
+}

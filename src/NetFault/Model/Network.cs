@@ -1,0 +1,101 @@
+namespace NetFault;
+
+/// <summary>
+/// A checked network: what is installed, in engineering units. Immutable, and valid by construction: it comes from
+/// <see cref="NetworkBuilder"/> or from a network file.
+/// </summary>
+public sealed class Network
+{
+    private readonly Dictionary<(string Section, string Id), NetworkElement> _byId;
+
+    internal Network(NetworkDraft draft)
+    {
+        Title = draft.Title;
+        FrequencyHz = draft.FrequencyHz;
+        BaseMva = draft.BaseMva;
+        Buses = Of<Bus>(draft);
+        NetworkFeeders = Of<NetworkFeeder>(draft);
+        SynchronousMachines = Of<SynchronousMachine>(draft);
+        AsynchronousMotors = Of<AsynchronousMotor>(draft);
+        Transformers = Of<Transformer>(draft);
+        ThreeWindingTransformers = Of<ThreeWindingTransformer>(draft);
+        Lines = Of<Line>(draft);
+        SeriesReactors = Of<SeriesReactor>(draft);
+        BusCouplers = Of<BusCoupler>(draft);
+        Elements =
+        [
+            .. Buses, .. NetworkFeeders, .. SynchronousMachines, .. AsynchronousMotors,
+            .. Transformers, .. ThreeWindingTransformers, .. Lines, .. SeriesReactors, .. BusCouplers,
+        ];
+        _byId = Elements.ToDictionary(element => (element.Section, element.Id));
+        Topology = new NetworkTopology(this);
+    }
+
+    /// <summary>A title for people; null where none was given.</summary>
+    public string? Title { get; }
+
+    /// <summary>The rated frequency in Hz.</summary>
+    public double FrequencyHz { get; }
+
+    /// <summary>The base power of per-unit values, in MVA.</summary>
+    public double BaseMva { get; }
+
+    /// <summary>All elements, section by section in the order of the network file's sections.</summary>
+    public IReadOnlyList<NetworkElement> Elements { get; }
+
+    /// <summary>The buses; results list them in this order.</summary>
+    public IReadOnlyList<Bus> Buses { get; }
+
+    /// <summary>The network feeders.</summary>
+    public IReadOnlyList<NetworkFeeder> NetworkFeeders { get; }
+
+    /// <summary>The synchronous machines.</summary>
+    public IReadOnlyList<SynchronousMachine> SynchronousMachines { get; }
+
+    /// <summary>The asynchronous motors.</summary>
+    public IReadOnlyList<AsynchronousMotor> AsynchronousMotors { get; }
+
+    /// <summary>The two-winding transformers.</summary>
+    public IReadOnlyList<Transformer> Transformers { get; }
+
+    /// <summary>The three-winding transformers.</summary>
+    public IReadOnlyList<ThreeWindingTransformer> ThreeWindingTransformers { get; }
+
+    /// <summary>The lines and cables.</summary>
+    public IReadOnlyList<Line> Lines { get; }
+
+    /// <summary>The series reactors.</summary>
+    public IReadOnlyList<SeriesReactor> SeriesReactors { get; }
+
+    /// <summary>The bus couplers.</summary>
+    public IReadOnlyList<BusCoupler> BusCouplers { get; }
+
+    /// <summary>What is odd but possible: buses without a source, unusual values. <see cref="NetworkBuilder.Build"/> fills it.</summary>
+    public IReadOnlyList<Diagnostic> Warnings { get; internal set; } = [];
+
+    /// <summary>The network as a graph.</summary>
+    internal NetworkTopology Topology { get; }
+
+    /// <summary>A copy in which the given elements stand in for those of the same section and id, and new ones are added.</summary>
+    /// <exception cref="InvalidNetworkException">The network would not be valid; the exception lists every problem.</exception>
+    public Network With(params NetworkElement[] elements) => ToBuilder().Set(elements).Build();
+
+    /// <summary>A copy with one bus coupler closed or opened.</summary>
+    /// <param name="id">The coupler's id.</param>
+    /// <param name="closed">True closes it.</param>
+    /// <exception cref="UnknownIdException">There is no such coupler; the exception names the nearest ids.</exception>
+    public Network WithCoupler(string id, bool closed) => With(Find<BusCoupler>("bus_couplers", id) with { Closed = closed });
+
+    /// <summary>A builder that holds this network's elements, for changed copies.</summary>
+    public NetworkBuilder ToBuilder() =>
+        new NetworkBuilder { Title = Title, FrequencyHz = FrequencyHz, BaseMva = BaseMva }.Add([.. Elements]);
+
+    /// <summary>The element of a section with an id.</summary>
+    /// <exception cref="UnknownIdException">There is none; the exception names the nearest ids.</exception>
+    internal T Find<T>(string section, string id) where T : NetworkElement =>
+        _byId.TryGetValue((section, id), out var element)
+            ? (T)element
+            : throw new UnknownIdException(section, id, Elements.Where(one => one.Section == section).Select(one => one.Id));
+
+    private static IReadOnlyList<T> Of<T>(NetworkDraft draft) => Array.AsReadOnly(draft.Elements.OfType<T>().ToArray());
+}

@@ -1,2 +1,0 @@
-namespace NetFault;
-internal static class Placeholder;
