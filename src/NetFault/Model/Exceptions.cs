@@ -41,3 +41,21 @@ public sealed class UnknownIdException : ArgumentException
     private static string Suggestion(IReadOnlyList<string> nearest) =>
         nearest.Count == 0 ? string.Empty : " The nearest are " + string.Join(", ", nearest.Select(one => $"\"{one}\"")) + ".";
 }
+
+/// <summary>
+/// The network's equations are singular to working precision, so that it has no solution: reactances of opposite sign cancel.
+/// </summary>
+public sealed class SingularNetworkException : Exception
+{
+    internal SingularNetworkException(IReadOnlyList<string> busIds, Exception inner)
+        : base(
+            $"The network has no solution: at bus {string.Join(" = ", busIds.Select(id => $"\"{id}\""))} the admittances cancel to working "
+            + "precision. Look for negative reactances (series compensation, equivalent legs) that are equal and opposite to others there.",
+            inner)
+    {
+        BusIds = busIds;
+    }
+
+    /// <summary>The bus, or the buses joined by closed couplers, at which the solution broke down.</summary>
+    public IReadOnlyList<string> BusIds { get; }
+}

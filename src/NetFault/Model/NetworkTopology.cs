@@ -71,6 +71,15 @@ internal sealed class NetworkTopology
         return bus < 0 ? -1 : NodeOfBus[bus];
     }
 
+    /// <summary>The bus of an element's first terminal that is not open.</summary>
+    public int FirstBus(int element)
+    {
+        var at = _terminalStart[element];
+        while (_terminalBus[at] < 0)
+            at++;
+        return _terminalBus[at];
+    }
+
     private (int[] Start, int[] Bus) ResolveTerminals(IReadOnlyList<NetworkElement> elements)
     {
         var start = new int[elements.Count + 1];

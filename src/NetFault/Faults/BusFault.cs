@@ -1,0 +1,140 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// A three-phase short circuit at one bus: its currents, how they come about, and what they rest on. Immutable. Currents are RMS values of
+/// a phase in kA unless they say otherwise.
+/// </summary>
+public sealed class BusFault
+{
+    private readonly StudyContext _context;
+    private readonly int _bus;
+    private readonly FaultImpedances _impedances;
+
+    internal BusFault(StudyContext context, int bus, in FaultImpedances impedances, Complex faultImpedanceOhm)
+    {
+        _context = context;
+        _bus = bus;
+        _impedances = impedances;
+        FaultImpedanceOhm = faultImpedanceOhm;
+        IsEnergised = true;
+        InitialSymmetricalKa = context.CurrentKa(Bus, impedances.Initial);
+        Ratio = ReactanceRatio.Of(impedances, context.Method.XOverRRule);
+    }
+
+    private BusFault(StudyContext context, int bus)
+    {
+        _context = context;
+        _bus = bus;
+        Ratio = new ReactanceRatio(null, XOverRStatus.DeEnergised);
+    }
+
+    /// <summary>The bus.</summary>
+    public Bus Bus => _context.Network.Buses[_bus];
+
+    /// <summary>The bus's id.</summary>
+    public string BusId => Bus.Id;
+
+    /// <summary>The bus's nominal voltage in kV.</summary>
+    public double NominalKv => Bus.NominalKv;
+
+    /// <summary>False where the bus has no path to a source: then all currents are 0 and there is no impedance.</summary>
+    public bool IsEnergised { get; }
+
+    /// <summary>The initial symmetrical short-circuit current I″k: the AC component at the beginning.</summary>
+    public double InitialSymmetricalKa { get; }
+
+    /// <summary>The transient short-circuit current I′k: the AC component after the subtransient decay; null where it was not asked for.</summary>
+    public double? TransientKa => CurrentKa(_impedances.Transient, FaultInstants.Transient);
+
+    /// <summary>The steady-state short-circuit current Ik, at constant excitation; null where it was not asked for.</summary>
+    public double? SteadyStateKa => CurrentKa(_impedances.SteadyState, FaultInstants.SteadyState);
+
+    /// <summary>The short-circuit power S″k = √3·Un·I″k in MVA.</summary>
+    public double ShortCircuitMva => PerUnit.Sqrt3 * NominalKv * InitialSymmetricalKa;
+
+    /// <summary>
+    /// The short-circuit impedance Zk at the beginning, with the fault's own impedance, per unit on the network's base power and the bus's
+    /// nominal voltage; null at a de-energised bus.
+    /// </summary>
+    public Complex? ImpedancePu => IsEnergised ? _impedances.Initial : null;
+
+    /// <summary>The short-circuit impedance Zk in ohm; null at a de-energised bus.</summary>
+    public Complex? ImpedanceOhm => IsEnergised ? _impedances.Initial * _context.BaseOhm(Bus) : null;
+
+    /// <summary>The impedance of the fault itself in ohm; 0 for a bolted fault.</summary>
+    public Complex FaultImpedanceOhm { get; }
+
+    /// <summary>X/R at the fault by <see cref="XOverRRule"/>; null where there is none, and <see cref="XOverRStatus"/> says why.</summary>
+    public double? XOverR => Ratio.XOverR;
+
+    /// <summary>Whether X/R is known, and if not, why.</summary>
+    public XOverRStatus XOverRStatus => Ratio.Status;
+
+    /// <summary>The rule by which X/R was found.</summary>
+    public XOverRRule XOverRRule => _context.Method.XOverRRule;
+
+    /// <summary>How the DC component, and with it the peak, is taken to decay.</summary>
+    public DcDecayRule DcDecayRule => XOverR.HasValue ? DcDecayRule.ByXOverR : DcDecayRule.Undamped;
+
+    /// <summary>How the AC component is taken over time.</summary>
+    public AcComponentRule AcComponentRule => AcComponentRule.HeldAtInitial;
+
+    /// <summary>
+    /// The peak short-circuit current ip, an instantaneous value in kA: the exact maximum over time for a fault at voltage zero, with the
+    /// AC component held at I″k and the DC component by <see cref="DcDecayRule"/>; 2√2·I″k where that is undamped.
+    /// </summary>
+    public double PeakKa => InitialSymmetricalKa * (XOverR is { } ratio ? PeakFactor.Of(ratio) : PeakFactor.Undamped);
+
+    /// <summary>The largest residual of the solutions behind this result: 0 for exact ones, about 1e-15 to 1e-12 for good ones.</summary>
+    public double SolutionResidual => _impedances.Residual;
+
+    /// <summary>What this result rests on that the network does not say: the assumed values of its connected part of the network.</summary>
+    public IReadOnlyList<Assumption> Assumptions => IsEnergised ? _context.Assumptions.OfBus(_bus) : [];
+
+    internal ReactanceRatio Ratio { get; }
+
+    /// <summary>
+    /// The DC component of the phase with the largest one, i_dc(t) = √2·I″k·e^(−ω·t/(X/R)) in kA, an instantaneous value; undamped where
+    /// there is no X/R.
+    /// </summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
+    public double DcComponentKa(double seconds)
+    {
+        Guard.NotNegative(seconds);
+        var decay = XOverR is { } ratio ? Math.Exp(-_context.Omega * seconds / ratio) : 1.0;
+        return PerUnit.Sqrt2 * InitialSymmetricalKa * decay;
+    }
+
+    /// <summary>The RMS value of the AC component in kA: I″k at all times, as <see cref="AcComponentRule"/> says.</summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
+    public double SymmetricalRmsKa(double seconds)
+    {
+        Guard.NotNegative(seconds);
+        return InitialSymmetricalKa;
+    }
+
+    /// <summary>The asymmetrical (total) RMS value √(Iac² + i_dc²) in kA.</summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
+    public double AsymmetricalRmsKa(double seconds)
+    {
+        double ac = SymmetricalRmsKa(seconds), dc = DcComponentKa(seconds);
+        return Math.Sqrt(ac * ac + dc * dc);
+    }
+
+    /// <summary>The bus with its initial current, for people.</summary>
+    public override string ToString() => FormattableString.Invariant($"{BusId}: I\u2033k = {InitialSymmetricalKa:0.###} kA");
+
+    internal static BusFault DeEnergised(StudyContext context, int bus) => new(context, bus);
+
+    private double? CurrentKa(Complex? impedance, FaultInstants instant)
+    {
+        if (!IsEnergised)
+            return _context.Method.CalculatedInstants.HasFlag(instant) ? 0.0 : null;
+        return impedance is { } z ? _context.CurrentKa(Bus, z) : null;
+    }
+}

@@ -1,0 +1,60 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// The whole way of an every-bus study: each network the method asks for is factored and its selected inverse taken, side by side on the
+/// cores there are; then Zkk of each bus becomes its currents.
+/// </summary>
+internal sealed class EveryBusSolution
+{
+    /// <summary>Buses between two looks at the cancellation token.</summary>
+    private const int BusesInAStride = 8192;
+
+    private readonly StudyContext _context;
+    private readonly StudyNetworks _networks;
+    private readonly IProgress<StudyProgress>? _progress;
+    private readonly CancellationToken _cancellation;
+    private int _done;
+
+    public EveryBusSolution(
+        StudyContext context, StudyNetworks networks, IProgress<StudyProgress>? progress, CancellationToken cancellation)
+    {
+        _context = context;
+        _networks = networks;
+        _progress = progress;
+        _cancellation = cancellation;
+    }
+
+    /// <summary>Solves and gathers the results.</summary>
+    public IReadOnlyList<BusFault> Run()
+    {
+        var wanted = NetworksNeeded.Of(_context.Method);
+        var impedances = new DrivingPointImpedances[wanted.Count];
+        Parallel.For(0, wanted.Count, new ParallelOptions { CancellationToken = _cancellation }, i =>
+        {
+            _cancellation.ThrowIfCancellationRequested();
+            impedances[i] = wanted[i].Choose(_networks).DrivingPoints;
+            _progress?.Report(new StudyProgress(Interlocked.Increment(ref _done), wanted.Count + 1, wanted[i].Name));
+        });
+        var results = Results(new NodeImpedances(wanted, impedances));
+        _progress?.Report(new StudyProgress(wanted.Count + 1, wanted.Count + 1, "currents"));
+        return Array.AsReadOnly(results);
+    }
+
+    private BusFault[] Results(NodeImpedances impedances)
+    {
+        var buses = _context.Network.Buses;
+        var results = new BusFault[buses.Count];
+        for (var bus = 0; bus < results.Length; bus++)
+        {
+            if (bus % BusesInAStride == 0)
+                _cancellation.ThrowIfCancellationRequested();
+            var node = _networks.Circuit.NodeOfBus[bus];
+            results[bus] = node < 0
+                ? BusFault.DeEnergised(_context, bus)
+                : new BusFault(_context, bus, impedances.At(node), Complex.Zero);
+        }
+        return results;
+    }
+}

@@ -1,0 +1,103 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// The currents and voltages everywhere during a three-phase short circuit at one bus, as complex RMS phasors of the AC component; the
+/// pre-fault voltage is the reference of the angles, phase shifts of vector groups are left out. Immutable. Load currents are not in
+/// them: by superposition these are the currents that the fault causes.
+/// </summary>
+public sealed class FaultFlows
+{
+    internal FaultFlows(string busId, FaultInstant instant)
+    {
+        BusId = busId;
+        Instant = instant;
+    }
+
+    /// <summary>The bus with the fault.</summary>
+    public string BusId { get; }
+
+    /// <summary>Which instant's network these belong to.</summary>
+    public FaultInstant Instant { get; }
+
+    /// <summary>The current into the fault in kA; 0 where the bus is de-energised.</summary>
+    public Complex FaultCurrentKa { get; internal init; }
+
+    /// <summary>The voltage of every bus, in the order of the network.</summary>
+    public IReadOnlyList<BusVoltage> Voltages { get; internal init; } = [];
+
+    /// <summary>The currents of every branch that is in service: transformers, lines, reactors.</summary>
+    public IReadOnlyList<BranchFlow> Branches { get; internal init; } = [];
+
+    /// <summary>The current of every feeder, machine and motor that is in service.</summary>
+    public IReadOnlyList<SourceFlow> Sources { get; internal init; } = [];
+
+    /// <summary>The current through every closed coupler that is in service.</summary>
+    public IReadOnlyList<CouplerFlow> Couplers { get; internal init; } = [];
+
+    /// <summary>Normwise relative backward error of the solution: about 1e-16 for a good one.</summary>
+    public double SolutionResidual { get; internal init; }
+
+    /// <summary>The voltage of a bus.</summary>
+    /// <exception cref="UnknownIdException">There is no such bus.</exception>
+    public BusVoltage Voltage(string busId) => Find("buses", busId, Voltages, one => one.BusId);
+
+    /// <summary>The flow of a branch, by its id; where sections share the id, name the section too.</summary>
+    /// <exception cref="UnknownIdException">There is no such branch in service.</exception>
+    public BranchFlow Branch(string id, string? section = null) =>
+        Find(section ?? "branches in service", id, Branches.Where(one => section is null || one.Section == section), one => one.Id);
+
+    /// <summary>The flow of a source, by its id; where sections share the id, name the section too.</summary>
+    /// <exception cref="UnknownIdException">There is no such source in service.</exception>
+    public SourceFlow Source(string id, string? section = null) =>
+        Find(section ?? "sources in service", id, Sources.Where(one => section is null || one.Section == section), one => one.Id);
+
+    /// <summary>The flow of a closed coupler, by its id.</summary>
+    /// <exception cref="UnknownIdException">There is no such coupler closed and in service.</exception>
+    public CouplerFlow Coupler(string id) => Find("closed couplers", id, Couplers, one => one.Id);
+
+    private static T Find<T>(string kind, string id, IEnumerable<T> among, Func<T, string> idOf) where T : class =>
+        among.FirstOrDefault(one => idOf(one) == Guard.NotNull(id)) ?? throw new UnknownIdException(kind, id, among.Select(idOf));
+}
+
+/// <summary>The voltage of a bus during a fault.</summary>
+/// <param name="BusId">The bus.</param>
+/// <param name="PerUnit">Line-to-earth voltage per unit on the nominal one: pre-fault voltage plus change; 0 at a de-energised bus.</param>
+/// <param name="LineToLineKv">Magnitude of the line-to-line voltage in kV.</param>
+public sealed record BusVoltage(string BusId, Complex PerUnit, double LineToLineKv);
+
+/// <summary>The currents at the ends of a branch.</summary>
+/// <param name="Section">The branch's section, such as <c>lines</c>.</param>
+/// <param name="Id">The branch's id.</param>
+/// <param name="Ends">Its ends, in the order of the network file: from and to; HV and LV; HV, MV and LV without open windings.</param>
+public sealed record BranchFlow(string Section, string Id, IReadOnlyList<BranchEnd> Ends)
+{
+    /// <summary>The current from a bus into this branch in kA.</summary>
+    /// <exception cref="UnknownIdException">The branch does not end at that bus.</exception>
+    public Complex FromBusKa(string busId) =>
+        (Ends.FirstOrDefault(end => end.BusId == busId)
+            ?? throw new UnknownIdException($"the ends of {Section} {Id}", busId, Ends.Select(end => end.BusId))).IntoBranchKa;
+}
+
+/// <summary>One end of a branch.</summary>
+/// <param name="BusId">The bus.</param>
+/// <param name="IntoBranchKa">The current from the bus into the branch in kA.</param>
+public sealed record BranchEnd(string BusId, Complex IntoBranchKa);
+
+/// <summary>The current of a feeder, machine or motor.</summary>
+/// <param name="Section">The source's section, such as <c>network_feeders</c>.</param>
+/// <param name="Id">The source's id.</param>
+/// <param name="BusId">Its bus.</param>
+/// <param name="IntoBusKa">The current from the source into the bus in kA.</param>
+public sealed record SourceFlow(string Section, string Id, string BusId, Complex IntoBusKa);
+
+/// <summary>The current through a closed coupler.</summary>
+/// <param name="Id">The coupler's id.</param>
+/// <param name="FromBusId">Its from bus.</param>
+/// <param name="ToBusId">Its to bus.</param>
+/// <param name="FromToKa">
+/// The current from the from bus to the to bus in kA; null where closed couplers make a ring, in which it divides by impedances that are
+/// not known.
+/// </param>
+public sealed record CouplerFlow(string Id, string FromBusId, string ToBusId, Complex? FromToKa);

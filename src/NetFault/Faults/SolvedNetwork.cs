@@ -1,0 +1,56 @@
+using System.Numerics;
+using NetFault.Sparse;
+
+namespace NetFault;
+
+/// <summary>One network of a study, factored: the admittances of an instant or of a part of the impedances. Immutable.</summary>
+internal sealed class SolvedNetwork
+{
+    private readonly CircuitMatrix _matrix;
+    private readonly LdlFactor _factor;
+    private readonly Lazy<DrivingPointImpedances> _drivingPoints;
+
+    private SolvedNetwork(CircuitMatrix matrix, AdmittanceValues values)
+    {
+        _matrix = matrix;
+        Values = values;
+        _factor = matrix.Factor(values);
+        _drivingPoints = new Lazy<DrivingPointImpedances>(FindDrivingPoints);
+    }
+
+    /// <summary>The admittances that were factored.</summary>
+    public AdmittanceValues Values { get; }
+
+    /// <summary>Zkk of every node, with the quality of the solution.</summary>
+    public DrivingPointImpedances DrivingPoints => _drivingPoints.Value;
+
+    /// <summary>Whether <see cref="DrivingPoints"/> are there already.</summary>
+    public bool HasDrivingPoints => _drivingPoints.IsValueCreated;
+
+    /// <summary>Factors the network of a method's source impedances.</summary>
+    public static SolvedNetwork Of(CircuitMatrix matrix, Complex?[] sources, ImpedancePart part) =>
+        new(matrix, AdmittanceValues.Of(matrix, sources, part));
+
+    /// <summary>Column k of Zbus: the voltages of all nodes for a unit current into node k.</summary>
+    /// <param name="node">k.</param>
+    /// <param name="residual">Normwise backward error of the column.</param>
+    public Complex[] Column(int node, out double residual)
+    {
+        var column = new Complex[_matrix.Circuit.NodeCount];
+        column[node] = Complex.One;
+        residual = _matrix.Guarded(() => _factor.SolveRefined(
+            Values.Diagonal, Values.OffDiagonal, column, new SolveScratch(_factor.Order)));
+        return column;
+    }
+
+    private DrivingPointImpedances FindDrivingPoints() => _matrix.Guarded(() =>
+    {
+        var inverse = SelectedInverse.Of(_factor, Values.Diagonal, Values.OffDiagonal, out var health);
+        return new DrivingPointImpedances(inverse.Diagonal.ToArray(), health.WorstResidual);
+    });
+}
+
+/// <summary>The driving-point impedances Zkk of all nodes.</summary>
+/// <param name="Impedances">Zkk by node, per unit.</param>
+/// <param name="WorstResidual">The largest |Σj Ykj·Zjk − 1| over the nodes: 0 for an exact solution.</param>
+internal sealed record DrivingPointImpedances(Complex[] Impedances, double WorstResidual);

@@ -1,0 +1,72 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// A way of calculating short-circuit currents: which impedance and driving voltage each element gets, and how the impedance at the fault
+/// becomes currents over time. Methods are immutable options; their defaults are stated with each.
+/// </summary>
+public abstract record FaultMethod
+{
+    private protected FaultMethod()
+    {
+    }
+
+    /// <summary>The method's name, as results and reports show it.</summary>
+    public abstract string Name { get; }
+
+    /// <summary>The rule by which X/R at the fault is found.</summary>
+    public XOverRRule XOverRRule { get; init; } = XOverRRule.ComplexImpedance;
+
+    /// <summary>The instants for which symmetrical currents are calculated; the initial one always is.</summary>
+    internal abstract FaultInstants CalculatedInstants { get; }
+
+    /// <summary>The voltage that drives the fault current at a bus, per unit on its nominal voltage.</summary>
+    internal abstract double DrivingVoltagePu(Bus bus);
+
+    /// <summary>The impedance of each source of a circuit at an instant, per unit; null where it is not in the network then.</summary>
+    internal abstract Complex?[] SourceImpedances(Circuit circuit, FaultInstant instant, AssumptionLog? log);
+}
+
+/// <summary>An instant of the short circuit, by the reactance of the machines that governs it.</summary>
+public enum FaultInstant
+{
+    /// <summary>The beginning: subtransient reactances, I″k.</summary>
+    Initial,
+
+    /// <summary>After the subtransient decay: transient reactances, I′k.</summary>
+    Transient,
+
+    /// <summary>The end: synchronous reactances at constant excitation, Ik.</summary>
+    SteadyState,
+}
+
+/// <summary>A choice of instants.</summary>
+[Flags]
+public enum FaultInstants
+{
+    /// <summary>I″k alone.</summary>
+    Initial = 0,
+
+    /// <summary>I′k too.</summary>
+    Transient = 1,
+
+    /// <summary>Ik too.</summary>
+    SteadyState = 2,
+
+    /// <summary>I″k, I′k and Ik.</summary>
+    All = Transient | SteadyState,
+}
+
+/// <summary>How X/R at the fault is found. The rules differ where sources of different X/R meet; no result is without its rule.</summary>
+public enum XOverRRule
+{
+    /// <summary>Im Zk / Re Zk of the complex impedance at the fault.</summary>
+    ComplexImpedance,
+
+    /// <summary>
+    /// X of the network of the reactances alone over R of the network of the resistances alone, as IEEE Std C37.010 asks for. An element
+    /// without resistance gets R = |X|/200 there, which is said to be assumed.
+    /// </summary>
+    SeparateNetworks,
+}

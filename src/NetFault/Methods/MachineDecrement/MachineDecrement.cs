@@ -1,0 +1,65 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// The textbook's method: each machine behind its subtransient, transient or synchronous reactance, all sources at one pre-fault voltage,
+/// no load current. Feeders carry no voltage factor and do not decay. Asynchronous motors are in the network of the initial current only:
+/// their AC component dies out. The DC component decays with X/R at the fault; the AC component is held at I″k.
+/// </summary>
+public sealed record MachineDecrement : FaultMethod
+{
+    private readonly double _prefaultVoltagePu = 1.0;
+
+    /// <inheritdoc/>
+    public override string Name => "Machine decrement";
+
+    /// <summary>The voltage before the fault at every bus, per unit on its nominal voltage; above 0. Default 1.0.</summary>
+    /// <exception cref="ArgumentOutOfRangeException">Not a finite number above 0.</exception>
+    public double PrefaultVoltagePu
+    {
+        get => _prefaultVoltagePu;
+        init => _prefaultVoltagePu = Guard.Positive(value, nameof(PrefaultVoltagePu));
+    }
+
+    /// <summary>The instants to calculate; each costs one factorisation. Default all three.</summary>
+    public FaultInstants Instants { get; init; } = FaultInstants.All;
+
+    internal override FaultInstants CalculatedInstants => Instants;
+
+    internal override double DrivingVoltagePu(Bus bus) => PrefaultVoltagePu;
+
+    internal override Complex?[] SourceImpedances(Circuit circuit, FaultInstant instant, AssumptionLog? log)
+    {
+        var impedances = new Complex?[circuit.Sources.Length];
+        for (var i = 0; i < impedances.Length; i++)
+            impedances[i] = Impedance(circuit.Network, circuit.Sources[i].Element, instant, log);
+        return impedances;
+    }
+
+    private static Complex? Impedance(Network network, int element, FaultInstant instant, AssumptionLog? log)
+    {
+        var kv = network.Buses[network.Topology.TerminalBus(element, 0)].NominalKv;
+        return network.Elements[element] switch
+        {
+            NetworkFeeder feeder => NetworkFeederCircuit.ImpedancePu(feeder, kv, network.BaseMva),
+            SynchronousMachine machine => Machine(machine, kv, network, instant, log),
+            AsynchronousMotor motor when instant == FaultInstant.Initial =>
+                AsynchronousMotorCircuit.ImpedancePu(motor, kv, network.BaseMva, log),
+            _ => null,
+        };
+    }
+
+    private static Complex Machine(SynchronousMachine machine, double kv, Network network, FaultInstant instant, AssumptionLog? log)
+    {
+        var reactance = instant switch
+        {
+            FaultInstant.Initial => machine.ReactancePu.Subtransient,
+            FaultInstant.Transient => SynchronousMachineCircuit.TransientReactancePu(machine, log),
+            _ => SynchronousMachineCircuit.SynchronousReactancePu(machine, log),
+        };
+        var toBase = SynchronousMachineCircuit.RatedToBase(machine, kv, network.BaseMva, log);
+        var resistance = SynchronousMachineCircuit.ArmatureResistancePu(machine, kv, network.FrequencyHz, log);
+        return new Complex(resistance * toBase, reactance * toBase);
+    }
+}

@@ -1,0 +1,57 @@
+namespace NetFault;
+
+/// <summary>Whether a fault has an X/R, and if not, why.</summary>
+public enum XOverRStatus
+{
+    /// <summary>X/R is known.</summary>
+    Known,
+
+    /// <summary>The resistance at the fault is 0 or negative: the DC component does not decay, or the data are not physical.</summary>
+    NoResistance,
+
+    /// <summary>The reactance at the fault is 0 or negative: the network looks capacitive from there.</summary>
+    NotInductive,
+
+    /// <summary>The bus is de-energised.</summary>
+    DeEnergised,
+}
+
+/// <summary>How the DC component is taken to decay.</summary>
+public enum DcDecayRule
+{
+    /// <summary>With the time constant (X/R)/ω.</summary>
+    ByXOverR,
+
+    /// <summary>Not at all: the upper bound that is taken where there is no X/R.</summary>
+    Undamped,
+}
+
+/// <summary>How the AC component is taken over time.</summary>
+public enum AcComponentRule
+{
+    /// <summary>Held at I″k: on the safe side, for the machines' AC decrement is not credited.</summary>
+    HeldAtInitial,
+}
+
+/// <summary>X/R at a fault by a named rule.</summary>
+/// <param name="XOverR">X/R, or null.</param>
+/// <param name="Status">Why there is none, where there is none.</param>
+internal readonly record struct ReactanceRatio(double? XOverR, XOverRStatus Status)
+{
+    /// <summary>A resistance below this share of |Zk| is rounding: elements without resistance leave it, and X/R would be noise.</summary>
+    private const double NoResistance = 1e-12;
+
+    /// <summary>X/R of the impedances seen from a fault.</summary>
+    public static ReactanceRatio Of(in FaultImpedances seen, XOverRRule rule) => rule == XOverRRule.SeparateNetworks
+        ? Of(seen.SeparateR.GetValueOrDefault(), seen.SeparateX.GetValueOrDefault())
+        : Of(seen.Initial.Real, seen.Initial.Imaginary);
+
+    private static ReactanceRatio Of(double r, double x)
+    {
+        if (x <= NoResistance * Math.Abs(r))
+            return new ReactanceRatio(null, XOverRStatus.NotInductive);
+        return r <= NoResistance * x
+            ? new ReactanceRatio(null, XOverRStatus.NoResistance)
+            : new ReactanceRatio(x / r, XOverRStatus.Known);
+    }
+}
