@@ -1,0 +1,34 @@
+namespace NetFault;
+
+/// <summary>
+/// Writes an every-bus result: a table for reading, CSV and JSON for other programs. Every form names method and rules, lists the assumed
+/// values and carries the caution; units stand in the column names.
+/// </summary>
+public static class FaultReport
+{
+    /// <summary>The result as a table of text.</summary>
+    /// <param name="study">The study the faults come from.</param>
+    /// <param name="faults">The faults, one row each.</param>
+    /// <param name="options">What to show; null for the defaults.</param>
+    /// <exception cref="ArgumentNullException">Study or faults are null.</exception>
+    public static string ToTable(FaultStudy study, IReadOnlyList<BusFault> faults, ReportOptions? options = null) =>
+        TableReport.Render(Guard.NotNull(study), Guard.NotNull(faults), options ?? new ReportOptions());
+
+    /// <summary>The result as CSV (RFC 4180), behind comment lines unless the options leave them out.</summary>
+    /// <param name="writer">Where to write; it is left open.</param>
+    /// <param name="study">The study the faults come from.</param>
+    /// <param name="faults">The faults, one row each.</param>
+    /// <param name="options">What to show; null for the defaults.</param>
+    /// <exception cref="ArgumentNullException">Writer, study or faults are null.</exception>
+    public static void WriteCsv(TextWriter writer, FaultStudy study, IReadOnlyList<BusFault> faults, ReportOptions? options = null) =>
+        CsvReport.Write(Guard.NotNull(writer), Guard.NotNull(study), Guard.NotNull(faults), options ?? new ReportOptions());
+
+    /// <summary>The result as JSON (RFC 8259), UTF-8.</summary>
+    /// <param name="stream">Where to write; it is left open.</param>
+    /// <param name="study">The study the faults come from.</param>
+    /// <param name="faults">The faults, one object each.</param>
+    /// <param name="options">What to show; null for the defaults.</param>
+    /// <exception cref="ArgumentNullException">Stream, study or faults are null.</exception>
+    public static void WriteJson(Stream stream, FaultStudy study, IReadOnlyList<BusFault> faults, ReportOptions? options = null) =>
+        JsonReport.Write(Guard.NotNull(stream), Guard.NotNull(study), Guard.NotNull(faults), options ?? new ReportOptions());
+}

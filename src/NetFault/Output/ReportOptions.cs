@@ -1,0 +1,25 @@
+namespace NetFault;
+
+/// <summary>What a report shows beside the fixed columns. Immutable.</summary>
+public sealed record ReportOptions
+{
+    private readonly IReadOnlyList<double> _instantsSeconds = [0.05, 0.1];
+
+    /// <summary>
+    /// The times after the beginning of the fault, in seconds, at which DC component and asymmetrical RMS are given: commonly those of contact
+    /// parting. Default 0.05 s and 0.1 s.
+    /// </summary>
+    /// <exception cref="ArgumentOutOfRangeException">A time is negative or not finite.</exception>
+    public IReadOnlyList<double> InstantsSeconds
+    {
+        get => _instantsSeconds;
+        init => _instantsSeconds = Array.AsReadOnly(
+            Guard.NotNull(value, nameof(InstantsSeconds)).Select(one => Guard.NotNegative(one, nameof(InstantsSeconds))).ToArray());
+    }
+
+    /// <summary>
+    /// Whether a CSV file begins with lines behind <c>#</c> that say network, method, assumptions and caution. Default true; without them
+    /// the file is plain RFC 4180.
+    /// </summary>
+    public bool CsvComments { get; init; } = true;
+}
