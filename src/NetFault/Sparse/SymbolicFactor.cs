@@ -17,6 +17,7 @@ internal sealed unsafe class SymbolicFactor
         ColumnStart = columnStart;
         RowIndex = new int[columnStart[columnStart.Length - 1]];
         PositionOfSlot = new int[pattern.SlotCount];
+        Supernodes = Supernodes.Find(parent, columnStart);
     }
 
     /// <summary>The pattern that was analysed.</summary>
@@ -45,6 +46,9 @@ internal sealed unsafe class SymbolicFactor
 
     /// <summary>The position in <see cref="RowIndex"/> of each slot of the pattern.</summary>
     public int[] PositionOfSlot { get; }
+
+    /// <summary>The dense blocks of L.</summary>
+    public Supernodes Supernodes { get; }
 
     /// <summary>Orders the nodes for little fill and works out the pattern of L. O(entries of L), but for the ordering.</summary>
     public static SymbolicFactor Analyze(SymmetricPattern pattern)
