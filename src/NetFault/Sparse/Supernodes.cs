@@ -36,7 +36,9 @@ internal sealed class Supernodes
     public static Supernodes Find(int[] parent, int[] columnStart)
     {
         int n = parent.Length, count = 0;
-        int[] first = new int[n + 1], supernodeOf = new int[n];
+        using var starts = new Scratch<int>(n + 1);
+        using var owners = new Scratch<int>(n + 1);
+        Span<int> first = starts.Span, supernodeOf = owners.Span;
         for (int j = 0; j < n; j++)
         {
             if (j == 0 || !Continues(j, parent, columnStart))
@@ -48,14 +50,13 @@ internal sealed class Supernodes
         }
 
         first[count] = n;
-        Array.Resize(ref first, count + 1);
-        return PlaceFronts(first, supernodeOf, parent, columnStart);
+        return PlaceFronts(first.Slice(0, count + 1).ToArray(), supernodeOf, parent, columnStart);
     }
 
     private static bool Continues(int j, int[] parent, int[] columnStart) =>
         parent[j - 1] == j && columnStart[j] - columnStart[j - 1] == columnStart[j + 1] - columnStart[j] + 1;
 
-    private static Supernodes PlaceFronts(int[] first, int[] supernodeOf, int[] parent, int[] columnStart)
+    private static Supernodes PlaceFronts(int[] first, ReadOnlySpan<int> supernodeOf, int[] parent, int[] columnStart)
     {
         int count = first.Length - 1;
         int[] above = new int[count];

@@ -1,4 +1,3 @@
-using System.Buffers;
 using System.Numerics;
 
 namespace NetFault.Sparse;
@@ -17,9 +16,8 @@ internal static unsafe class TakahashiRecursion
     {
         SymbolicFactor symbolic = factor.Symbolic;
         Supernodes supernodes = symbolic.Supernodes;
-        int places = symbolic.Order + 1;
-        Complex[] fronts = ArrayPool<Complex>.Shared.Rent(checked((int)supernodes.FrontSpace));
-        int[] local = ArrayPool<int>.Shared.Rent(places);
+        using var fronts = new Scratch<Complex>(checked((int)supernodes.FrontSpace + 1));
+        using var local = new Scratch<int>(symbolic.Order + 1);
         fixed (int* columns = symbolic.ColumnStart, rows = symbolic.RowIndex, first = supernodes.First, place = local,
             nodeAt = symbolic.NodeAt)
         fixed (Complex* l = factor.Lower, z = below, inversePivot = factor.InversePivot, f = fronts, zd = diagonal)
@@ -37,9 +35,6 @@ internal static unsafe class TakahashiRecursion
                 step.Columns(s, front);
             }
         }
-
-        ArrayPool<Complex>.Shared.Return(fronts);
-        ArrayPool<int>.Shared.Return(local);
     }
 
     /// <summary>A front holds its lower triangle by columns, in a square: the entry (row b, column a ≤ b) at a·size + b.</summary>
