@@ -43,6 +43,21 @@ internal sealed class AdmittanceValues
         return new AdmittanceValues(branches, sources, diagonal, offDiagonal);
     }
 
+    /// <summary>The largest admittance of a branch or source at each node.</summary>
+    public double[] LargestAdmittances(Circuit circuit)
+    {
+        var largest = new double[circuit.NodeCount];
+        for (var i = 0; i < Branches.Length; i++)
+        {
+            var size = Complex.Abs(Branches[i]);
+            largest[circuit.Branches[i].From] = Math.Max(largest[circuit.Branches[i].From], size);
+            largest[circuit.Branches[i].To] = Math.Max(largest[circuit.Branches[i].To], size);
+        }
+        for (var i = 0; i < Sources.Length; i++)
+            largest[circuit.Sources[i].Node] = Math.Max(largest[circuit.Sources[i].Node], Complex.Abs(Sources[i]));
+        return largest;
+    }
+
     private static void Stamp(in CircuitBranch branch, Complex y, int slot, Complex[] diagonal, Complex[] offDiagonal)
     {
         double a = branch.FromRatio, b = branch.ToRatio;

@@ -16,6 +16,7 @@ internal sealed class Circuit
         Branches = branches;
         BranchImpedances = impedances;
         Sources = sources;
+        HasNegativeReactance = Array.Exists(impedances, z => z.Imaginary < 0.0);
     }
 
     /// <summary>The network it was built from.</summary>
@@ -35,6 +36,9 @@ internal sealed class Circuit
     /// in the order HV, MV, LV.
     /// </summary>
     public Complex[] BranchImpedances { get; }
+
+    /// <summary>Whether reactances of opposite sign might cancel.</summary>
+    public bool HasNegativeReactance { get; }
 
     /// <summary>Where sources stand: feeders, synchronous machines, asynchronous motors. Their impedances are the method's.</summary>
     public CircuitSource[] Sources { get; }

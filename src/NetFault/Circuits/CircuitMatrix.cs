@@ -1,3 +1,4 @@
+using System.Numerics;
 using NetFault.Sparse;
 
 namespace NetFault;
@@ -5,6 +6,9 @@ namespace NetFault;
 /// <summary>Where a circuit's branches stand in its admittance matrix, with the matrix's symbolic factor: made once for all its networks.</summary>
 internal sealed class CircuitMatrix
 {
+    /// <summary>Below this share of the smallest branch impedance an impedance is rounding.</summary>
+    private const double Resonance = 1e-12;
+
     private CircuitMatrix(Circuit circuit, int[] slotOfBranch, SymbolicFactor symbolic)
     {
         Circuit = circuit;
@@ -54,6 +58,23 @@ internal sealed class CircuitMatrix
         catch (SingularMatrixException singular)
         {
             throw new SingularNetworkException(BusesOf(singular.Node), singular);
+        }
+    }
+
+    /// <summary>
+    /// Refuses a network that has no impedance seen from one of these nodes: reactances of opposite sign are in resonance there, so that Zkk
+    /// is 0 but for rounding against the impedances of the branches at the node.
+    /// </summary>
+    /// <exception cref="SingularNetworkException">There is such a node.</exception>
+    public void RefuseResonance(AdmittanceValues values, ReadOnlySpan<Complex> impedances, int firstNode = 0)
+    {
+        if (!Circuit.HasNegativeReactance)
+            return;
+        var largest = values.LargestAdmittances(Circuit);
+        for (var i = 0; i < impedances.Length; i++)
+        {
+            if (Complex.Abs(impedances[i]) * largest[firstNode + i] < Resonance)
+                throw new SingularNetworkException(BusesOf(firstNode + i), null);
         }
     }
 

@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.ExceptionServices;
 
 namespace NetFault;
 
@@ -31,15 +32,28 @@ internal sealed class EveryBusSolution
     {
         var wanted = NetworksNeeded.Of(_context.Method);
         var impedances = new DrivingPointImpedances[wanted.Count];
-        Parallel.For(0, wanted.Count, new ParallelOptions { CancellationToken = _cancellation }, i =>
+        SideBySide(wanted.Count, i =>
         {
-            _cancellation.ThrowIfCancellationRequested();
             impedances[i] = wanted[i].Choose(_networks).DrivingPoints;
             _progress?.Report(new StudyProgress(Interlocked.Increment(ref _done), wanted.Count + 1, wanted[i].Name));
         });
         var results = Results(new NodeImpedances(wanted, impedances));
         _progress?.Report(new StudyProgress(wanted.Count + 1, wanted.Count + 1, "currents"));
         return Array.AsReadOnly(results);
+    }
+
+    /// <summary>Runs the steps on the cores there are; a step's exception comes out as it is, not gathered in another.</summary>
+    private void SideBySide(int count, Action<int> step)
+    {
+        _cancellation.ThrowIfCancellationRequested();
+        try
+        {
+            Parallel.For(0, count, new ParallelOptions { CancellationToken = _cancellation }, step);
+        }
+        catch (AggregateException gathered)
+        {
+            ExceptionDispatchInfo.Capture(gathered.InnerExceptions[0]).Throw();
+        }
     }
 
     private BusFault[] Results(NodeImpedances impedances)

@@ -40,12 +40,14 @@ internal sealed class SolvedNetwork
         column[node] = Complex.One;
         residual = _matrix.Guarded(() => _factor.SolveRefined(
             Values.Diagonal, Values.OffDiagonal, column, new SolveScratch(_factor.Order)));
+        _matrix.RefuseResonance(Values, column.AsSpan(node, 1), node);
         return column;
     }
 
     private DrivingPointImpedances FindDrivingPoints() => _matrix.Guarded(() =>
     {
         var inverse = SelectedInverse.Of(_factor, Values.Diagonal, Values.OffDiagonal, out var health);
+        _matrix.RefuseResonance(Values, inverse.Diagonal);
         return new DrivingPointImpedances(inverse.Diagonal.ToArray(), health.WorstResidual);
     });
 }

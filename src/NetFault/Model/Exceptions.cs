@@ -43,11 +43,11 @@ public sealed class UnknownIdException : ArgumentException
 }
 
 /// <summary>
-/// The network's equations are singular to working precision, so that it has no solution: reactances of opposite sign cancel.
+/// The network's equations have no solution, or an infinite current for one: reactances of opposite sign cancel to working precision.
 /// </summary>
 public sealed class SingularNetworkException : Exception
 {
-    internal SingularNetworkException(IReadOnlyList<string> busIds, Exception inner)
+    internal SingularNetworkException(IReadOnlyList<string> busIds, Exception? inner)
         : base(
             $"The network has no solution: at bus {string.Join(" = ", busIds.Select(id => $"\"{id}\""))} the admittances cancel to working "
             + "precision. Look for negative reactances (series compensation, equivalent legs) that are equal and opposite to others there.",
