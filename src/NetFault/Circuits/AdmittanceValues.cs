@@ -25,11 +25,11 @@ internal sealed class AdmittanceValues
     /// <summary>Ybus below the diagonal, by slot of the pattern.</summary>
     public Complex[] OffDiagonal { get; }
 
-    /// <summary>The values of the network with these source impedances, of one part of the impedances.</summary>
-    public static AdmittanceValues Of(CircuitMatrix matrix, Complex?[] sourceImpedances, ImpedancePart part)
+    /// <summary>The values of a network: the sources' impedances as they are in it, the branches' at rated frequency.</summary>
+    public static AdmittanceValues Of(CircuitMatrix matrix, Complex?[] sourceImpedances, NetworkVariant variant)
     {
         var circuit = matrix.Circuit;
-        var branches = NetworkAdmittances.OfBranches(circuit, part);
+        var branches = NetworkAdmittances.OfBranches(circuit, variant);
         var sources = new Complex[sourceImpedances.Length];
         var diagonal = new Complex[circuit.NodeCount];
         var offDiagonal = new Complex[matrix.Symbolic.Pattern.SlotCount];
@@ -37,7 +37,7 @@ internal sealed class AdmittanceValues
             Stamp(circuit.Branches[i], branches[i], matrix.SlotOfBranch[i], diagonal, offDiagonal);
         for (var i = 0; i < sources.Length; i++)
         {
-            sources[i] = NetworkAdmittances.OfSource(sourceImpedances[i], part);
+            sources[i] = NetworkAdmittances.OfSource(sourceImpedances[i], variant.Part);
             diagonal[circuit.Sources[i].Node] += sources[i];
         }
         return new AdmittanceValues(branches, sources, diagonal, offDiagonal);

@@ -7,6 +7,7 @@ internal sealed class CircuitBuilder
 {
     private readonly Network _network;
     private readonly NetworkTopology _topology;
+    private readonly BranchRules _rules;
     private readonly AssumptionLog? _log;
     private readonly int[] _nodeOfBus;
     private readonly List<CircuitBranch> _branches;
@@ -14,10 +15,11 @@ internal sealed class CircuitBuilder
     private readonly List<CircuitSource> _sources = [];
     private readonly int _nodeCount;
 
-    private CircuitBuilder(Network network, AssumptionLog? log)
+    private CircuitBuilder(Network network, BranchRules rules, AssumptionLog? log)
     {
         _network = network;
         _topology = network.Topology;
+        _rules = rules;
         _log = log;
         _nodeOfBus = NumberEnergisedNodes(out _nodeCount);
         _branches = new List<CircuitBranch>(network.Elements.Count);
@@ -26,10 +28,11 @@ internal sealed class CircuitBuilder
 
     /// <summary>The circuit of a network.</summary>
     /// <param name="network">The network.</param>
+    /// <param name="rules">What the method changes about branch impedances.</param>
     /// <param name="log">Where assumed values are noted; null where nobody reads them.</param>
-    public static Circuit Build(Network network, AssumptionLog? log)
+    public static Circuit Build(Network network, BranchRules rules, AssumptionLog? log)
     {
-        var builder = new CircuitBuilder(network, log);
+        var builder = new CircuitBuilder(network, rules, log);
         builder.AddBranches(network.Transformers, builder.AddTransformer);
         builder.AddBranches(network.ThreeWindingTransformers, builder.AddThreeWindingTransformer);
         builder.AddBranches(network.Lines, builder.AddLine);
@@ -77,11 +80,11 @@ internal sealed class CircuitBuilder
     {
         double hvKv = Kv(element, 0), lvKv = Kv(element, 1);
         AddSeries(element, 0, 1, TransformerCircuit.Ratio(transformer, hvKv, lvKv),
-            TransformerCircuit.SeriesPu(transformer, hvKv, _network.BaseMva));
+            _rules.Transformer(transformer, TransformerCircuit.SeriesPu(transformer, hvKv, _network.BaseMva)));
     }
 
     private void AddLine(Line line, int element) =>
-        AddSeries(element, 0, 1, 1.0, LineCircuit.SeriesPu(line, Kv(element, 0), _network.BaseMva));
+        AddSeries(element, 0, 1, 1.0, _rules.Line(line, LineCircuit.SeriesPu(line, Kv(element, 0), _network.BaseMva), _log));
 
     private void AddSeriesReactor(SeriesReactor reactor, int element) =>
         AddSeries(element, 0, 1, 1.0, SeriesReactorCircuit.SeriesPu(reactor, Kv(element, 0), _network.BaseMva, _log));
@@ -101,8 +104,7 @@ internal sealed class CircuitBuilder
     /// <summary>With one winding open, the other two are a transformer of two windings.</summary>
     private void AddPair(ThreeWindingTransformer transformer, int element, byte from, byte to)
     {
-        var impedance = ThreeWindingTransformerCircuit.PairOf(transformer, from, to)
-            .PerUnitOn(RatedKv(transformer, from), Kv(element, from), _network.BaseMva);
+        var impedance = PairImpedance(transformer, element, from, to, referredTo: from);
         AddSeries(element, from, to, Ratio(transformer, element, from, to), impedance);
     }
 
@@ -112,14 +114,20 @@ internal sealed class CircuitBuilder
     /// </summary>
     private void AddStar(ThreeWindingTransformer transformer, int element)
     {
-        var ratedKv = RatedKv(transformer, 0);
-        Complex Pair(int one, int other) =>
-            ThreeWindingTransformerCircuit.PairOf(transformer, one, other).PerUnitOn(ratedKv, Kv(element, 0), _network.BaseMva);
+        Complex Pair(int one, int other) => PairImpedance(transformer, element, one, other, referredTo: 0);
         var legs = ThreeWindingTransformerCircuit.Legs(Pair(0, 1), Pair(0, 2), Pair(1, 2));
         double mvRatio = Ratio(transformer, element, 0, 1), lvRatio = Ratio(transformer, element, 0, 2);
         Add(element, 0, 1, 1.0, mvRatio, BranchKind.StarFirst, legs.Hv);
         Add(element, 0, 2, 1.0, lvRatio, BranchKind.StarNext, legs.Mv);
         Add(element, 1, 2, mvRatio, lvRatio, BranchKind.StarNext, legs.Lv);
+    }
+
+    private Complex PairImpedance(ThreeWindingTransformer transformer, int element, int one, int other, int referredTo)
+    {
+        var pair = ThreeWindingTransformerCircuit.PairOf(transformer, one, other);
+        var lower = RatedKv(transformer, one) < RatedKv(transformer, other) ? one : other;
+        return _rules.Windings(pair, _network.Buses[_topology.TerminalBus(element, lower)],
+            pair.PerUnitOn(RatedKv(transformer, referredTo), Kv(element, referredTo), _network.BaseMva));
     }
 
     private double Ratio(ThreeWindingTransformer transformer, int element, int from, int to) =>

@@ -25,22 +25,32 @@ internal static class NetworkAdmittances
     public const double AssumedShare = 1.0 / 200.0;
 
     /// <summary>The admittance of each branch.</summary>
-    public static Complex[] OfBranches(Circuit circuit, ImpedancePart part)
+    public static Complex[] OfBranches(Circuit circuit, NetworkVariant variant)
     {
+        var part = variant.Part;
+        var impedances = AtFrequency(circuit, variant.FrequencyRatio);
         var admittances = new Complex[circuit.Branches.Length];
         for (var i = 0; i < admittances.Length; i++)
         {
             switch (circuit.Branches[i].Kind)
             {
                 case BranchKind.Series:
-                    admittances[i] = Reciprocal(Part(circuit.BranchImpedances[i], part));
+                    admittances[i] = Reciprocal(Part(impedances[i], part));
                     break;
                 case BranchKind.StarFirst:
-                    StarToDelta(circuit.BranchImpedances, admittances, i, part);
+                    StarToDelta(impedances, admittances, i, part);
                     break;
             }
         }
         return admittances;
+    }
+
+    /// <summary>The branch impedances with their reactances at another frequency.</summary>
+    private static Complex[] AtFrequency(Circuit circuit, double ratio)
+    {
+        if (ratio.Equals(1.0))
+            return circuit.BranchImpedances;
+        return Array.ConvertAll(circuit.BranchImpedances, z => new Complex(z.Real, z.Imaginary * ratio));
     }
 
     /// <summary>The admittance of a source; 0 where it is not in the network at the instant.</summary>

@@ -10,24 +10,20 @@ public sealed class BusFault
 {
     private readonly StudyContext _context;
     private readonly int _bus;
-    private readonly FaultImpedances _impedances;
+    private readonly FaultCurrents? _currents;
 
-    internal BusFault(StudyContext context, int bus, in FaultImpedances impedances, Complex faultImpedanceOhm)
+    internal BusFault(StudyContext context, int bus, in SeenImpedances seen, Complex faultImpedanceOhm)
     {
         _context = context;
         _bus = bus;
-        _impedances = impedances;
+        _currents = context.Method.Currents(context, bus, seen);
         FaultImpedanceOhm = faultImpedanceOhm;
-        IsEnergised = true;
-        InitialSymmetricalKa = context.CurrentKa(Bus, impedances.Initial);
-        Ratio = ReactanceRatio.Of(impedances, context.Method.XOverRRule);
     }
 
     private BusFault(StudyContext context, int bus)
     {
         _context = context;
         _bus = bus;
-        Ratio = new ReactanceRatio(null, XOverRStatus.DeEnergised);
     }
 
     /// <summary>The bus at which the fault is.</summary>
@@ -40,16 +36,16 @@ public sealed class BusFault
     public double NominalKv => Bus.NominalKv;
 
     /// <summary>False where the bus has no path to a source: then all currents are 0 and there is no impedance.</summary>
-    public bool IsEnergised { get; }
+    public bool IsEnergised => _currents is not null;
 
     /// <summary>The initial symmetrical short-circuit current I″k: the AC component at the beginning.</summary>
-    public double InitialSymmetricalKa { get; }
+    public double InitialSymmetricalKa => _currents?.InitialSymmetricalKa ?? 0.0;
 
     /// <summary>The transient short-circuit current I′k: the AC component after the subtransient decay; null where it was not asked for.</summary>
-    public double? TransientKa => CurrentKa(_impedances.Transient, FaultInstants.Transient);
+    public double? TransientKa => _currents is null ? ZeroIf(FaultInstants.Transient) : _currents.TransientKa;
 
     /// <summary>The steady-state short-circuit current Ik, at constant excitation; null where it was not asked for.</summary>
-    public double? SteadyStateKa => CurrentKa(_impedances.SteadyState, FaultInstants.SteadyState);
+    public double? SteadyStateKa => _currents is null ? ZeroIf(FaultInstants.SteadyState) : _currents.SteadyStateKa;
 
     /// <summary>The short-circuit power S″k = √3·Un·I″k in MVA.</summary>
     public double ShortCircuitMva => PerUnit.Sqrt3 * NominalKv * InitialSymmetricalKa;
@@ -58,10 +54,10 @@ public sealed class BusFault
     /// The short-circuit impedance Zk at the beginning, with the fault's own impedance, per unit on the network's base power and the bus's
     /// nominal voltage; null at a de-energised bus.
     /// </summary>
-    public Complex? ImpedancePu => IsEnergised ? _impedances.Initial : null;
+    public Complex? ImpedancePu => _currents?.ImpedancePu;
 
     /// <summary>The short-circuit impedance Zk in ohm; null at a de-energised bus.</summary>
-    public Complex? ImpedanceOhm => IsEnergised ? _impedances.Initial * _context.BaseOhm(Bus) : null;
+    public Complex? ImpedanceOhm => _currents?.ImpedancePu * _context.BaseOhm(Bus);
 
     /// <summary>The impedance of the fault itself in ohm; 0 for a bolted fault.</summary>
     public Complex FaultImpedanceOhm { get; }
@@ -73,27 +69,27 @@ public sealed class BusFault
     public XOverRStatus XOverRStatus => Ratio.Status;
 
     /// <summary>The rule by which X/R was found.</summary>
-    public XOverRRule XOverRRule => _context.Method.XOverRRule;
+    public XOverRRule XOverRRule => _context.Method.RatioRule;
 
     /// <summary>How the DC component, and with it the peak, is taken to decay.</summary>
     public DcDecayRule DcDecayRule => XOverR.HasValue ? DcDecayRule.ByXOverR : DcDecayRule.Undamped;
 
     /// <summary>How the AC component is taken over time.</summary>
-    public AcComponentRule AcComponentRule => AcComponentRule.HeldAtInitial;
+    public AcComponentRule AcComponentRule => _currents?.AcComponentRule ?? AcComponentRule.HeldAtInitial;
 
     /// <summary>
     /// The peak short-circuit current ip, an instantaneous value in kA: the exact maximum over time for a fault at voltage zero, with the
     /// AC component held at I″k and the DC component by <see cref="DcDecayRule"/>; 2√2·I″k where that is undamped.
     /// </summary>
-    public double PeakKa => InitialSymmetricalKa * (XOverR is { } ratio ? PeakFactor.Of(ratio) : PeakFactor.Undamped);
+    public double PeakKa => _currents?.PeakKa ?? 0.0;
 
     /// <summary>The largest residual of the solutions behind this result: 0 for exact ones, about 1e-15 to 1e-12 for good ones.</summary>
-    public double SolutionResidual => _impedances.Residual;
+    public double SolutionResidual => _currents?.Residual ?? 0.0;
 
     /// <summary>What this result rests on that the network does not say: the assumed values of its connected part of the network.</summary>
     public IReadOnlyList<Assumption> Assumptions => IsEnergised ? _context.Assumptions.OfBus(_bus) : [];
 
-    internal ReactanceRatio Ratio { get; }
+    private ReactanceRatio Ratio => _currents?.Ratio ?? new ReactanceRatio(null, XOverRStatus.DeEnergised);
 
     /// <summary>
     /// The DC component of the phase with the largest one, i_dc(t) = √2·I″k·e^(−ω·t/(X/R)) in kA, an instantaneous value; undamped where
@@ -104,8 +100,7 @@ public sealed class BusFault
     public double DcComponentKa(double seconds)
     {
         Guard.NotNegative(seconds);
-        var decay = XOverR is { } ratio ? Math.Exp(-_context.Omega * seconds / ratio) : 1.0;
-        return PerUnit.Sqrt2 * InitialSymmetricalKa * decay;
+        return _currents?.DcComponentKa(seconds) ?? 0.0;
     }
 
     /// <summary>The RMS value of the AC component in kA: I″k at all times, as <see cref="AcComponentRule"/> says.</summary>
@@ -114,7 +109,7 @@ public sealed class BusFault
     public double SymmetricalRmsKa(double seconds)
     {
         Guard.NotNegative(seconds);
-        return InitialSymmetricalKa;
+        return _currents?.SymmetricalRmsKa(seconds) ?? 0.0;
     }
 
     /// <summary>The asymmetrical (total) RMS value √(Iac² + i_dc²) in kA.</summary>
@@ -131,10 +126,5 @@ public sealed class BusFault
 
     internal static BusFault DeEnergised(StudyContext context, int bus) => new(context, bus);
 
-    private double? CurrentKa(Complex? impedance, FaultInstants instant)
-    {
-        if (!IsEnergised)
-            return _context.Method.CalculatedInstants.HasFlag(instant) ? 0.0 : null;
-        return impedance is { } z ? _context.CurrentKa(Bus, z) : null;
-    }
+    private double? ZeroIf(FaultInstants instant) => _context.Method.CalculatedInstants.HasFlag(instant) ? 0.0 : null;
 }

@@ -30,14 +30,14 @@ internal sealed class EveryBusSolution
     /// <summary>Solves and gathers the results.</summary>
     public IReadOnlyList<BusFault> Run()
     {
-        var wanted = NetworksNeeded.Of(_context.Method);
+        var wanted = _context.Method.Networks;
         var impedances = new DrivingPointImpedances[wanted.Count];
         SideBySide(wanted.Count, i =>
         {
-            impedances[i] = wanted[i].Choose(_networks).DrivingPoints;
+            impedances[i] = _networks.Of(wanted[i]).DrivingPoints;
             _progress?.Report(new StudyProgress(Interlocked.Increment(ref _done), wanted.Count + 1, wanted[i].Name));
         });
-        var results = Results(new NodeImpedances(wanted, impedances));
+        var results = Results(wanted, impedances);
         _progress?.Report(new StudyProgress(wanted.Count + 1, wanted.Count + 1, "currents"));
         return Array.AsReadOnly(results);
     }
@@ -56,7 +56,7 @@ internal sealed class EveryBusSolution
         }
     }
 
-    private BusFault[] Results(NodeImpedances impedances)
+    private BusFault[] Results(IReadOnlyList<NetworkVariant> variants, DrivingPointImpedances[] impedances)
     {
         var buses = _context.Network.Buses;
         var results = new BusFault[buses.Count];
@@ -67,7 +67,7 @@ internal sealed class EveryBusSolution
             var node = _networks.Circuit.NodeOfBus[bus];
             results[bus] = node < 0
                 ? BusFault.DeEnergised(_context, bus)
-                : new BusFault(_context, bus, impedances.At(node), Complex.Zero);
+                : new BusFault(_context, bus, new SeenImpedances(variants, impedances, node, Complex.Zero), Complex.Zero);
         }
         return results;
     }

@@ -20,11 +20,10 @@ internal sealed class OneBusSolution
         var node = _networks.Circuit.NodeOfBus[bus];
         if (node < 0)
             return BusFault.DeEnergised(_context, bus);
-        var wanted = NetworksNeeded.Of(_context.Method);
-        var impedances = wanted.Select(one => At(one.Choose(_networks), node)).ToArray();
-        var seen = new NodeImpedances(wanted, impedances).At(0);
+        var wanted = _context.Method.Networks;
+        var impedances = wanted.Select(one => At(_networks.Of(one), node)).ToArray();
         var fault = faultImpedanceOhm / _context.BaseOhm(_context.Network.Buses[bus]);
-        return new BusFault(_context, bus, seen.Plus(fault), faultImpedanceOhm);
+        return new BusFault(_context, bus, new SeenImpedances(wanted, impedances, 0, fault), faultImpedanceOhm);
     }
 
     private static DrivingPointImpedances At(SolvedNetwork network, int node)

@@ -27,9 +27,9 @@ internal sealed class SolvedNetwork
     /// <summary>Whether <see cref="DrivingPoints"/> are there already.</summary>
     public bool HasDrivingPoints => _drivingPoints.IsValueCreated;
 
-    /// <summary>Factors the network of a method's source impedances.</summary>
-    public static SolvedNetwork Of(CircuitMatrix matrix, Complex?[] sources, ImpedancePart part) =>
-        new(matrix, AdmittanceValues.Of(matrix, sources, part));
+    /// <summary>Factors a network of a method.</summary>
+    public static SolvedNetwork Of(CircuitMatrix matrix, FaultMethod method, NetworkVariant variant) =>
+        new(matrix, AdmittanceValues.Of(matrix, method.SourceImpedances(matrix.Circuit, variant, log: null), variant));
 
     /// <summary>Column k of Zbus: the voltages of all nodes for a unit current into node k.</summary>
     /// <param name="node">k.</param>

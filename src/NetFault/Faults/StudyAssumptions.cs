@@ -26,25 +26,16 @@ internal sealed class StudyAssumptions
     private (IReadOnlyList<Assumption> All, Dictionary<int, IReadOnlyList<Assumption>> OfIsland) Gather()
     {
         var log = new AssumptionLog();
-        var circuit = CircuitBuilder.Build(_network, log);
-        foreach (var instant in Instants())
-            _method.SourceImpedances(circuit, instant, log);
-        if (_method.XOverRRule == XOverRRule.SeparateNetworks)
+        var circuit = CircuitBuilder.Build(_network, _method.BranchRules(_network), log);
+        foreach (var variant in _method.Networks)
+            _method.SourceImpedances(circuit, variant, log);
+        if (_method.RatioRule == XOverRRule.SeparateNetworks)
             LogShares(circuit, log);
         var entries = log.Entries.Distinct().ToList();
         var ofIsland = entries
             .GroupBy(entry => IslandOfBus(FirstBus(entry.Element)))
             .ToDictionary(group => group.Key, group => (IReadOnlyList<Assumption>)group.Select(entry => entry.Assumption).ToList().AsReadOnly());
         return (entries.Select(entry => entry.Assumption).ToList().AsReadOnly(), ofIsland);
-    }
-
-    private IEnumerable<FaultInstant> Instants()
-    {
-        yield return FaultInstant.Initial;
-        if (_method.CalculatedInstants.HasFlag(FaultInstants.Transient))
-            yield return FaultInstant.Transient;
-        if (_method.CalculatedInstants.HasFlag(FaultInstants.SteadyState))
-            yield return FaultInstant.SteadyState;
     }
 
     /// <summary>Elements without resistance, or without reactance, get a share of the other one in the separate networks.</summary>
@@ -57,7 +48,7 @@ internal sealed class StudyAssumptions
             else if (circuit.Branches[i].Kind == BranchKind.StarFirst && NetworkAdmittances.StarHasNoResistance(circuit.BranchImpedances, i))
                 LogShare(new(0.0, 1.0), _network.Elements[circuit.Branches[i].Element], log);
         }
-        var sources = _method.SourceImpedances(circuit, FaultInstant.Initial, log: null);
+        var sources = _method.SourceImpedances(circuit, _method.Networks[0], log: null);
         for (var i = 0; i < sources.Length; i++)
         {
             if (sources[i] is { } impedance)

@@ -16,16 +16,28 @@ public abstract record FaultMethod
     public abstract string Name { get; }
 
     /// <summary>The rule by which X/R at the fault is found.</summary>
-    public XOverRRule XOverRRule { get; init; } = XOverRRule.ComplexImpedance;
+    internal abstract XOverRRule RatioRule { get; }
 
     /// <summary>The instants for which symmetrical currents are calculated; the initial one always is.</summary>
     internal abstract FaultInstants CalculatedInstants { get; }
 
+    /// <summary>The networks that every result of this method needs; the initial one first.</summary>
+    internal abstract IReadOnlyList<NetworkVariant> Networks { get; }
+
+    /// <summary>The network of an instant.</summary>
+    internal abstract NetworkVariant NetworkAt(FaultInstant instant);
+
+    /// <summary>What the method changes about the impedances of branches.</summary>
+    internal virtual BranchRules BranchRules(Network network) => new();
+
     /// <summary>The voltage that drives the fault current at a bus, per unit on its nominal voltage.</summary>
     internal abstract double DrivingVoltagePu(Bus bus);
 
-    /// <summary>The impedance of each source of a circuit at an instant, per unit; null where it is not in the network then.</summary>
-    internal abstract Complex?[] SourceImpedances(Circuit circuit, FaultInstant instant, AssumptionLog? log);
+    /// <summary>The impedance of each source of a circuit in a network, per unit; null where it is not in it.</summary>
+    internal abstract Complex?[] SourceImpedances(Circuit circuit, NetworkVariant variant, AssumptionLog? log);
+
+    /// <summary>The currents of a fault at a bus, from the impedances seen there in <see cref="Networks"/>.</summary>
+    internal abstract FaultCurrents Currents(StudyContext context, int bus, in SeenImpedances seen);
 }
 
 /// <summary>An instant of the short circuit, by the reactance of the machines that governs it.</summary>

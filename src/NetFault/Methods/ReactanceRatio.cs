@@ -41,12 +41,8 @@ internal readonly record struct ReactanceRatio(double? XOverR, XOverRStatus Stat
     /// <summary>A resistance below this share of |Zk| is rounding: elements without resistance leave it, and X/R would be noise.</summary>
     private const double NoResistance = 1e-12;
 
-    /// <summary>X/R of the impedances seen from a fault.</summary>
-    public static ReactanceRatio Of(in FaultImpedances seen, XOverRRule rule) => rule == XOverRRule.SeparateNetworks
-        ? Of(seen.SeparateR.GetValueOrDefault(), seen.SeparateX.GetValueOrDefault())
-        : Of(seen.Initial.Real, seen.Initial.Imaginary);
-
-    private static ReactanceRatio Of(double r, double x)
+    /// <summary>X/R of a resistance and a reactance.</summary>
+    public static ReactanceRatio Of(double r, double x)
     {
         if (x <= NoResistance * Math.Abs(r))
             return new ReactanceRatio(null, XOverRStatus.NotInductive);

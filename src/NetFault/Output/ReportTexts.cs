@@ -10,7 +10,7 @@ internal static class ReportTexts
 
     /// <summary>How the method treats AC and DC over time, in one line.</summary>
     public static string MethodLine(FaultMethod method) =>
-        $"Method: {method.Name}; X/R by {RuleName(method.XOverRRule)}; DC component by X/R; AC component held at I″k over time.";
+        $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; DC component by X/R; AC component held at I″k over time.";
 
     /// <summary>An X/R rule in words.</summary>
     public static string RuleName(XOverRRule rule) => rule == XOverRRule.SeparateNetworks

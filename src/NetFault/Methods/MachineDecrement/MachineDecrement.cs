@@ -9,6 +9,12 @@ namespace NetFault;
 /// </summary>
 public sealed record MachineDecrement : FaultMethod
 {
+    internal static readonly NetworkVariant Initial = new() { Name = "initial network" };
+    internal static readonly NetworkVariant Transient = new() { Name = "transient network", Instant = FaultInstant.Transient };
+    internal static readonly NetworkVariant SteadyState = new() { Name = "steady-state network", Instant = FaultInstant.SteadyState };
+    internal static readonly NetworkVariant Reactances = new() { Name = "network of the reactances", Part = ImpedancePart.Reactance };
+    internal static readonly NetworkVariant Resistances = new() { Name = "network of the resistances", Part = ImpedancePart.Resistance };
+
     private readonly double _prefaultVoltagePu = 1.0;
 
     /// <inheritdoc/>
@@ -25,17 +31,47 @@ public sealed record MachineDecrement : FaultMethod
     /// <summary>The instants to calculate; each costs one factorisation. Default all three.</summary>
     public FaultInstants Instants { get; init; } = FaultInstants.All;
 
+    /// <summary>The rule by which X/R at the fault is found. Default <see cref="XOverRRule.ComplexImpedance"/>.</summary>
+    public XOverRRule XOverRRule { get; init; }
+
+    internal override XOverRRule RatioRule => XOverRRule;
+
     internal override FaultInstants CalculatedInstants => Instants;
+
+    internal override IReadOnlyList<NetworkVariant> Networks
+    {
+        get
+        {
+            var needed = new List<NetworkVariant> { Initial };
+            if (Instants.HasFlag(FaultInstants.Transient))
+                needed.Add(Transient);
+            if (Instants.HasFlag(FaultInstants.SteadyState))
+                needed.Add(SteadyState);
+            if (XOverRRule == XOverRRule.SeparateNetworks)
+                needed.AddRange([Reactances, Resistances]);
+            return needed;
+        }
+    }
+
+    internal override NetworkVariant NetworkAt(FaultInstant instant) => instant switch
+    {
+        FaultInstant.Transient => Transient,
+        FaultInstant.SteadyState => SteadyState,
+        _ => Initial,
+    };
 
     internal override double DrivingVoltagePu(Bus bus) => PrefaultVoltagePu;
 
-    internal override Complex?[] SourceImpedances(Circuit circuit, FaultInstant instant, AssumptionLog? log)
+    internal override Complex?[] SourceImpedances(Circuit circuit, NetworkVariant variant, AssumptionLog? log)
     {
         var impedances = new Complex?[circuit.Sources.Length];
         for (var i = 0; i < impedances.Length; i++)
-            impedances[i] = Impedance(circuit.Network, circuit.Sources[i].Element, instant, log);
+            impedances[i] = Impedance(circuit.Network, circuit.Sources[i].Element, variant.Instant, log);
         return impedances;
     }
+
+    internal override FaultCurrents Currents(StudyContext context, int bus, in SeenImpedances seen) =>
+        new MachineDecrementCurrents(context, context.Network.Buses[bus], seen);
 
     private static Complex? Impedance(Network network, int element, FaultInstant instant, AssumptionLog? log)
     {

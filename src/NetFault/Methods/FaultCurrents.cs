@@ -1,0 +1,37 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>The currents of one fault by one method. Immutable.</summary>
+internal abstract class FaultCurrents
+{
+    /// <summary>I″k in kA.</summary>
+    public abstract double InitialSymmetricalKa { get; }
+
+    /// <summary>I′k in kA; null where the method does not give it or was not asked for it.</summary>
+    public abstract double? TransientKa { get; }
+
+    /// <summary>Ik in kA; null where the method was not asked for it.</summary>
+    public abstract double? SteadyStateKa { get; }
+
+    /// <summary>Zk of the initial network with the fault's own impedance, per unit.</summary>
+    public abstract Complex ImpedancePu { get; }
+
+    /// <summary>X/R at the fault.</summary>
+    public abstract ReactanceRatio Ratio { get; }
+
+    /// <summary>How the AC component is taken over time.</summary>
+    public abstract AcComponentRule AcComponentRule { get; }
+
+    /// <summary>ip in kA.</summary>
+    public abstract double PeakKa { get; }
+
+    /// <summary>The largest residual of the solutions behind these currents.</summary>
+    public abstract double Residual { get; }
+
+    /// <summary>i_dc(t) in kA.</summary>
+    public abstract double DcComponentKa(double seconds);
+
+    /// <summary>Iac(t) in kA.</summary>
+    public abstract double SymmetricalRmsKa(double seconds);
+}
