@@ -1,0 +1,104 @@
+#:project ../src/NetFault/NetFault.csproj
+#:property TargetFramework=net10.0
+#:property PublishAot=false
+
+// Reads a network file and prints the short-circuit currents at every bus. From the repository's root:
+//
+//     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --csv plant.csv
+//
+// Exit codes: 0 done, 1 the network cannot be read or solved, 2 wrong arguments.
+
+using System.Globalization;
+using System.Text;
+using NetFault;
+
+const string Usage =
+    "usage: dotnet run examples/every-bus.cs -- NETWORK.yaml [--csv FILE] [--json FILE]"
+    + " [--at SECONDS[,SECONDS...]] [--x-over-r complex|separate] [--prefault PU]";
+
+Console.OutputEncoding = Encoding.UTF8;
+try
+{
+    Run(Arguments.Parse(args));
+    return 0;
+}
+catch (UsageException wrong)
+{
+    Console.Error.WriteLine(wrong.Message);
+    Console.Error.WriteLine(Usage);
+    return 2;
+}
+catch (Exception known) when (known is NetworkFileException or SingularNetworkException or IOException or UnauthorizedAccessException)
+{
+    Console.Error.WriteLine(known.Message);
+    return 1;
+}
+
+static void Run(Arguments arguments)
+{
+    var network = NetworkFile.Read(arguments.NetworkPath);
+    foreach (var warning in network.Warnings)
+        Console.Error.WriteLine(warning + "\n");
+
+    var study = new FaultStudy(network, arguments.Method);
+    var faults = study.EveryBus();
+    Console.Write(FaultReport.ToTable(study, faults, arguments.Report));
+
+    if (arguments.CsvPath is { } csvPath)
+    {
+        using var csv = new StreamWriter(csvPath);
+        FaultReport.WriteCsv(csv, study, faults, arguments.Report);
+    }
+    if (arguments.JsonPath is { } jsonPath)
+    {
+        using var json = File.Create(jsonPath);
+        FaultReport.WriteJson(json, study, faults, arguments.Report);
+    }
+}
+
+/// <summary>What the command line asks for.</summary>
+sealed record Arguments(string NetworkPath, MachineDecrement Method, ReportOptions Report, string? CsvPath, string? JsonPath)
+{
+    private static readonly string[] Known = ["--csv", "--json", "--at", "--x-over-r", "--prefault"];
+
+    public static Arguments Parse(string[] args)
+    {
+        var paths = new List<string>();
+        var options = new Dictionary<string, string>();
+        for (var i = 0; i < args.Length; i++)
+        {
+            if (!args[i].StartsWith("--", StringComparison.Ordinal))
+                paths.Add(args[i]);
+            else if (!Known.Contains(args[i]))
+                throw new UsageException($"there is no option {args[i]}");
+            else if (i + 1 == args.Length || !options.TryAdd(args[i], args[++i]))
+                throw new UsageException($"{args[i]} lacks its value or stands twice");
+        }
+        if (paths.Count != 1)
+            throw new UsageException(paths.Count == 0 ? "which network file?" : $"one network file, not {paths.Count}: {string.Join(", ", paths)}");
+        return new Arguments(paths[0], MethodOf(options), ReportOf(options), options.GetValueOrDefault("--csv"), options.GetValueOrDefault("--json"));
+    }
+
+    private static MachineDecrement MethodOf(Dictionary<string, string> options) => new()
+    {
+        PrefaultVoltagePu = options.TryGetValue("--prefault", out var perUnit) ? Number("--prefault", perUnit, smallest: double.Epsilon) : 1.0,
+        XOverRRule = options.GetValueOrDefault("--x-over-r", "complex") switch
+        {
+            "complex" => XOverRRule.ComplexImpedance,
+            "separate" => XOverRRule.SeparateNetworks,
+            var other => throw new UsageException($"--x-over-r {other}: complex or separate"),
+        },
+    };
+
+    private static ReportOptions ReportOf(Dictionary<string, string> options) => options.TryGetValue("--at", out var times)
+        ? new ReportOptions { InstantsSeconds = times.Split(',').Select(time => Number("--at", time, smallest: 0)).ToArray() }
+        : new ReportOptions();
+
+    private static double Number(string option, string text, double smallest) =>
+        double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var number) && number >= smallest && double.IsFinite(number)
+            ? number
+            : throw new UsageException($"{option} {text}: a number {(smallest > 0 ? "above 0" : "not below 0")}, with a decimal point");
+}
+
+/// <summary>The command line cannot be understood.</summary>
+sealed class UsageException(string message) : Exception(message);
