@@ -12,7 +12,7 @@ internal sealed unsafe class LdlFactorization
     /// A pivot below this share of the largest entry of its column is shifted. In a passive network of resistances and reactances of one
     /// sign the pivot is never smaller than its column's entries, so only opposite reactances come here. Growth stays below 1/this.
     /// </summary>
-    private const double GrowthTolerance = 1e-4;
+    private const double GrowthTolerance = 1e-2;
 
     /// <summary>A pivot below this share of what it was summed from is shifted: it consists mostly of rounding.</summary>
     private const double CancellationTolerance = 1e-10;

@@ -82,6 +82,12 @@ internal sealed class ElementCheck
             Say(key, Problems.UnusualValue(value, low, high, unit));
     }
 
+    /// <summary>
+    /// Warns of an impedance above 100 percent: it does not exist in a real winding, but in data that was converted from per-unit values on
+    /// a nominal rated power it does.
+    /// </summary>
+    public void UnusualPercent(string key, double? value) => Unusual(key, value ?? 0, 0.1, 100, "percent of the rated values");
+
     public void PositiveMaxMin(string key, MaxMin? value)
     {
         if (value is not { } pair)

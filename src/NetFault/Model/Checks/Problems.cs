@@ -110,6 +110,14 @@ internal static class Problems
     public static Problem UnusualFrequency(double hz) =>
         new("NF406", Warning, $"{Text(hz)} Hz is neither 50 nor 60");
 
+    /// <summary>A text of the user's the way a message can show it: on one line, and not too long.</summary>
+    internal static string Shown(string text)
+    {
+        const int longest = 60;
+        var shown = text.Length <= longest ? text : text.Substring(0, longest) + "...";
+        return shown.Any(char.IsControl) ? new string([.. shown.Select(one => char.IsControl(one) ? ' ' : one)]) : shown;
+    }
+
     /// <summary>A number the way it would be typed.</summary>
     internal static string Text(double value) => value.ToString("R", CultureInfo.InvariantCulture);
 

@@ -38,7 +38,7 @@ public sealed record SeriesReactor : NetworkElement
         check.DifferentBuses("from", From, "to", To);
         check.ExactlyOne(("reactance_percent", ReactancePercent.HasValue), ("ohm", Ohm.HasValue));
         check.Positive("reactance_percent", ReactancePercent);
-        check.WithinPercent("reactance_percent", ReactancePercent);
+        check.UnusualPercent("reactance_percent", ReactancePercent);
         check.Positive("rated_ka", RatedKa);
         check.RatedVoltage("rated_kv", RatedKv, From);
         if (ReactancePercent.HasValue)

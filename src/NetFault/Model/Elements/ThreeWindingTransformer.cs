@@ -67,7 +67,7 @@ public sealed record ThreeWindingTransformer : NetworkElement
         var voltageKey = "short_circuit_voltage_percent." + name;
         var resistiveKey = "resistive_percent." + name;
         check.Positive(voltageKey, voltage);
-        check.WithinPercent(voltageKey, voltage);
+        check.UnusualPercent(voltageKey, voltage);
         check.NotNegative(resistiveKey, resistive);
         check.NotAbove(resistiveKey, resistive, voltageKey, voltage);
         if (one.Bus is null || other.Bus is null)

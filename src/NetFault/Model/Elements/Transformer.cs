@@ -18,7 +18,7 @@ public sealed record Transformer : NetworkElement
     /// <summary>Rated line-to-line voltage UrTLV of the low-voltage winding in kV, at the tap in use.</summary>
     public required double RatedLvKv { get; init; }
 
-    /// <summary>Short-circuit voltage ukr in percent, greater than 0, up to 100.</summary>
+    /// <summary>Short-circuit voltage ukr in percent, greater than 0; more than 100 only where the rated power is a nominal one.</summary>
     public required double ShortCircuitVoltagePercent { get; init; }
 
     /// <summary>Load losses PkrT at rated current in kW; this, <see cref="ResistivePercent"/> or <see cref="XOverR"/>.</summary>
@@ -53,7 +53,7 @@ public sealed record Transformer : NetworkElement
         check.RatedVoltage("rated_kv.lv", RatedLvKv, Lv);
         check.HighVoltageFirst("rated_kv.hv", RatedHvKv, "rated_kv.lv", RatedLvKv);
         check.Positive("short_circuit_voltage_percent", ShortCircuitVoltagePercent);
-        check.WithinPercent("short_circuit_voltage_percent", ShortCircuitVoltagePercent);
+        check.UnusualPercent("short_circuit_voltage_percent", ShortCircuitVoltagePercent);
         check.ExactlyOne(("load_loss_kw", LoadLossKw.HasValue), ("resistive_percent", ResistivePercent.HasValue), ("x_over_r", XOverR.HasValue));
         check.NotNegative("load_loss_kw", LoadLossKw);
         check.NotNegative("resistive_percent", ResistivePercent);

@@ -1,0 +1,67 @@
+namespace NetFault;
+
+/// <summary>The text of a network file, which turns offsets into places. Lines are counted only when a place is asked for.</summary>
+internal sealed class SourceText
+{
+    private int[]? _lineStarts;
+    private int _cachedLine = -1;
+    private string _cachedText = string.Empty;
+
+    public SourceText(string file, string text)
+    {
+        File = file;
+        Text = text;
+    }
+
+    /// <summary>The file's name as it was given.</summary>
+    public string File { get; }
+
+    /// <summary>The whole text, without a byte order mark.</summary>
+    public string Text { get; }
+
+    /// <summary>The place of a piece of the text; its length ends with its first line.</summary>
+    public SourceLocation Locate(int offset, int length)
+    {
+        offset = Math.Max(0, Math.Min(offset, Text.Length));
+        _lineStarts ??= FindLines(Text);
+        var line = Array.BinarySearch(_lineStarts, offset);
+        if (line < 0)
+            line = ~line - 1;
+        var text = LineText(line);
+        var column = offset - _lineStarts[line];
+        return new SourceLocation(File, line + 1, column + 1, Math.Max(1, Math.Min(length, text.Length - column)), text);
+    }
+
+    /// <summary>Offset of the start of the line that holds an offset.</summary>
+    public int LineStart(int offset)
+    {
+        while (offset > 0 && Text[offset - 1] is not ('\n' or '\r'))
+            offset--;
+        return offset;
+    }
+
+    /// <summary>The text of a line; the last one is kept, since many problems of one long line share it.</summary>
+    private string LineText(int line)
+    {
+        if (line == _cachedLine)
+            return _cachedText;
+        var start = _lineStarts![line];
+        var end = line + 1 < _lineStarts.Length ? _lineStarts[line + 1] : Text.Length;
+        while (end > start && Text[end - 1] is '\n' or '\r')
+            end--;
+        _cachedLine = line;
+        return _cachedText = Text.Substring(start, end - start);
+    }
+
+    /// <summary>Offsets at which lines start; a line ends with LF, CR LF or CR alone.</summary>
+    private static int[] FindLines(string text)
+    {
+        var starts = new List<int> { 0 };
+        for (var i = 0; i < text.Length; i++)
+        {
+            if (text[i] == '\n' || (text[i] == '\r' && (i + 1 == text.Length || text[i + 1] != '\n')))
+                starts.Add(i + 1);
+        }
+        return starts.ToArray();
+    }
+}

@@ -1,0 +1,16 @@
+namespace NetFault;
+
+/// <summary>The sections of format 1, in the order in which they are written.</summary>
+internal static class AllSections
+{
+    /// <summary>A section whose keys come with a later version.</summary>
+    public const string Reserved = "circuit_breakers";
+
+    public static IReadOnlyList<Section> InOrder { get; } =
+    [
+        new BusSection(), new NetworkFeederSection(), new SynchronousMachineSection(), new AsynchronousMotorSection(),
+        new TransformerSection(), new ThreeWindingTransformerSection(), new LineSection(), new SeriesReactorSection(), new BusCouplerSection(),
+    ];
+
+    public static Section? Find(string name) => InOrder.FirstOrDefault(one => one.Name == name);
+}
