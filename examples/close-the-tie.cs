@@ -36,7 +36,8 @@ catch (Exception known) when (known is NetworkFileException or SingularNetworkEx
 static void Run(string path, string? tieId)
 {
     var network = NetworkFile.Read(path);
-    tieId ??= network.BusCouplers.FirstOrDefault(one => one is { Closed: false, InService: true })?.Id ?? throw new NoOpenTieException(path);
+    tieId ??= network.BusCouplers.FirstOrDefault(one => one is { Closed: false, InService: true })?.Id
+        ?? throw new NoOpenTieException(path);
 
     var open = EveryBus(network.WithCoupler(tieId, closed: false));
     var closed = EveryBus(network.WithCoupler(tieId, closed: true));
@@ -55,16 +56,17 @@ static void Print(Network network, string tieId, IReadOnlyList<Change> changes)
         Console.WriteLine($"{tie.Id} is out of service: closing it does nothing.\n");
 
     var width = Math.Max(3, changes.Max(one => one.BusId.Length));
-    Console.WriteLine($"{"Bus".PadRight(width)}  I″k open   closed  change  ip open   closed  change");
+    Console.WriteLine($"{"".PadRight(width)}  {"I″k open",9} {"closed",8} {"change",9}  {"ip open",9} {"closed",8} {"change",9}");
     var moved = changes.Where(one => one.Share > SmallestChange).OrderByDescending(one => one.Share).ToList();
     foreach (var change in moved)
-        Console.WriteLine(change.Line(width));
+        Console.WriteLine($"{change.BusId.PadRight(width)}  {change.Initial}  {change.Peak}");
     foreach (var change in changes.Where(one => one.BecomesEnergised))
         Console.WriteLine($"\n{change.BusId} has no source while the tie is open; closing it energises the bus.");
 
-    var rest = changes.Count - moved.Count;
-    Console.WriteLine(FormattableString.Invariant($"\nAt the other {rest} of {changes.Count} buses I″k changes by no more than {SmallestChange:0.0%}."));
-    Console.WriteLine("For study by qualified engineers; check against the applicable standards and local codes. Not for live switching decisions.");
+    var rest = FormattableString.Invariant($"{changes.Count - moved.Count} of {changes.Count} buses I″k changes by {SmallestChange:0.0%}");
+    Console.WriteLine($"\nAt the other {rest} or less.");
+    Console.WriteLine("For study by qualified engineers; check against the applicable standards and local codes.");
+    Console.WriteLine("Not for live switching decisions.");
 }
 
 /// <summary>One bus with the tie open and closed.</summary>
@@ -74,17 +76,20 @@ sealed record Change(BusFault Open, BusFault Closed)
 
     public bool BecomesEnergised => !Open.IsEnergised && Closed.IsEnergised;
 
-    /// <summary>The change of I″k as a share of what it was; infinite where a bus becomes energised.</summary>
-    public double Share => ShareOf(Open.InitialSymmetricalKa, Closed.InitialSymmetricalKa) is var share && double.IsNaN(share) ? 0 : Math.Abs(share);
+    /// <summary>The change of I″k as a share of what it was; infinite where the bus becomes energised.</summary>
+    public double Share => BecomesEnergised
+        ? double.PositiveInfinity
+        : Math.Abs(Closed.InitialSymmetricalKa - Open.InitialSymmetricalKa) / Math.Max(Open.InitialSymmetricalKa, double.Epsilon);
 
-    public string Line(int width) => FormattableString.Invariant(
-        $"{BusId.PadRight(width)}  {Open.InitialSymmetricalKa,8:0.000} {Closed.InitialSymmetricalKa,8:0.000} {Percent(Open.InitialSymmetricalKa, Closed.InitialSymmetricalKa),7}")
-        + FormattableString.Invariant($" {Open.PeakKa,8:0.000} {Closed.PeakKa,8:0.000} {Percent(Open.PeakKa, Closed.PeakKa),7}");
+    public string Initial => Cells(Open.InitialSymmetricalKa, Closed.InitialSymmetricalKa);
 
-    private static string Percent(double before, double after) =>
-        before > 0 ? FormattableString.Invariant($"{100 * ShareOf(before, after):+0.0;-0.0} %") : "new";
+    public string Peak => Cells(Open.PeakKa, Closed.PeakKa);
 
-    private static double ShareOf(double before, double after) => (after - before) / before;
+    private static string Cells(double before, double after)
+    {
+        var percent = before > 0 ? FormattableString.Invariant($"{100 * (after - before) / before:+0.0;-0.0} %") : "new";
+        return FormattableString.Invariant($"{before,9:0.000} {after,8:0.000} {percent,9}");
+    }
 }
 
 /// <summary>The network has no tie to close.</summary>

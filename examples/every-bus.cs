@@ -75,13 +75,14 @@ sealed record Arguments(string NetworkPath, MachineDecrement Method, ReportOptio
                 throw new UsageException($"{args[i]} lacks its value or stands twice");
         }
         if (paths.Count != 1)
-            throw new UsageException(paths.Count == 0 ? "which network file?" : $"one network file, not {paths.Count}: {string.Join(", ", paths)}");
-        return new Arguments(paths[0], MethodOf(options), ReportOf(options), options.GetValueOrDefault("--csv"), options.GetValueOrDefault("--json"));
+            throw new UsageException($"one network file is needed, and {paths.Count} are given");
+        string? csvPath = options.GetValueOrDefault("--csv"), jsonPath = options.GetValueOrDefault("--json");
+        return new Arguments(paths[0], MethodOf(options), ReportOf(options), csvPath, jsonPath);
     }
 
     private static MachineDecrement MethodOf(Dictionary<string, string> options) => new()
     {
-        PrefaultVoltagePu = options.TryGetValue("--prefault", out var perUnit) ? Number("--prefault", perUnit, smallest: double.Epsilon) : 1.0,
+        PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
         XOverRRule = options.GetValueOrDefault("--x-over-r", "complex") switch
         {
             "complex" => XOverRRule.ComplexImpedance,
@@ -91,13 +92,16 @@ sealed record Arguments(string NetworkPath, MachineDecrement Method, ReportOptio
     };
 
     private static ReportOptions ReportOf(Dictionary<string, string> options) => options.TryGetValue("--at", out var times)
-        ? new ReportOptions { InstantsSeconds = times.Split(',').Select(time => Number("--at", time, smallest: 0)).ToArray() }
+        ? new ReportOptions { InstantsSeconds = times.Split(',').Select(time => Number("--at", time, zeroAllowed: true)).ToArray() }
         : new ReportOptions();
 
-    private static double Number(string option, string text, double smallest) =>
-        double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var number) && number >= smallest && double.IsFinite(number)
+    private static double Number(string option, string text, bool zeroAllowed)
+    {
+        var isNumber = double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var number);
+        return isNumber && double.IsFinite(number) && (number > 0 || (zeroAllowed && number == 0))
             ? number
-            : throw new UsageException($"{option} {text}: a number {(smallest > 0 ? "above 0" : "not below 0")}, with a decimal point");
+            : throw new UsageException($"{option} {text}: a number {(zeroAllowed ? "not below" : "above")} 0, with a decimal point");
+    }
 }
 
 /// <summary>The command line cannot be understood.</summary>
