@@ -16,7 +16,7 @@ using NetFault;
 const double SmallestChange = 0.005;
 
 Console.OutputEncoding = Encoding.UTF8;
-if (args.Length is < 1 or > 2)
+if (args.Length is < 1 or > 2 || args.Contains(""))
 {
     Console.Error.WriteLine("usage: dotnet run examples/close-the-tie.cs -- NETWORK.yaml [TIE-ID]");
     return 2;

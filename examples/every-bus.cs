@@ -71,11 +71,13 @@ sealed record Arguments(string NetworkPath, MachineDecrement Method, ReportOptio
                 paths.Add(args[i]);
             else if (!Known.Contains(args[i]))
                 throw new UsageException($"there is no option {args[i]}");
-            else if (i + 1 == args.Length || !options.TryAdd(args[i], args[++i]))
-                throw new UsageException($"{args[i]} lacks its value or stands twice");
+            else if (args.ElementAtOrDefault(i + 1) is null or "" || args[i + 1].StartsWith("--", StringComparison.Ordinal))
+                throw new UsageException($"{args[i]} lacks its value");
+            else if (!options.TryAdd(args[i], args[++i]))
+                throw new UsageException($"{args[i - 1]} stands twice");
         }
-        if (paths.Count != 1)
-            throw new UsageException($"one network file is needed, and {paths.Count} are given");
+        if (paths.Count != 1 || paths[0].Length == 0)
+            throw new UsageException($"one network file is needed; given: {(paths.Count == 0 ? "none" : string.Join(", ", paths))}");
         string? csvPath = options.GetValueOrDefault("--csv"), jsonPath = options.GetValueOrDefault("--json");
         return new Arguments(paths[0], MethodOf(options), ReportOf(options), csvPath, jsonPath);
     }

@@ -14,7 +14,7 @@ using System.Text;
 using NetFault;
 
 Console.OutputEncoding = Encoding.UTF8;
-if (args.Length != 2)
+if (args.Length != 2 || args.Contains(""))
 {
     Console.Error.WriteLine("usage: dotnet run examples/flows.cs -- NETWORK.yaml BUS-ID");
     return 2;

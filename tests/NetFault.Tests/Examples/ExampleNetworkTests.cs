@@ -19,7 +19,7 @@ public class ExampleNetworkTests
     {
         var network = Small();
         network.Warnings.Should().BeEmpty();
-        new FaultStudy(network, new MachineDecrement()).Assumptions.Should().BeEmpty();
+        Study(network).Assumptions.Should().BeEmpty();
     }
 
     [Fact]
@@ -44,19 +44,23 @@ public class ExampleNetworkTests
     public void Every_bus_of_the_industrial_plant_agrees_with_a_dense_inverse()
     {
         var oracle = new DenseOracle(RestatedPlant.Of(Industrial()));
-        foreach (var fault in new FaultStudy(Industrial(), new MachineDecrement()).EveryBus().Where(one => one.IsEnergised))
-            fault.InitialSymmetricalKa.Should().BeApproximately(oracle.CurrentKa(fault.BusId), 1e-9 * oracle.CurrentKa(fault.BusId), fault.BusId);
+        foreach (var fault in Study(Industrial()).EveryBus().Where(one => one.IsEnergised))
+        {
+            var expectedKa = oracle.CurrentKa(fault.BusId);
+            fault.InitialSymmetricalKa.Should().BeApproximately(expectedKa, 1e-9 * expectedKa, fault.BusId);
+        }
     }
 
     [Fact]
     public void Closing_any_open_tie_of_the_industrial_plant_lowers_no_current()
     {
         var network = Industrial();
-        var open = new FaultStudy(network, new MachineDecrement()).EveryBus();
+        var open = Study(network).EveryBus();
         foreach (var tie in network.BusCouplers.Where(one => !one.Closed))
         {
-            var closed = new FaultStudy(network.WithCoupler(tie.Id, closed: true), new MachineDecrement()).EveryBus();
-            open.Zip(closed).Should().OnlyContain(pair => pair.Second.InitialSymmetricalKa >= pair.First.InitialSymmetricalKa * (1 - 1e-12), tie.Id);
+            var closed = Study(network.WithCoupler(tie.Id, closed: true)).EveryBus();
+            var ratios = open.Zip(closed, (before, after) => after.InitialSymmetricalKa / before.InitialSymmetricalKa);
+            ratios.Where(ratio => ratio < 1 - 1e-12).Should().BeEmpty(tie.Id);
         }
     }
 
@@ -64,9 +68,11 @@ public class ExampleNetworkTests
     public void Closing_the_standby_tie_energises_the_standby_bus()
     {
         var network = Industrial();
-        new FaultStudy(network, new MachineDecrement()).At("STANDBY-6").IsEnergised.Should().BeFalse();
-        new FaultStudy(network.WithCoupler("TIE-STANDBY", closed: true), new MachineDecrement()).At("STANDBY-6").IsEnergised.Should().BeTrue();
+        Study(network).At("STANDBY-6").IsEnergised.Should().BeFalse();
+        Study(network.WithCoupler("TIE-STANDBY", closed: true)).At("STANDBY-6").IsEnergised.Should().BeTrue();
     }
+
+    private static FaultStudy Study(Network network) => new(network, new MachineDecrement());
 
     private static Network Small() => NetworkFile.Read(Repository.PathOf("examples/small-plant.yaml"));
 

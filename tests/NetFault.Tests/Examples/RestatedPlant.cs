@@ -33,9 +33,11 @@ internal static class RestatedPlant
     /// <summary>Given, or x2/(ω·Ta), or with Ta = 0.15 s, the common practice that the library says it assumes.</summary>
     private static double ResistancePu(SynchronousMachine one, double omega) => one.ArmatureResistancePu
         ?? one.ArmatureResistanceOhm * one.RatedMva / (one.RatedKv * one.RatedKv)
-        ?? (one.TimeConstantSeconds.Armature is { } ta ? one.ReactancePu.Negative!.Value / (omega * ta) : one.ReactancePu.Subtransient / (omega * 0.15));
+        ?? (one.TimeConstantSeconds.Armature is { } ta
+            ? one.ReactancePu.Negative!.Value / (omega * ta)
+            : one.ReactancePu.Subtransient / (omega * 0.15));
 
-    /// <summary>IEC 60909-0, 6.10 (from memory): 0.10 at 1 MW and more a pole pair, 0.15 below, 0.42 for low-voltage groups with cables.</summary>
+    /// <summary>IEC 60909-0, 6.10 (from memory): 0.10 at 1 MW and more a pole pair, 0.15 below, 0.42 for low-voltage groups.</summary>
     private static double ROverX(AsynchronousMotor one) => one.ROverX
         ?? 1 / one.XOverR
         ?? (one.RatedKv <= 1 ? 0.42 : one.RatedKw / one.PolePairs!.Value >= 1000 ? 0.10 : 0.15);
