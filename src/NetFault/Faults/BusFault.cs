@@ -30,7 +30,7 @@ public sealed class BusFault
         Ratio = new ReactanceRatio(null, XOverRStatus.DeEnergised);
     }
 
-    /// <summary>The bus.</summary>
+    /// <summary>The bus at which the fault is.</summary>
     public Bus Bus => _context.Network.Buses[_bus];
 
     /// <summary>The bus's id.</summary>
