@@ -55,7 +55,8 @@ static void Print(FaultFlows flows)
     Console.WriteLine("\nFor study by qualified engineers; check against the applicable standards and local codes.");
 }
 
-static string Through(CouplerFlow coupler) => coupler.FromToKa is { } current ? Ka(current) : "divides in a ring of couplers, not determined";
+static string Through(CouplerFlow coupler) =>
+    coupler.FromToKa is { } current ? Ka(current) : "divides in a ring of couplers, not determined";
 
 static string Ka(Complex current) => current.Magnitude < 1e-9
     ? "   0.000 kA"
