@@ -2,7 +2,6 @@ using System.Numerics;
 using System.Runtime.CompilerServices;
 #if NET
 using System.Runtime.Intrinsics;
-using System.Runtime.Intrinsics.X86;
 #endif
 
 namespace NetFault.Sparse;
@@ -15,13 +14,13 @@ internal static unsafe class ComplexKernel
     public static void SubtractProduct(Complex* full, int* rows, Complex* column, int count, Complex factor)
     {
 #if NET
-        Vector128<double> re = Vector128.Create(factor.Real), im = Vector128.Create(factor.Imaginary, -factor.Imaginary);
+        Vector128<double> re = Vector128.Create(-factor.Real), im = Vector128.Create(factor.Imaginary, -factor.Imaginary);
         for (int t = 0; t < count; t++)
         {
             double* target = (double*)(full + rows[t]);
             Vector128<double> c = Vector128.Load((double*)(column + t));
-            Vector128<double> sum = Vector128.Load(target) - c * re;
-            (sum + Swap(c) * im).Store(target);
+            Vector128<double> sum = Vector128.MultiplyAddEstimate(c, re, Vector128.Load(target));
+            Vector128.MultiplyAddEstimate(Swap(c), im, sum).Store(target);
         }
 #else
         double re = factor.Real, im = factor.Imaginary;
@@ -49,42 +48,77 @@ internal static unsafe class ComplexKernel
         return new Complex(re, im);
     }
 
-    /// <summary>
-    /// One column of a symmetric matrix times a vector, both triangles at once: product[rows[t]] += column[t]·factor, and returns
-    /// Σ column[t]·vector[rows[t]].
-    /// </summary>
+    /// <summary>result = S·x for a dense symmetric S whose lower triangle stands by columns.</summary>
+    /// <param name="s">The first diagonal entry; the next is <paramref name="stride"/> + 1 behind.</param>
+    /// <param name="stride">From one column to the next.</param>
+    /// <param name="x">The vector.</param>
+    /// <param name="result">Out.</param>
+    /// <param name="count">Rows, at least one.</param>
+    public static void SymmetricProduct(Complex* s, int stride, Complex* x, Complex* result, int count)
+    {
+        result[0] = Multiply(s[0], x[0]);
+        for (int b = 1; b < count; b++)
+        {
+            result[b] = Multiply(s[b], x[0]);
+            result[0] += Multiply(s[b], x[b]);
+        }
+
+        for (int a = 1; a < count; a++)
+        {
+            s += stride + 1;
+            Complex onDiagonal = Multiply(s[0], x[a]);
+            Complex dot = AddProductAndDot(result + a + 1, x + a + 1, s + 1, count - a - 1, x[a]);
+            result[a] += onDiagonal + dot;
+        }
+    }
+
+    /// <summary>result[t] += column[t]·factor, and returns Σ column[t]·x[t].</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Complex AddProductAndDot(Complex* product, Complex* vector, int* rows, Complex* column, int count, Complex factor)
+    private static Complex AddProductAndDot(Complex* result, Complex* x, Complex* column, int count, Complex factor)
     {
 #if NET
-        Vector128<double> re = Vector128.Create(factor.Real), im = Vector128.Create(-factor.Imaginary, factor.Imaginary);
-        Vector128<double> straight = Vector128<double>.Zero, crossed = straight;
-        for (int t = 0; t < count; t++)
+        Vector256<double> re = Vector256.Create(factor.Real);
+        Vector256<double> im = Vector256.Create(-factor.Imaginary, factor.Imaginary, -factor.Imaginary, factor.Imaginary);
+        Vector256<double> straight = Vector256<double>.Zero, crossed = straight;
+        int t = 0;
+        for (; t < count - 1; t += 2)
         {
-            int row = rows[t];
-            double* target = (double*)(product + row);
-            Vector128<double> c = Vector128.Load((double*)(column + t)), x = Vector128.Load((double*)(vector + row));
-            Vector128<double> swapped = Swap(c);
-            (Vector128.Load(target) + c * re + swapped * im).Store(target);
-            straight += c * x;
-            crossed += swapped * x;
+            double* target = (double*)(result + t);
+            Vector256<double> c = Vector256.Load((double*)(column + t)), v = Vector256.Load((double*)(x + t)), swapped = Swap(c);
+            Vector256<double> sum = Vector256.MultiplyAddEstimate(c, re, Vector256.Load(target));
+            Vector256.MultiplyAddEstimate(swapped, im, sum).Store(target);
+            straight = Vector256.MultiplyAddEstimate(c, v, straight);
+            crossed = Vector256.MultiplyAddEstimate(swapped, v, crossed);
         }
 
-        return new Complex(straight[0] - straight[1], crossed[0] + crossed[1]);
+        var dot = new Complex(straight[0] - straight[1] + straight[2] - straight[3], crossed[0] + crossed[1] + crossed[2] + crossed[3]);
 #else
-        double re = factor.Real, im = factor.Imaginary, dotRe = 0, dotIm = 0;
-        for (int t = 0; t < count; t++)
+        int t = 0;
+        Complex dot = Complex.Zero;
+#endif
+        for (; t < count; t++)
         {
-            int row = rows[t];
-            double* target = (double*)(product + row), x = (double*)(vector + row), c = (double*)(column + t);
-            target[0] += c[0] * re - c[1] * im;
-            target[1] += c[0] * im + c[1] * re;
-            dotRe += c[0] * x[0] - c[1] * x[1];
-            dotIm += c[0] * x[1] + c[1] * x[0];
+            result[t] += Multiply(column[t], factor);
+            dot += Multiply(column[t], x[t]);
         }
 
-        return new Complex(dotRe, dotIm);
-#endif
+        return dot;
+    }
+
+    /// <summary>x = −x, and returns Σ column[t]·x[t].</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static Complex NegateAndDot(Complex* x, Complex* column, int count)
+    {
+        double re = 0, im = 0;
+        for (int t = 0; t < count; t++)
+        {
+            double a = -x[t].Real, b = -x[t].Imaginary, c = column[t].Real, d = column[t].Imaginary;
+            x[t] = new Complex(a, b);
+            re += a * c - b * d;
+            im += a * d + b * c;
+        }
+
+        return new Complex(re, im);
     }
 
     /// <summary>a·b without the runtime's checks for infinities.</summary>
@@ -113,6 +147,10 @@ internal static unsafe class ComplexKernel
 #if NET
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static Vector128<double> Swap(Vector128<double> a) =>
-        Sse2.IsSupported ? Sse2.Shuffle(a, a, 1) : Vector128.Create(a[1], a[0]);
+        Vector128.Shuffle(a, Vector128.Create(1L, 0L));
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static Vector256<double> Swap(Vector256<double> a) =>
+        Vector256.Shuffle(a, Vector256.Create(1L, 0L, 3L, 2L));
 #endif
 }

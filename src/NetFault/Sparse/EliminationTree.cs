@@ -19,10 +19,10 @@ internal static unsafe class EliminationTree
     /// <param name="place">The inverse of <paramref name="order"/>.</param>
     /// <param name="parent">Out, by place.</param>
     /// <param name="count">Out, by place.</param>
-    public static void Build(Adjacency graph, int[] order, int[] place, int[] parent, int[] count)
+    public static void Build(Adjacency graph, ReadOnlySpan<int> order, ReadOnlySpan<int> place, Span<int> parent, Span<int> count)
     {
         int n = order.Length;
-        int[] visitedFor = new int[n];
+        using var visitedFor = new Scratch<int>(n + 1);
         fixed (int* start = graph.Start, neighbour = graph.Neighbour, at = place, up = parent, inColumn = count, visited = visitedFor)
         {
             for (int k = 0; k < n; k++)
@@ -45,12 +45,14 @@ internal static unsafe class EliminationTree
     }
 
     /// <summary>A postorder: children before parents, each subtree in one run, which keeps what belongs together close in memory.</summary>
-    /// <returns>The place in the old order of each place in the new one.</returns>
-    public static int[] Postorder(int[] parent)
+    /// <param name="parent">The tree.</param>
+    /// <param name="order">Out: the place in the old order of each place in the new one.</param>
+    public static void Postorder(ReadOnlySpan<int> parent, Span<int> order)
     {
         int n = parent.Length;
-        int[] order = new int[n], firstChild = new int[n], nextSibling = new int[n];
-        firstChild.AsSpan().Fill(None);
+        using var children = new Scratch<int>(2 * n + 1);
+        Span<int> firstChild = children.Span.Slice(0, n), nextSibling = children.Span.Slice(n, n);
+        firstChild.Fill(None);
         int root = None;
         for (int j = n - 1; j >= 0; j--)
         {
@@ -67,11 +69,11 @@ internal static unsafe class EliminationTree
         }
 
         Walk(root, parent, firstChild, nextSibling, order);
-        return order;
     }
 
     /// <summary>Down to the first leaf, then to siblings and up again; the tree itself is the stack.</summary>
-    private static void Walk(int root, int[] parent, int[] firstChild, int[] nextSibling, int[] order)
+    private static void Walk(
+        int root, ReadOnlySpan<int> parent, ReadOnlySpan<int> firstChild, ReadOnlySpan<int> nextSibling, Span<int> order)
     {
         int j = root, placed = 0;
         while (placed < order.Length)

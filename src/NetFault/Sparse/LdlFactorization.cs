@@ -69,9 +69,9 @@ internal sealed unsafe class LdlFactorization
     private void Eliminate()
     {
         int n = symbolic.Order;
-        int[] links = new int[3 * n];
-        links.AsSpan(0, n).Fill(None);
-        Complex[] full = new Complex[2 * n];
+        using var links = new Scratch<int>(3 * n + 1);
+        using var full = new Scratch<Complex>(2 * n + 1);
+        links.Span.Slice(0, n).Fill(None);
         fixed (int* head = links, columns = symbolic.ColumnStart, rows = symbolic.RowIndex)
         fixed (Complex* work = full, l = lower, d = inversePivot)
         {

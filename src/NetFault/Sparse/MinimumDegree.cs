@@ -12,13 +12,13 @@ internal static unsafe class MinimumDegree
     {
         int n = graph.Start.Length - 1;
         int[] order = new int[n];
-        int[] lists = (int[])graph.Neighbour.Clone();
-        int[] degree = new int[n];
-        int[] workspace = new int[2 * n];
-        fixed (int* start = graph.Start, neighbour = lists, d = degree, w = workspace, ordered = order)
+        using var lists = new Scratch<int>(graph.Neighbour.Length + 1);
+        using var work = new Scratch<int>(3 * n + 1);
+        graph.Neighbour.CopyTo(lists.Span);
+        fixed (int* start = graph.Start, neighbour = lists, d = work, ordered = order)
         {
             int dense = SetDenseNodesAside(n, start, neighbour, d, ordered);
-            int low = new LowDegreeElimination(start, neighbour, d, w, ordered, n).Run();
+            int low = new LowDegreeElimination(start, neighbour, d, d + n, ordered, n).Run();
             int core = n - low - dense;
             if (core > 0)
             {
@@ -71,7 +71,8 @@ internal static unsafe class MinimumDegree
 
     private static void OrderCore(int n, int core, int* start, int* neighbour, int* degree, int* order)
     {
-        int[] names = new int[core], newNames = new int[n];
+        using var nameSpace = new Scratch<int>(n + core);
+        Span<int> names = nameSpace.Span.Slice(0, core), newNames = nameSpace.Span.Slice(core);
         int found = 0, neighbours = 0;
         for (int v = 0; v < n; v++)
         {
@@ -83,7 +84,7 @@ internal static unsafe class MinimumDegree
             }
         }
 
-        int[] workspace = new int[QuotientGraph.WorkspaceLength(core, neighbours)];
+        using var workspace = new Scratch<int>(QuotientGraph.WorkspaceLength(core, neighbours));
         fixed (int* w = workspace)
         {
             var graph = new QuotientGraph(core, neighbours, w);
@@ -97,7 +98,8 @@ internal static unsafe class MinimumDegree
         }
     }
 
-    private static void Fill(ref QuotientGraph graph, int[] names, int[] newNames, int* start, int* neighbour, int* degree)
+    private static void Fill(
+        ref QuotientGraph graph, ReadOnlySpan<int> names, ReadOnlySpan<int> newNames, int* start, int* neighbour, int* degree)
     {
         for (int node = 0; node < names.Length; node++)
         {

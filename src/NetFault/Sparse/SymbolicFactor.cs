@@ -17,6 +17,7 @@ internal sealed unsafe class SymbolicFactor
         ColumnStart = columnStart;
         RowIndex = new int[columnStart[columnStart.Length - 1]];
         PositionOfSlot = new int[pattern.SlotCount];
+        Supernodes = Supernodes.Find(parent, columnStart);
     }
 
     /// <summary>The pattern that was analysed.</summary>
@@ -46,6 +47,9 @@ internal sealed unsafe class SymbolicFactor
     /// <summary>The position in <see cref="RowIndex"/> of each slot of the pattern.</summary>
     public int[] PositionOfSlot { get; }
 
+    /// <summary>The dense blocks of L.</summary>
+    public Supernodes Supernodes { get; }
+
     /// <summary>Orders the nodes for little fill and works out the pattern of L. O(entries of L), but for the ordering.</summary>
     public static SymbolicFactor Analyze(SymmetricPattern pattern)
     {
@@ -57,9 +61,12 @@ internal sealed unsafe class SymbolicFactor
     public static SymbolicFactor Analyze(SymmetricPattern pattern, Adjacency graph, int[] order)
     {
         int n = pattern.Order;
-        int[] parent = new int[n], count = new int[n];
-        EliminationTree.Build(graph, order, Invert(order), parent, count);
-        int[] postorder = EliminationTree.Postorder(parent);
+        using var work = new Scratch<int>(4 * n + 1);
+        Span<int> parent = work.Span.Slice(0, n), count = work.Span.Slice(n, n), postorder = work.Span.Slice(2 * n, n);
+        Span<int> place = work.Span.Slice(3 * n, n);
+        Invert(order, place);
+        EliminationTree.Build(graph, order, place, parent, count);
+        EliminationTree.Postorder(parent, postorder);
         var symbolic = Relabel(pattern, order, parent, count, postorder);
         symbolic.FillPattern(graph);
         symbolic.LocateSlots(graph);
@@ -73,10 +80,12 @@ internal sealed unsafe class SymbolicFactor
     public LdlFactor Factor(ReadOnlySpan<Complex> diagonal, ReadOnlySpan<Complex> offDiagonal) =>
         LdlFactorization.Run(this, diagonal, offDiagonal);
 
-    private static SymbolicFactor Relabel(SymmetricPattern pattern, int[] order, int[] parent, int[] count, int[] postorder)
+    private static SymbolicFactor Relabel(
+        SymmetricPattern pattern, ReadOnlySpan<int> order, ReadOnlySpan<int> parent, ReadOnlySpan<int> count, ReadOnlySpan<int> postorder)
     {
         int n = order.Length;
-        int[] newPlace = Invert(postorder), nodeAt = new int[n], newParent = new int[n], columnStart = new int[n + 1];
+        int[] newPlace = new int[n], nodeAt = new int[n], newParent = new int[n], columnStart = new int[n + 1];
+        Invert(postorder, newPlace);
         for (int k = 0; k < n; k++)
         {
             int old = postorder[k];
@@ -85,33 +94,32 @@ internal sealed unsafe class SymbolicFactor
             columnStart[k + 1] = checked(columnStart[k] + count[old]);
         }
 
-        return new SymbolicFactor(pattern, nodeAt, Invert(nodeAt), newParent, columnStart);
+        Invert(nodeAt, newPlace);
+        return new SymbolicFactor(pattern, nodeAt, newPlace, newParent, columnStart);
     }
 
-    private static int[] Invert(int[] permutation)
+    private static void Invert(ReadOnlySpan<int> permutation, Span<int> inverse)
     {
-        int[] inverse = new int[permutation.Length];
         for (int k = 0; k < permutation.Length; k++)
         {
             inverse[permutation[k]] = k;
         }
-
-        return inverse;
     }
 
     /// <summary>Row by row as in <see cref="EliminationTree.Build"/>, which leaves each column's rows ascending.</summary>
     private void FillPattern(Adjacency graph)
     {
         int n = Order;
-        int[] next = ColumnStart.AsSpan(0, n).ToArray();
-        int[] visitedFor = new int[n];
+        using var next = new Scratch<int>(n + 1);
+        using var visitedFor = new Scratch<int>(n + 1);
+        ColumnStart.CopyTo(next.Span);
         fixed (int* start = graph.Start, neighbour = graph.Neighbour, at = PlaceOf, up = Parent, end = next, visited = visitedFor,
             rows = RowIndex)
         {
             for (int k = 0; k < n; k++)
             {
                 int node = NodeAt[k];
-                visited[k] = k;
+                visited[k] = k; // k is new to this array: earlier rows left smaller marks, or none
                 for (int p = start[node], last = start[node + 1]; p < last; p++)
                 {
                     for (int i = at[neighbour[p]]; i < k && visited[i] != k; i = up[i])
@@ -128,7 +136,7 @@ internal sealed unsafe class SymbolicFactor
     private void LocateSlots(Adjacency graph)
     {
         int n = Order;
-        int[] positionOfRow = new int[n];
+        using var positionOfRow = new Scratch<int>(n + 1);
         fixed (int* start = graph.Start, neighbour = graph.Neighbour, slotOf = graph.Slot, at = PlaceOf, columns = ColumnStart,
             rows = RowIndex, position = positionOfRow, positionOfSlot = PositionOfSlot)
         {

@@ -10,9 +10,12 @@ internal sealed unsafe class NativeKernel
 {
     private readonly delegate* unmanaged[Cdecl]<int, int*, int*, Complex*, Complex*, Complex*, Complex*, int> run;
 
-    private NativeKernel(nint library) =>
+    private NativeKernel(nint library)
+    {
         run = (delegate* unmanaged[Cdecl]<int, int*, int*, Complex*, Complex*, Complex*, Complex*, int>)
             NativeLibrary.GetExport(library, "nf_kernel");
+        ((delegate* unmanaged[Cdecl]<void>)NativeLibrary.GetExport(library, "nf_keep_memory"))();
+    }
 
     /// <summary>Compiles and loads it; says why if it cannot.</summary>
     public static NativeKernel? TryLoad()

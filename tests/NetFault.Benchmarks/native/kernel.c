@@ -1,7 +1,9 @@
 /* The steps of src/NetFault/Sparse in plain C, as a yardstick for the managed code: nodes of degree up to two, approximate minimum
  * degree for the rest, elimination tree, postorder, pattern of L, left-looking L*D*L^T, selected inverse. Same algorithms, no pivot
  * shifts. Written for the benchmark from the papers cited in docs/numerics.md.
+ * nf_keep_memory stops malloc from giving pages back, so that C does not pay the kernel for them at every call.
  * gcc -O3 -march=native -shared -fPIC kernel.c -o kernel.so -lm */
+#include <malloc.h>
 #include <math.h>
 #include <stdlib.h>
 #include <string.h>
@@ -12,6 +14,8 @@ static inline cplx mul(cplx a, cplx b) { return (cplx){a.re * b.re - a.im * b.im
 static inline cplx inv(cplx a) { double s = 1 / (a.re * a.re + a.im * a.im); return (cplx){a.re * s, -a.im * s}; }
 static inline double size1(cplx a) { return fabs(a.re) + fabs(a.im); }
 static int *ints(size_t n) { return malloc((n + 1) * sizeof(int)); }
+
+void nf_keep_memory(void) { mallopt(M_MMAP_THRESHOLD, 1 << 30); mallopt(M_TRIM_THRESHOLD, 1 << 30); mallopt(M_TOP_PAD, 64 << 20); }
 
 /* ---- graph: both directions of each slot ---- */
 static void adjacency(int n, const int *cs, const int *ri, int *start, int *nb, int *slot) {
@@ -288,7 +292,7 @@ int nf_kernel(int n, const int *cs, const int *ri, const cplx *diag, const cplx 
 
     /* ---- numeric, left-looking ---- */
     cplx *l = calloc(lnz + 1, sizeof(cplx)), *d = malloc((n + 1) * sizeof(cplx)), *piv = malloc((n + 1) * sizeof(cplx));
-    cplx *y = calloc(n + 1, sizeof(cplx)), *v = calloc(n + 1, sizeof(cplx)), *z = malloc((lnz + 1) * sizeof(cplx));
+    cplx *y = calloc(n + 1, sizeof(cplx)), *z = malloc((lnz + 1) * sizeof(cplx));
     int *head = seen, *link = next, *cur = count;
     double worst = 0;
     for (int s = 0; s < m; s++) l[pos[s]] = off[s];
@@ -312,32 +316,62 @@ int nf_kernel(int n, const int *cs, const int *ri, const cplx *diag, const cplx 
         for (int p = cols[j]; p < cols[j + 1]; p++) l[p] = mul(l[p], d[j]);
     }
 
-    /* ---- selected inverse ---- */
-    cplx *zz = piv;
-    memset(v, 0, n * sizeof(cplx));
-    for (int j = n - 1; j >= 0; j--) {
-        int b = cols[j], e = cols[j + 1];
-        for (int p = b; p < e; p++) { v[rows[p]] = l[p]; y[rows[p]] = (cplx){0, 0}; }
-        for (int p = b; p < e; p++) {
-            int r = rows[p];
-            cplx f = l[p], s = mul(zz[r], f);
-            for (int q = cols[r]; q < cols[r + 1]; q++) {
-                int i = rows[q];
-                cplx u = mul(z[q], f), w = mul(z[q], v[i]);
-                y[i].re += u.re; y[i].im += u.im; s.re += w.re; s.im += w.im;
-            }
-            y[r].re += s.re; y[r].im += s.im;
-        }
-        cplx t = d[j];
-        for (int p = b; p < e; p++) {
-            cplx u = (cplx){-y[rows[p]].re, -y[rows[p]].im}, w = mul(l[p], u);
-            z[p] = u; v[rows[p]] = (cplx){0, 0}; t.re -= w.re; t.im -= w.im;
-        }
-        zz[j] = t; zd[node[j]] = t;
+    /* ---- selected inverse, by dense fronts of supernodes ---- */
+    int *first = post, *of = back, *above = order, ns = 0, *loc = seen;
+    size_t *at = malloc((n + 1) * sizeof(size_t)), space = 0;
+    for (int j = 0; j < n; j++) {
+        if (j == 0 || up[j - 1] != j || cols[j] - cols[j - 1] != cols[j + 1] - cols[j] + 1) first[ns++] = j;
+        of[j] = ns - 1;
     }
+    first[ns] = n;
+    for (int s = ns - 1; s >= 0; s--) {
+        int u = up[first[s + 1] - 1];
+        size_t size = cols[first[s] + 1] - cols[first[s]] + 1;
+        above[s] = u < 0 ? -1 : of[u]; at[s] = 0;
+        if (u >= 0) { int q = above[s]; size_t ps = cols[first[q] + 1] - cols[first[q]] + 1; at[s] = at[q] + ps * ps; }
+        if (at[s] + size * size > space) space = at[s] + size * size;
+    }
+    cplx *fronts = malloc((space + 1) * sizeof(cplx));
+    for (int s = ns - 1; s >= 0; s--) {
+        int begin = first[s], end = first[s + 1], own = end - begin, cnt = cols[end] - cols[end - 1], size = own + cnt;
+        cplx *front = fronts + at[s];
+        if (above[s] >= 0) {
+            int q = above[s], pb = first[q], pe = first[q + 1], po = pe - pb, ps = cols[pb + 1] - cols[pb] + 1, t = 0;
+            const int *want = rows + cols[end - 1], *bel = rows + cols[pe - 1];
+            for (; t < cnt && want[t] < pe; t++) loc[t] = want[t] - pb;
+            for (int k = 0; t < cnt; t++) { while (bel[k] != want[t]) k++; loc[t] = po + k++; }
+            for (int u = 0; u < cnt; u++) {
+                const cplx *from = fronts + at[q] + (size_t)loc[u] * ps;
+                cplx *to = front + (size_t)(own + u) * size + own;
+                for (int w = u; w < cnt; w++) to[w] = from[loc[w]];
+            }
+        }
+        for (int j = end - 1; j >= begin; j--) {
+            int a = j - begin, c = size - a - 1;
+            cplx *restrict res = z + cols[j], *restrict x = l + cols[j], *col = front + (size_t)a * size + a, t = d[j];
+            const cplx *restrict f = col + size + 1;
+            for (int r = 0; r < c; r++) res[r] = (cplx){0, 0};
+            for (int r = 0; r < c; r++, f += size + 1) {
+                cplx xr = x[r], sum = mul(f[0], xr);
+                for (int w = r + 1; w < c; w++) {
+                    cplx u = mul(f[w - r], xr), v2 = mul(f[w - r], x[w]);
+                    res[w].re += u.re; res[w].im += u.im; sum.re += v2.re; sum.im += v2.im;
+                }
+                res[r].re += sum.re; res[r].im += sum.im;
+            }
+            for (int r = 0; r < c; r++) {
+                res[r].re = -res[r].re; res[r].im = -res[r].im;
+                cplx w = mul(x[r], res[r]);
+                t.re -= w.re; t.im -= w.im;
+            }
+            memcpy(col + 1, res, c * sizeof(cplx));
+            col[0] = t; zd[node[j]] = t;
+        }
+    }
+    free(fronts); free(at);
     for (int s = 0; s < m; s++) zo[s] = z[pos[s]];
     int *gone[] = {start, nb, slot, copy, order, place, parent, count, seen, post, back, node, up, cols, next, pos, rows};
     for (int k = 0; k < 17; k++) free(gone[k]);
-    free(l); free(d); free(piv); free(y); free(v); free(z);
+    free(l); free(d); free(piv); free(y); free(z);
     return worst ? -lnz : lnz;
 }
