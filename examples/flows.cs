@@ -21,7 +21,8 @@ if (args.Length != 2 || args.Contains(""))
 }
 try
 {
-    Print(new FaultStudy(NetworkFile.Read(args[0]), new MachineDecrement()).FlowsAt(args[1]));
+    var network = NetworkFile.Read(args[0]);
+    Print(network, new FaultStudy(network, new MachineDecrement()).FlowsAt(args[1]));
     return 0;
 }
 catch (Exception known) when (known is NetworkFileException or SingularNetworkException or UnknownIdException
@@ -31,13 +32,17 @@ catch (Exception known) when (known is NetworkFileException or SingularNetworkEx
     return 1;
 }
 
-static void Print(FaultFlows flows)
+static void Print(Network network, FaultFlows flows)
 {
+    var nominalKv = network.Buses.ToDictionary(bus => bus.Id, bus => bus.NominalKv);
+    double Mva(SourceFlow source) => Math.Sqrt(3) * nominalKv[source.BusId] * source.IntoBusKa.Magnitude;
+
     Console.WriteLine($"Fault at {flows.BusId}: I″k = {Ka(flows.FaultCurrentKa).Trim()}. Angles are against the voltage before the fault.");
 
-    Console.WriteLine("\nSources                                      into their bus");
-    foreach (var source in flows.Sources.OrderByDescending(one => one.IntoBusKa.Magnitude))
-        Console.WriteLine($"  {source.Id,-16} at {source.BusId,-16}  {Ka(source.IntoBusKa)}");
+    Console.WriteLine("\nSources, the strongest first                 into their bus");
+    foreach (var source in flows.Sources.OrderByDescending(Mva))
+        Console.WriteLine(FormattableString.Invariant(
+            $"  {source.Id,-16} at {source.BusId,-16}  {Ka(source.IntoBusKa),-20} {Mva(source),8:0.0} MVA"));
 
     Console.WriteLine("\nBranches                                     from the bus into the branch");
     foreach (var branch in flows.Branches)
