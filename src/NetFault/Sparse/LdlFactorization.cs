@@ -17,6 +17,10 @@ internal sealed unsafe class LdlFactorization
     /// <summary>A pivot below this share of what it was summed from is shifted: it consists mostly of rounding.</summary>
     private const double CancellationTolerance = 1e-10;
 
+    /// <summary>A pivot below this multiple of the rounding error it may carry is shifted: fewer than three of its digits are known.</summary>
+    private const double ErrorTolerance = 1e3;
+
+    private const double UnitRoundoff = 1.1e-16;
     private const int None = -1;
 
     private readonly SymbolicFactor symbolic;
@@ -71,18 +75,20 @@ internal sealed unsafe class LdlFactorization
         int n = symbolic.Order;
         using var links = new Scratch<int>(3 * n + 1);
         using var full = new Scratch<Complex>(2 * n + 1);
+        using var errors = new Scratch<double>(n + 1);
         links.Span.Slice(0, n).Fill(None);
         fixed (int* head = links, columns = symbolic.ColumnStart, rows = symbolic.RowIndex)
         fixed (Complex* work = full, l = lower, d = inversePivot)
+        fixed (double* error = errors)
         {
-            var columnsOf = new Columns(head, head + n, head + 2 * n, columns, rows, l, work, work + n);
+            var columnsOf = new Columns(head, head + n, head + 2 * n, columns, rows, l, work, work + n, error);
             for (int j = 0; j < n; j++)
             {
                 columnsOf.Gather(j);
                 double magnitude = ComplexKernel.Size(d[j]);
                 Complex pivot = columnsOf.Update(j, d[j], ref magnitude);
                 double columnMax = columnsOf.PutBack(j);
-                pivot = Check(j, pivot, magnitude, columnMax);
+                pivot = Check(j, pivot, magnitude, columnMax, error[j] * UnitRoundoff);
                 d[j] = ComplexKernel.Reciprocal(pivot);
                 columnsOf.Scale(j, pivot, d[j]);
             }
@@ -90,11 +96,11 @@ internal sealed unsafe class LdlFactorization
     }
 
     /// <summary>Shifts a pivot that is too small for its column, or for what it was summed from.</summary>
-    private Complex Check(int j, Complex pivot, double magnitude, double columnMax)
+    private Complex Check(int j, Complex pivot, double magnitude, double columnMax, double error)
     {
         double scale = Math.Max(magnitude, columnMax), size = ComplexKernel.Size(pivot);
         largest = Math.Max(largest, scale);
-        if (size > GrowthTolerance * columnMax && size > CancellationTolerance * magnitude)
+        if (size > GrowthTolerance * columnMax && size > CancellationTolerance * magnitude && size > ErrorTolerance * error)
         {
             return pivot;
         }
@@ -107,8 +113,9 @@ internal sealed unsafe class LdlFactorization
         // In the direction of what is left of the pivot, so that the sum cannot cancel.
         double modulus = Complex.Abs(pivot);
         Complex direction = modulus > 0 ? pivot / modulus : Complex.One;
-        Complex shift = direction * (scale > 0 ? scale : 1);
-        shifts.Add(new PivotShift(j, shift));
+        scale = scale > 0 ? scale : 1;
+        Complex shift = direction * scale;
+        shifts.Add(new PivotShift(j, shift, error / scale));
         return pivot + shift;
     }
 
@@ -123,9 +130,12 @@ internal sealed unsafe class LdlFactorization
         private readonly Complex* l;
         private readonly Complex* full;
         private readonly Complex* pivots;
+        private readonly double* errors;    // bound of each pivot's error, in units of roundoff
 
-        public Columns(int* head, int* next, int* current, int* columns, int* rows, Complex* l, Complex* full, Complex* pivots)
+        public Columns(
+            int* head, int* next, int* current, int* columns, int* rows, Complex* l, Complex* full, Complex* pivots, double* errors)
         {
+            this.errors = errors;
             this.head = head;
             this.next = next;
             this.current = current;
@@ -144,10 +154,13 @@ internal sealed unsafe class LdlFactorization
             }
         }
 
-        /// <summary>Takes l_jk·d_k·L(j:n, k) off column j for every k with l_jk ≠ 0.</summary>
+        /// <summary>
+        /// Takes l_jk·d_k·L(j:n, k) off column j for every k with l_jk ≠ 0. Keeps a running error bound as it goes (Higham, section 3.3):
+        /// the rounding of the sum, and |l_jk|² times the error of each pivot d_k.
+        /// </summary>
         public Complex Update(int j, Complex pivot, ref double magnitude)
         {
-            double re = pivot.Real, im = pivot.Imaginary, sum = magnitude;
+            double re = pivot.Real, im = pivot.Imaginary, sum = magnitude, error = 0;
             int following;
             for (int k = head[j]; k != None; k = following)
             {
@@ -157,12 +170,14 @@ internal sealed unsafe class LdlFactorization
                 re -= term.Real;
                 im -= term.Imaginary;
                 sum += ComplexKernel.Size(term);
+                error += (entry.Real * entry.Real + entry.Imaginary * entry.Imaginary) * errors[k];
                 p++;
                 ComplexKernel.SubtractProduct(full, rows + p, l + p, end - p, factor);
                 Advance(k, p, end);
             }
 
             magnitude = sum;
+            errors[j] = error + sum;
             return new Complex(re, im);
         }
 

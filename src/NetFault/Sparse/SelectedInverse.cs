@@ -41,6 +41,20 @@ internal sealed class SelectedInverse
         return inverse;
     }
 
+    /// <summary>The diagonal alone, in original numbering, without keeping the rest.</summary>
+    public static void DiagonalOf(LdlFactor factor, Span<Complex> diagonal)
+    {
+        Debug.Assert(diagonal.Length == factor.Order);
+        if (factor.Correction is not null)
+        {
+            Of(factor).Diagonal.CopyTo(diagonal);
+            return;
+        }
+
+        using var below = new Scratch<Complex>(factor.Lower.Length + 1);
+        TakahashiRecursion.Run(factor, below.Span, diagonal);
+    }
+
     /// <summary>
     /// As <see cref="Of(LdlFactor)"/>, then checks Σ_j A_kj·Z_jk = 1 for each node and solves anew, with refinement, for those whose
     /// residual is not at rounding level.

@@ -119,7 +119,7 @@ internal sealed unsafe class SymbolicFactor
             for (int k = 0; k < n; k++)
             {
                 int node = NodeAt[k];
-                visited[k] = k; // k is new to this array: earlier rows left smaller marks, or none
+                visited[k] = k; // before any later row looks at it, so the array need not be cleared
                 for (int p = start[node], last = start[node + 1]; p < last; p++)
                 {
                     for (int i = at[neighbour[p]]; i < k && visited[i] != k; i = up[i])

@@ -12,7 +12,7 @@ internal static unsafe class TakahashiRecursion
     /// <param name="factor">The factors.</param>
     /// <param name="below">Out: Z below the diagonal, on the pattern of L.</param>
     /// <param name="diagonal">Out: the diagonal of Z, in original numbering.</param>
-    public static void Run(LdlFactor factor, Complex[] below, Complex[] diagonal)
+    public static void Run(LdlFactor factor, Span<Complex> below, Span<Complex> diagonal)
     {
         SymbolicFactor symbolic = factor.Symbolic;
         Supernodes supernodes = symbolic.Supernodes;

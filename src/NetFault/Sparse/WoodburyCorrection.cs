@@ -8,6 +8,9 @@ namespace NetFault.Sparse;
 /// </summary>
 internal sealed class WoodburyCorrection
 {
+    /// <summary>The bound on the pivots' errors is of first order, and leaves out those of the entries beside them.</summary>
+    private const double SafetyFactor = 8;
+
     private readonly int[] places;
     private readonly Complex[] amounts;
     private readonly DenseFactor small;
@@ -16,15 +19,16 @@ internal sealed class WoodburyCorrection
     public WoodburyCorrection(LdlFactor factor, PivotShift[] shifts)
     {
         int m = shifts.Length;
+        double tolerance = 16 * 2.2e-16;
         places = new int[m];
         amounts = new Complex[m];
         for (int c = 0; c < m; c++)
         {
             places[c] = shifts[c].Place;
             amounts[c] = shifts[c].Amount;
+            tolerance = Math.Max(tolerance, SafetyFactor * shifts[c].Uncertainty);
         }
 
-        double tolerance = (16 + factor.Order) * 2.2e-16;
         small = new DenseFactor(SmallMatrix(factor), m, tolerance);
         if (small.SingularRow >= 0)
         {

@@ -293,24 +293,26 @@ int nf_kernel(int n, const int *cs, const int *ri, const cplx *diag, const cplx 
     /* ---- numeric, left-looking ---- */
     cplx *l = calloc(lnz + 1, sizeof(cplx)), *d = malloc((n + 1) * sizeof(cplx)), *piv = malloc((n + 1) * sizeof(cplx));
     cplx *y = calloc(n + 1, sizeof(cplx)), *z = malloc((lnz + 1) * sizeof(cplx));
+    double *err = malloc((n + 1) * sizeof(double));
     int *head = seen, *link = next, *cur = count;
     double worst = 0;
     for (int s = 0; s < m; s++) l[pos[s]] = off[s];
     memset(head, -1, n * sizeof(int));
     for (int j = 0; j < n; j++) {
         cplx a = diag[node[j]];
-        double mag = size1(a), max = 0;
+        double mag = size1(a), max = 0, e0 = 0;
         for (int p = cols[j]; p < cols[j + 1]; p++) y[rows[p]] = l[p];
         for (int k = head[j], after; k >= 0; k = after) {
             after = link[k];
             int p = cur[k], e = cols[k + 1];
             cplx f = mul(l[p], piv[k]), t = mul(l[p], f);
-            a.re -= t.re; a.im -= t.im; mag += size1(t);
+            a.re -= t.re; a.im -= t.im; mag += size1(t); e0 += (l[p].re * l[p].re + l[p].im * l[p].im) * err[k];
             if (++p < e) { int r = rows[p]; cur[k] = p; link[k] = head[r]; head[r] = k; }
             for (; p < e; p++) { cplx u = mul(l[p], f), *q = y + rows[p]; q->re -= u.re; q->im -= u.im; }
         }
         for (int p = cols[j]; p < cols[j + 1]; p++) { l[p] = y[rows[p]]; max = fmax(max, size1(l[p])); }
-        if (!(size1(a) > 1e-2 * max && size1(a) > 1e-10 * mag)) worst = 1;
+        err[j] = e0 + mag;
+        if (!(size1(a) > 1e-2 * max && size1(a) > 1e-10 * mag && size1(a) > 1.1e-13 * err[j])) worst = 1;
         piv[j] = a; d[j] = inv(a);
         if (cols[j] < cols[j + 1]) { int r = rows[cols[j]]; cur[j] = cols[j]; link[j] = head[r]; head[r] = j; }
         for (int p = cols[j]; p < cols[j + 1]; p++) l[p] = mul(l[p], d[j]);
@@ -372,6 +374,6 @@ int nf_kernel(int n, const int *cs, const int *ri, const cplx *diag, const cplx 
     for (int s = 0; s < m; s++) zo[s] = z[pos[s]];
     int *gone[] = {start, nb, slot, copy, order, place, parent, count, seen, post, back, node, up, cols, next, pos, rows};
     for (int k = 0; k < 17; k++) free(gone[k]);
-    free(l); free(d); free(piv); free(y); free(z);
+    free(l); free(d); free(piv); free(y); free(z); free(err);
     return worst ? -lnz : lnz;
 }

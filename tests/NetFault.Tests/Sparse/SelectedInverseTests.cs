@@ -12,6 +12,20 @@ public class SelectedInverseTests
     public void The_selected_inverse_of_a_passive_network_agrees_with_a_dense_inverse() =>
         TestMatrix.Passive(100).Sample(matrix => AgreesWithDense(matrix, SelectedInverse.Of(matrix.Factor())));
 
+    // Oracle: the selected inverse itself, which the other tests check.
+    [Fact]
+    public void The_diagonal_alone_is_the_same_to_the_bit() =>
+        TestMatrix.WithNegativeReactances(60).Sample(matrix =>
+        {
+            if (matrix.Condition() < 1e12)
+            {
+                LdlFactor factor = matrix.Factor();
+                Complex[] diagonal = new Complex[matrix.Order];
+                SelectedInverse.DiagonalOf(factor, diagonal);
+                diagonal.Should().Equal(SelectedInverse.Of(factor).Diagonal.ToArray());
+            }
+        });
+
     // Oracle: as above, with the health check and its repairs in the way.
     [Fact]
     public void Negative_reactances_leave_the_selected_inverse_in_agreement_with_a_dense_inverse() =>
