@@ -45,7 +45,7 @@ static void Run(string path, string? tieId)
 }
 
 static IReadOnlyList<BusFault> EveryBus(Network network) =>
-    new FaultStudy(network, new MachineDecrement { Instants = FaultInstants.Initial }).EveryBus();
+    new FaultStudy(network, new MachineDecrement { Instants = FaultInstants.InitialOnly }).EveryBus();
 
 static void Print(Network network, string tieId, IReadOnlyList<Change> changes)
 {

@@ -72,7 +72,9 @@ public sealed class BusFault
     public XOverRRule XOverRRule => _context.Method.RatioRule;
 
     /// <summary>How the DC component, and with it the peak, is taken to decay.</summary>
-    public DcDecayRule DcDecayRule => XOverR.HasValue ? DcDecayRule.ByXOverR : DcDecayRule.Undamped;
+    public DcDecayRule DcDecayRule => IsEnergised
+        ? XOverR.HasValue ? DcDecayRule.ByXOverR : DcDecayRule.Undamped
+        : DcDecayRule.NoCurrent;
 
     /// <summary>How the AC component is taken over time.</summary>
     public AcComponentRule AcComponentRule => _currents?.AcComponentRule ?? AcComponentRule.HeldAtInitial;

@@ -53,12 +53,12 @@ public enum FaultInstant
     SteadyState,
 }
 
-/// <summary>A choice of instants.</summary>
+/// <summary>A choice of the instants to calculate beside the initial one.</summary>
 [Flags]
 public enum FaultInstants
 {
-    /// <summary>I″k alone.</summary>
-    Initial = 0,
+    /// <summary>I″k alone, which always is calculated.</summary>
+    InitialOnly = 0,
 
     /// <summary>I′k too.</summary>
     Transient = 1,

@@ -24,6 +24,9 @@ public enum DcDecayRule
 
     /// <summary>Not at all: the upper bound that is taken where there is no X/R.</summary>
     Undamped,
+
+    /// <summary>There is no current: the bus is de-energised.</summary>
+    NoCurrent,
 }
 
 /// <summary>How the AC component is taken over time.</summary>

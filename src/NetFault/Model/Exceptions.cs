@@ -39,7 +39,7 @@ public sealed class UnknownIdException : ArgumentException
     public IReadOnlyList<string> NearestIds { get; }
 
     private static string Suggestion(IReadOnlyList<string> nearest) =>
-        nearest.Count == 0 ? string.Empty : " The nearest are " + string.Join(", ", nearest.Select(one => $"\"{one}\"")) + ".";
+        nearest.Count == 0 ? string.Empty : " Did you mean " + string.Join(" or ", nearest.Select(one => $"\"{one}\"")) + "?";
 }
 
 /// <summary>

@@ -6,7 +6,7 @@ namespace NetFault;
 /// </summary>
 public sealed class Network
 {
-    private readonly Dictionary<(string Section, string Id), NetworkElement> _byId;
+    private readonly Dictionary<(Type Kind, string Id), NetworkElement> _byId;
 
     internal Network(NetworkDraft draft)
     {
@@ -27,7 +27,7 @@ public sealed class Network
             .. Buses, .. NetworkFeeders, .. SynchronousMachines, .. AsynchronousMotors,
             .. Transformers, .. ThreeWindingTransformers, .. Lines, .. SeriesReactors, .. BusCouplers,
         ];
-        _byId = Elements.ToDictionary(element => (element.Section, element.Id));
+        _byId = Elements.ToDictionary(element => (element.GetType(), element.Id));
         Topology = new NetworkTopology(this);
     }
 
@@ -84,18 +84,29 @@ public sealed class Network
     /// <param name="id">The coupler's id.</param>
     /// <param name="closed">True closes it.</param>
     /// <exception cref="UnknownIdException">There is no such coupler; the exception names the nearest ids.</exception>
-    public Network WithCoupler(string id, bool closed) => With(Find<BusCoupler>("bus_couplers", id) with { Closed = closed });
+    /// <exception cref="ArgumentException">The coupler is out of service, so that its position makes no difference.</exception>
+    public Network WithCoupler(string id, bool closed)
+    {
+        var coupler = Find<BusCoupler>(id);
+        return coupler.InService
+            ? With(coupler with { Closed = closed })
+            : throw new ArgumentException($"coupler \"{id}\" is out of service: put it in service first", nameof(id));
+    }
 
     /// <summary>A builder that holds this network's elements, for changed copies.</summary>
     public NetworkBuilder ToBuilder() =>
         new NetworkBuilder { Title = Title, FrequencyHz = FrequencyHz, BaseMva = BaseMva }.Add([.. Elements]);
 
-    /// <summary>The element of a section with an id.</summary>
+    /// <summary>The element of a kind with an id, as in <c>network.Find&lt;Bus&gt;("MV-A")</c>.</summary>
+    /// <typeparam name="T">The kind: <see cref="Bus"/>, <see cref="Line"/> and so on.</typeparam>
+    /// <param name="id">The element's id.</param>
     /// <exception cref="UnknownIdException">There is none; the exception names the nearest ids.</exception>
-    internal T Find<T>(string section, string id) where T : NetworkElement =>
-        _byId.TryGetValue((section, id), out var element)
+    public T Find<T>(string id) where T : NetworkElement =>
+        _byId.TryGetValue((typeof(T), Guard.NotNull(id)), out var element)
             ? (T)element
-            : throw new UnknownIdException(section, id, Elements.Where(one => one.Section == section).Select(one => one.Id));
+            : throw new UnknownIdException(KindName<T>(), id, Elements.OfType<T>().Select(one => one.Id));
+
+    private string KindName<T>() where T : NetworkElement => Elements.OfType<T>().FirstOrDefault()?.Section ?? typeof(T).Name;
 
     private static IReadOnlyList<T> Of<T>(NetworkDraft draft) => Array.AsReadOnly(draft.Elements.OfType<T>().ToArray());
 }

@@ -57,8 +57,8 @@ internal static class TableReport
 
     private static void AppendNotes(StringBuilder text, FaultStudy study, IReadOnlyList<BusFault> faults)
     {
-        text.Append('\n');
-        if (faults.Any(fault => fault.DcDecayRule == DcDecayRule.Undamped && fault.IsEnergised))
+        var start = text.Length;
+        if (faults.Any(fault => fault.DcDecayRule == DcDecayRule.Undamped))
             text.Append("u: no X/R at this bus; the DC component is taken as undamped, an upper bound\n");
         if (faults.Any(fault => !fault.IsEnergised))
             text.Append("d: de-energised, no path to a source\n");
@@ -67,6 +67,8 @@ internal static class TableReport
             text.Append("a: rests on values that the network does not give:\n");
         foreach (var group in groups)
             text.Append("   ").Append(group).Append('\n');
+        if (text.Length > start)
+            text.Insert(start, "\n");
     }
 
     /// <summary>Columns a text takes on a terminal, counted in text elements, not in UTF-16 units.</summary>

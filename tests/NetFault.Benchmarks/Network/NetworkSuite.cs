@@ -9,9 +9,9 @@ namespace NetFault.Benchmarks.Network;
 /// <summary>The library's main job, from a network in memory to the results at every bus, beside what else one could use for it.</summary>
 internal static class NetworkSuite
 {
-    private static readonly MachineDecrement InitialOnly = new() { Instants = FaultInstants.Initial };
+    private static readonly MachineDecrement InitialOnly = new() { Instants = FaultInstants.InitialOnly };
     private static readonly MachineDecrement AllInstants = new();
-    private static readonly MachineDecrement Separate = new() { Instants = FaultInstants.Initial, XOverRRule = XOverRRule.SeparateNetworks };
+    private static readonly MachineDecrement Separate = new() { Instants = FaultInstants.InitialOnly, XOverRRule = XOverRRule.SeparateNetworks };
 
     public static int Run(string[] args)
     {
