@@ -6,28 +6,28 @@ namespace NetFault;
 /// </summary>
 public sealed class Network
 {
-    private readonly Dictionary<(string Section, string Id), NetworkElement> _byId;
+    private readonly NetworkDraft _draft;
 
     internal Network(NetworkDraft draft)
     {
+        _draft = draft;
         Title = draft.Title;
         FrequencyHz = draft.FrequencyHz;
         BaseMva = draft.BaseMva;
-        Buses = Of<Bus>(draft);
-        NetworkFeeders = Of<NetworkFeeder>(draft);
-        SynchronousMachines = Of<SynchronousMachine>(draft);
-        AsynchronousMotors = Of<AsynchronousMotor>(draft);
-        Transformers = Of<Transformer>(draft);
-        ThreeWindingTransformers = Of<ThreeWindingTransformer>(draft);
-        Lines = Of<Line>(draft);
-        SeriesReactors = Of<SeriesReactor>(draft);
-        BusCouplers = Of<BusCoupler>(draft);
+        Buses = draft.Of<Bus>("buses");
+        NetworkFeeders = draft.Of<NetworkFeeder>("network_feeders");
+        SynchronousMachines = draft.Of<SynchronousMachine>("synchronous_machines");
+        AsynchronousMotors = draft.Of<AsynchronousMotor>("asynchronous_motors");
+        Transformers = draft.Of<Transformer>("transformers");
+        ThreeWindingTransformers = draft.Of<ThreeWindingTransformer>("three_winding_transformers");
+        Lines = draft.Of<Line>("lines");
+        SeriesReactors = draft.Of<SeriesReactor>("series_reactors");
+        BusCouplers = draft.Of<BusCoupler>("bus_couplers");
         Elements =
         [
             .. Buses, .. NetworkFeeders, .. SynchronousMachines, .. AsynchronousMotors,
             .. Transformers, .. ThreeWindingTransformers, .. Lines, .. SeriesReactors, .. BusCouplers,
         ];
-        _byId = Elements.ToDictionary(element => (element.Section, element.Id));
         Topology = new NetworkTopology(this);
     }
 
@@ -93,9 +93,7 @@ public sealed class Network
     /// <summary>The element of a section with an id.</summary>
     /// <exception cref="UnknownIdException">There is none; the exception names the nearest ids.</exception>
     internal T Find<T>(string section, string id) where T : NetworkElement =>
-        _byId.TryGetValue((section, id), out var element)
+        _draft.Find(section, id) is { } element
             ? (T)element
-            : throw new UnknownIdException(section, id, Elements.Where(one => one.Section == section).Select(one => one.Id));
-
-    private static IReadOnlyList<T> Of<T>(NetworkDraft draft) => Array.AsReadOnly(draft.Elements.OfType<T>().ToArray());
+            : throw new UnknownIdException(section, id, _draft.IdsOf(section));
 }
