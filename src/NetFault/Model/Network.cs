@@ -6,28 +6,28 @@ namespace NetFault;
 /// </summary>
 public sealed class Network
 {
-    private readonly Dictionary<(Type Kind, string Id), NetworkElement> _byId;
+    private readonly NetworkDraft _draft;
 
     internal Network(NetworkDraft draft)
     {
+        _draft = draft;
         Title = draft.Title;
         FrequencyHz = draft.FrequencyHz;
         BaseMva = draft.BaseMva;
-        Buses = Of<Bus>(draft);
-        NetworkFeeders = Of<NetworkFeeder>(draft);
-        SynchronousMachines = Of<SynchronousMachine>(draft);
-        AsynchronousMotors = Of<AsynchronousMotor>(draft);
-        Transformers = Of<Transformer>(draft);
-        ThreeWindingTransformers = Of<ThreeWindingTransformer>(draft);
-        Lines = Of<Line>(draft);
-        SeriesReactors = Of<SeriesReactor>(draft);
-        BusCouplers = Of<BusCoupler>(draft);
+        Buses = draft.Of<Bus>("buses");
+        NetworkFeeders = draft.Of<NetworkFeeder>("network_feeders");
+        SynchronousMachines = draft.Of<SynchronousMachine>("synchronous_machines");
+        AsynchronousMotors = draft.Of<AsynchronousMotor>("asynchronous_motors");
+        Transformers = draft.Of<Transformer>("transformers");
+        ThreeWindingTransformers = draft.Of<ThreeWindingTransformer>("three_winding_transformers");
+        Lines = draft.Of<Line>("lines");
+        SeriesReactors = draft.Of<SeriesReactor>("series_reactors");
+        BusCouplers = draft.Of<BusCoupler>("bus_couplers");
         Elements =
         [
             .. Buses, .. NetworkFeeders, .. SynchronousMachines, .. AsynchronousMotors,
             .. Transformers, .. ThreeWindingTransformers, .. Lines, .. SeriesReactors, .. BusCouplers,
         ];
-        _byId = Elements.ToDictionary(element => (element.GetType(), element.Id));
         Topology = new NetworkTopology(this);
     }
 
@@ -101,12 +101,11 @@ public sealed class Network
     /// <typeparam name="T">The kind: <see cref="Bus"/>, <see cref="Line"/> and so on.</typeparam>
     /// <param name="id">The element's id.</param>
     /// <exception cref="UnknownIdException">There is none; the exception names the nearest ids.</exception>
-    public T Find<T>(string id) where T : NetworkElement =>
-        _byId.TryGetValue((typeof(T), Guard.NotNull(id)), out var element)
-            ? (T)element
-            : throw new UnknownIdException(KindName<T>(), id, Elements.OfType<T>().Select(one => one.Id));
-
-    private string KindName<T>() where T : NetworkElement => Elements.OfType<T>().FirstOrDefault()?.Section ?? typeof(T).Name;
-
-    private static IReadOnlyList<T> Of<T>(NetworkDraft draft) => Array.AsReadOnly(draft.Elements.OfType<T>().ToArray());
+    public T Find<T>(string id) where T : NetworkElement
+    {
+        Guard.NotNull(id);
+        if (Elements[Topology.FirstOfKind<T>()] is not T { Section: var section })
+            throw new UnknownIdException(typeof(T).Name, id, []);
+        return _draft.Find(section, id) as T ?? throw new UnknownIdException(section, id, _draft.IdsOf(section));
+    }
 }

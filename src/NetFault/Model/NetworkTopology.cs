@@ -88,8 +88,9 @@ internal sealed class NetworkTopology
         {
             if (!_firstOfKind.ContainsKey(elements[i].GetType()))
                 _firstOfKind.Add(elements[i].GetType(), i);
-            foreach (var id in elements[i].Terminals)
-                bus.Add(id is null ? -1 : _busIndex[id]);
+            var terminals = elements[i].Terminals;
+            for (var at = 0; at < terminals.Count; at++)
+                bus.Add(terminals[at] is { } id ? _busIndex[id] : -1);
             start[i + 1] = bus.Count;
         }
         return (start, bus.ToArray());

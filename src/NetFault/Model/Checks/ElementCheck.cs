@@ -120,18 +120,33 @@ internal sealed class ElementCheck
             Say(key, Problems.NeededFor(reason));
     }
 
-    public void ExactlyOne(params (string Key, bool Given)[] forms)
+    public void ExactlyOne(params ReadOnlySpan<(string Key, bool Given)> forms)
     {
-        AtMostOne(forms);
-        if (!forms.Any(form => form.Given || IsReported(form.Key)))
-            Say(null, Problems.NoForm(string.Join(", ", forms.Select(form => form.Key))));
+        if (FirstGiven(forms) is null)
+            Say(null, Problems.NoForm(string.Join(", ", forms.ToArray().Select(form => form.Key))));
+        else
+            AtMostOne(forms);
     }
 
-    public void AtMostOne(params (string Key, bool Given)[] forms)
+    public void AtMostOne(params ReadOnlySpan<(string Key, bool Given)> forms)
     {
-        var given = forms.Where(form => form.Given || IsReported(form.Key)).Select(form => form.Key).ToList();
-        for (var i = 1; i < given.Count; i++)
-            Say(given[i], Problems.BothForms(given[0], given[i]));
+        var first = FirstGiven(forms);
+        foreach (var (key, given) in forms)
+        {
+            if (given && first != key)
+                Say(key, Problems.BothForms(first!, key));
+        }
+    }
+
+    /// <summary>The first of the forms that stands, well or badly.</summary>
+    private string? FirstGiven(ReadOnlySpan<(string Key, bool Given)> forms)
+    {
+        foreach (var (key, given) in forms)
+        {
+            if (given || IsReported(key))
+                return key;
+        }
+        return null;
     }
 
     public void RatedVoltage(string key, double? ratedKv, string? bus)

@@ -12,8 +12,9 @@ internal static class NetworkCheck
         if (draft.Elements.Count == 0)
             return found;
         var check = new ElementCheck(draft, found, draft.Elements[0]);
-        foreach (var element in draft.Elements)
+        for (var i = 0; i < draft.Elements.Count; i++)
         {
+            var element = draft.Elements[i];
             if (element.Id.Length == 0)
                 found.Add(Problems.BlankId(element.Section).At(element.Section, null, null));
             check.Run(element, reportedKeys?.Invoke(element));

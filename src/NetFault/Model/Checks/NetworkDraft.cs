@@ -6,13 +6,16 @@ namespace NetFault;
 /// </summary>
 internal sealed class NetworkDraft
 {
-    private readonly Dictionary<string, Dictionary<string, NetworkElement?>> _sections = new(StringComparer.Ordinal);
+    private readonly Dictionary<string, SectionDraft> _sections = new(StringComparer.Ordinal);
     private readonly List<NetworkElement> _elements = [];
-    private readonly Dictionary<string, NetworkElement?> _buses;
+    private readonly SectionDraft _buses;
+
+    /// <summary>The section of the last element: elements of a section come one after the other.</summary>
+    private SectionDraft _last;
 
     public NetworkDraft()
     {
-        _buses = SectionOf("buses");
+        _buses = _last = SectionOf("buses");
     }
 
     public string? Title { get; set; }
@@ -23,14 +26,16 @@ internal sealed class NetworkDraft
 
     public IReadOnlyList<NetworkElement> Elements => _elements;
 
-    public IEnumerable<string> BusIds => _buses.Keys;
+    public IReadOnlyCollection<string> BusIds => _buses.ById.Keys;
 
     /// <summary>Adds an element; false where its section has the id already.</summary>
     public bool Add(NetworkElement element)
     {
-        if (!Declare(element.Section, element.Id))
+        var section = _last.Name == element.Section ? _last : _last = SectionOf(element.Section);
+        if (section.ById.ContainsKey(element.Id))
             return false;
-        SectionOf(element.Section)[element.Id] = element;
+        section.ById.Add(element.Id, element);
+        section.Elements.Add(element);
         _elements.Add(element);
         return true;
     }
@@ -38,27 +43,47 @@ internal sealed class NetworkDraft
     /// <summary>Notes that an id stands in a section; false where it stood there already.</summary>
     public bool Declare(string section, string id)
     {
-        var ids = SectionOf(section);
+        var ids = SectionOf(section).ById;
         if (ids.ContainsKey(id))
             return false;
         ids.Add(id, null);
         return true;
     }
 
-    public bool HasBus(string id) => _buses.ContainsKey(id);
+    public bool HasBus(string id) => _buses.ById.ContainsKey(id);
 
-    public Bus? FindBus(string id) => _buses.TryGetValue(id, out var bus) ? (Bus?)bus : null;
+    public Bus? FindBus(string id) => _buses.ById.TryGetValue(id, out var bus) ? (Bus?)bus : null;
 
-    public NetworkElement? Find(string section, string id) => SectionOf(section).TryGetValue(id, out var element) ? element : null;
+    /// <summary>The element of a section with an id, or null. Changes nothing, so that a network may be asked from many threads.</summary>
+    public NetworkElement? Find(string section, string id) =>
+        _sections.TryGetValue(section, out var known) && known.ById.TryGetValue(id, out var element) ? element : null;
 
-    public bool Declares(string section, string id) => SectionOf(section).ContainsKey(id);
+    public bool Declares(string section, string id) => _sections.TryGetValue(section, out var known) && known.ById.ContainsKey(id);
 
-    public IEnumerable<string> IdsOf(string section) => SectionOf(section).Keys;
+    public IReadOnlyCollection<string> IdsOf(string section) => _sections.TryGetValue(section, out var known) ? known.ById.Keys : [];
 
-    private Dictionary<string, NetworkElement?> SectionOf(string name)
+    /// <summary>The elements of a section in the order in which they were added.</summary>
+    public IReadOnlyList<T> Of<T>(string section) where T : NetworkElement =>
+        _sections.TryGetValue(section, out var known) ? Array.AsReadOnly(Array.ConvertAll(known.Elements.ToArray(), one => (T)one)) : [];
+
+    private SectionDraft SectionOf(string name)
     {
         if (!_sections.TryGetValue(name, out var section))
-            _sections.Add(name, section = new Dictionary<string, NetworkElement?>(StringComparer.Ordinal));
+            _sections.Add(name, section = new SectionDraft(name));
         return section;
+    }
+
+    private sealed class SectionDraft
+    {
+        public SectionDraft(string name)
+        {
+            Name = name;
+        }
+
+        public string Name { get; }
+
+        public Dictionary<string, NetworkElement?> ById { get; } = new(StringComparer.Ordinal);
+
+        public List<NetworkElement> Elements { get; } = [];
     }
 }

@@ -67,7 +67,7 @@ internal sealed class EventReader
         var key = Current;
         if (key is not AnchorAlias)
         {
-            var problem = FileProblems.KeyIsNotText(FileProblems.KindName(ElementReader.KindOf(key)));
+            var problem = FileProblems.KeyIsNotText(FileProblems.KindName(Field.KindOf(key)));
             _problems.Add(problem.At(section, id, null), Offset(key), 1);
         }
         SkipValue();

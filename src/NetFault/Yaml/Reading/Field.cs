@@ -1,7 +1,10 @@
+using YamlDotNet.Core;
+using YamlDotNet.Core.Events;
+
 namespace NetFault;
 
 /// <summary>The kind of a value as it stands in the file.</summary>
-internal enum FieldKind
+internal enum FieldKind : byte
 {
     /// <summary>Nothing after the colon.</summary>
     Blank,
@@ -22,19 +25,39 @@ internal enum FieldKind
     Refused,
 }
 
-/// <summary>A key of an element with its value, as it stands in the file.</summary>
-internal struct Field
+/// <summary>
+/// A known key with its value, as offsets into the text. Without references on purpose: fields of a whole file stand in one array while it
+/// is scanned, and the garbage collector need not look at them.
+/// </summary>
+internal readonly struct Field
 {
-    public string Key;
+    /// <summary>The position of the key in its <see cref="KeySet"/>.</summary>
+    public required short Key { get; init; }
 
-    /// <summary>The text of a single value.</summary>
-    public string Text;
-    public FieldKind Kind;
+    /// <summary>The position, among the element's fields, of the mapping that holds this key; −1 for the element itself.</summary>
+    public required short Parent { get; init; }
 
-    /// <summary>The position in the element's fields of the mapping that holds this key; −1 for the element itself.</summary>
-    public int Parent;
-    public int KeyOffset;
-    public int KeyLength;
-    public int Offset;
-    public int Length;
+    public required FieldKind Kind { get; init; }
+
+    public required int KeyOffset { get; init; }
+
+    public required int KeyLength { get; init; }
+
+    public required int Offset { get; init; }
+
+    public required int Length { get; init; }
+
+    /// <summary>Where to show the field: a single value itself, the key where there is more or less than that.</summary>
+    public (int Offset, int Length) Place =>
+        Kind is FieldKind.Plain or FieldKind.Quoted ? (Offset, Length) : (KeyOffset, KeyLength);
+
+    /// <summary>The kind of value that an event starts.</summary>
+    public static FieldKind KindOf(ParsingEvent value) => value switch
+    {
+        Scalar { Style: ScalarStyle.Plain } scalar => scalar.Value.Length == 0 ? FieldKind.Blank : FieldKind.Plain,
+        Scalar => FieldKind.Quoted,
+        MappingStart => FieldKind.Mapping,
+        SequenceStart => FieldKind.List,
+        _ => FieldKind.Refused,
+    };
 }

@@ -3,105 +3,77 @@ namespace NetFault;
 /// <summary>The values of an element, or of a mapping within it, asked for by key: each bad or missing one is reported here.</summary>
 internal sealed class FieldGroup : IFields
 {
-    private readonly ElementReader _reader;
+    private readonly ElementFields _element;
+    private KeySet _keys = KeySet.None;
     private int _parent;
+    private int _asked;
+    private string? _name;
     private bool _isGiven;
 
-    public FieldGroup(ElementReader reader)
+    public FieldGroup(ElementFields element)
     {
-        _reader = reader;
+        _element = element;
     }
 
-    public string Id => _reader.Id ?? string.Empty;
+    public string Id => _element.Id ?? string.Empty;
 
-    /// <summary>The key of this mapping; null for the element itself.</summary>
-    public string? Name { get; private set; }
+    private FieldTable Table => _element.Table;
 
-    public void Start(int parent, string? name, bool isGiven) => (_parent, Name, _isGiven) = (parent, name, isGiven);
+    /// <summary>Goes to another mapping.</summary>
+    public void Start(KeySet keys, int parent, string? name, bool isGiven) =>
+        (_keys, _parent, _name, _isGiven, _asked) = (keys, parent, name, isGiven, 0);
 
-    public double RequiredNumber(string key) => Required(key) ? Number(key) ?? double.NaN : double.NaN;
+    public double RequiredNumber(string key) => FindRequired(key) is var index and >= 0 ? NumberAt(index, key) : double.NaN;
 
-    public double? Number(string key) => Find(key) is var index and >= 0 ? NumberAt(index) : null;
+    public double? Number(string key) => Find(key) is var index and >= 0 ? NumberAt(index, key) : null;
 
-    public int? RequiredWhole(string key) => Required(key) ? Whole(key) : null;
+    public int? RequiredWhole(string key) => FindRequired(key) is var index and >= 0 ? WholeAt(index, key) : null;
 
-    public int? Whole(string key)
-    {
-        if (Find(key) is var index && index < 0)
-            return null;
-        ref readonly var field = ref _reader[index];
-        if (field.Kind == FieldKind.Plain && StrictNumber.TryParseWhole(field.Text, out var value))
-            return value;
-        if (!double.IsNaN(NumberAt(index)))
-            _reader.Report(index, FileProblems.NotWhole(field.Text));
-        return null;
-    }
+    public int? Whole(string key) => Find(key) is var index and >= 0 ? WholeAt(index, key) : null;
 
-    public string RequiredReference(string key) => Required(key) ? Reference(key) ?? string.Empty : string.Empty;
+    public string RequiredReference(string key) => FindRequired(key) is var index and >= 0 ? ReferenceAt(index, key) : string.Empty;
 
-    public string? Reference(string key)
-    {
-        if (Find(key) is var index && index < 0)
-            return null;
-        ref readonly var field = ref _reader[index];
-        if (field.Kind == FieldKind.Quoted || (field.Kind == FieldKind.Plain && field.Text != "~"))
-            return field.Text;
-        _reader.Report(index, WrongKind(in field, "an id"));
-        return string.Empty;
-    }
+    public string? Reference(string key) => Find(key) is var index and >= 0 ? ReferenceAt(index, key) : null;
 
     public string? Text(string key)
     {
         if (Find(key) is var index && index < 0)
             return null;
-        ref readonly var field = ref _reader[index];
-        if (field.Kind == FieldKind.Quoted || (field.Kind == FieldKind.Plain && !NumberProblems.IsNull(field.Text)))
-            return field.Text;
-        _reader.Report(index, WrongKind(in field, "text"));
+        if (IsText(index) && !IsNull(index))
+            return Table.Text(index);
+        Report(index, key, WrongKind(index, "text"));
         return null;
     }
 
-    public bool RequiredFlag(string key) => Required(key) && (Flag(key) ?? false);
+    public bool RequiredFlag(string key) => FindRequired(key) is var index and >= 0 && (FlagAt(index, key) ?? false);
 
-    public bool? Flag(string key)
-    {
-        if (Find(key) is var index && index < 0)
-            return null;
-        ref readonly var field = ref _reader[index];
-        if (field is { Kind: FieldKind.Plain, Text: "true" or "false" })
-            return field.Text == "true";
-        _reader.Report(index, NotAFlag(in field));
-        return null;
-    }
+    public bool? Flag(string key) => Find(key) is var index and >= 0 ? FlagAt(index, key) : null;
 
     public int? Choice(string key, params string[] words)
     {
         if (Find(key) is var index && index < 0)
             return null;
-        ref readonly var field = ref _reader[index];
-        if (field.Kind is not (FieldKind.Plain or FieldKind.Quoted) || NumberProblems.IsNull(field.Text))
-        {
-            _reader.Report(index, WrongKind(in field, "one of " + string.Join(", ", words)));
-            return null;
-        }
-        var choice = Array.IndexOf(words, field.Text);
+        var text = Table.Text(index);
+        var choice = IsText(index) ? Array.IndexOf(words, text) : -1;
         if (choice >= 0)
             return choice;
-        _reader.Report(index, FileProblems.NotAChoice(field.Text, string.Join(", ", words), NearestNames.Suggestion(field.Text, words)));
+        var choices = string.Join(", ", words);
+        Report(index, key, IsText(index) && !IsNull(index)
+            ? FileProblems.NotAChoice(text, choices, NearestNames.Suggestion(text, words))
+            : WrongKind(index, "one of " + choices));
         return null;
     }
 
     public IFields Group(string key, bool required, out bool given)
     {
-        var index = required && !Required(key) ? -1 : Find(key);
+        var index = required ? FindRequired(key) : Find(key);
         given = index >= 0;
-        if (!given)
-            return _reader.GroupBelow(-1, key, isGiven: false);
-        ref readonly var field = ref _reader[index];
-        if (field.Kind == FieldKind.Mapping)
-            return _reader.GroupBelow(index, key, isGiven: true);
-        _reader.Report(index, WrongKindOfGroup(in field, key));
-        return _reader.GroupBelow(-1, key, isGiven: false);
+        if (given && Table[index].Kind != FieldKind.Mapping)
+        {
+            Report(index, key, WrongKindOfGroup(Table[index].Kind, key));
+            index = -1;
+        }
+        return _element.GroupBelow(index, _keys.Find(key)!, index >= 0);
     }
 
     public IFields NumberOrGroup(string key, out double? number, out bool given)
@@ -109,72 +81,108 @@ internal sealed class FieldGroup : IFields
         var index = Find(key);
         given = index >= 0;
         number = null;
-        if (given && _reader[index].Kind == FieldKind.Mapping)
-            return _reader.GroupBelow(index, key, isGiven: true);
-        if (given)
-            number = NumberAt(index);
-        return _reader.GroupBelow(-1, key, isGiven: false);
+        var isGroup = given && Table[index].Kind == FieldKind.Mapping;
+        if (given && !isGroup)
+            number = NumberAt(index, key);
+        return _element.GroupBelow(index, _keys.Find(key)!, isGroup);
     }
 
-    private int Find(string key) => _isGiven ? _reader.Find(_parent, key) : -1;
-
-    /// <summary>Whether a required key stands; reports it where it does not.</summary>
-    private bool Required(string key)
+    /// <summary>The field of a key. Keys are mostly asked for in the order in which they were recorded.</summary>
+    private int Find(string key)
     {
-        if (Find(key) >= 0)
-            return true;
-        if (_isGiven)
-            _reader.ReportMissing(_parent, key);
-        return false;
+        if (!_isGiven)
+            return -1;
+        var keys = _keys.Keys;
+        var index = _asked < keys.Count && ReferenceEquals(keys[_asked].Name, key) ? _asked : _keys.Find(key)!.Index;
+        _asked = index + 1;
+        return _element.Find(_parent, index);
     }
 
-    private double NumberAt(int index)
+    /// <summary>The field of a required key; reports it where it does not stand.</summary>
+    private int FindRequired(string key)
     {
-        ref readonly var field = ref _reader[index];
-        if (field.Kind == FieldKind.Plain && StrictNumber.TryParse(field.Text, out var value))
+        var index = Find(key);
+        if (index < 0 && _isGiven)
+            _element.ReportMissing(_parent, Path(key));
+        return index;
+    }
+
+    private void Report(int index, string key, Problem problem) => _element.Report(index, Path(key), problem);
+
+    private string Path(string key) => _name is null ? key : _name + "." + key;
+
+    private double NumberAt(int index, string key)
+    {
+        var kind = Table[index].Kind;
+        var text = Table.Span(index);
+        if (kind == FieldKind.Plain && StrictNumber.TryParse(text, out var value))
         {
-            if (StrictNumber.IsInRange(field.Text, value))
+            if (StrictNumber.IsInRange(text, value))
                 return value;
-            _reader.Report(index, FileProblems.OutOfRange(field.Text));
+            Report(index, key, FileProblems.OutOfRange(text.ToString()));
+            return double.NaN;
         }
-        else
+        Report(index, key, kind switch
         {
-            _reader.Report(index, field.Kind switch
-            {
-                FieldKind.Plain => NumberProblems.Explain(field.Text),
-                FieldKind.Quoted => FileProblems.QuotedNumber(field.Text),
-                _ => WrongKind(in field, "a number"),
-            });
-        }
+            FieldKind.Plain => NumberProblems.Explain(text.ToString()),
+            FieldKind.Quoted => FileProblems.QuotedNumber(text.ToString()),
+            _ => WrongKind(index, "a number"),
+        });
         return double.NaN;
     }
 
-    /// <summary>The problem of a value of another kind than the single one that is needed.</summary>
-    private static Problem WrongKind(in Field field, string needed) => field.Kind switch
+    private int? WholeAt(int index, string key)
     {
-        FieldKind.Blank => FileProblems.Blank(needed),
-        FieldKind.Plain => FileProblems.Null(field.Text, needed),
-        _ => FileProblems.ValueNeeded(FileProblems.KindName(field.Kind), needed),
-    };
-
-    private static Problem WrongKindOfGroup(in Field field, string key)
-    {
-        var shape = $"{key}: {{...}}";
-        return field.Kind == FieldKind.Blank
-            ? FileProblems.Blank("a mapping")
-            : FileProblems.MappingNeeded(FileProblems.KindName(field.Kind), shape);
+        if (double.IsNaN(NumberAt(index, key)))
+            return null;
+        if (StrictNumber.TryParseWhole(Table.Span(index), out var value))
+            return value;
+        Report(index, key, FileProblems.NotWhole(Table.Text(index)));
+        return null;
     }
 
-    private static Problem NotAFlag(in Field field)
+    private string ReferenceAt(int index, string key)
     {
-        if (field.Kind is not (FieldKind.Plain or FieldKind.Quoted) || NumberProblems.IsNull(field.Text))
-            return WrongKind(in field, "true or false");
-        var remedy = field.Text.ToUpperInvariant() switch
+        var text = Table.Text(index);
+        if (Table[index].Kind == FieldKind.Quoted || (Table[index].Kind == FieldKind.Plain && text != "~"))
+            return text;
+        Report(index, key, WrongKind(index, "an id"));
+        return string.Empty;
+    }
+
+    private bool? FlagAt(int index, string key)
+    {
+        var text = Table.Text(index);
+        if (Table[index].Kind == FieldKind.Plain && text is "true" or "false")
+            return text == "true";
+        Report(index, key, IsText(index) && !IsNull(index) ? NotAFlag(text) : WrongKind(index, "true or false"));
+        return null;
+    }
+
+    private bool IsText(int index) => Table[index].Kind is FieldKind.Plain or FieldKind.Quoted;
+
+    private bool IsNull(int index) => Table[index].Kind == FieldKind.Plain && NumberProblems.IsNull(Table.Text(index));
+
+    /// <summary>The problem of a value of another kind than the single one that is needed.</summary>
+    private Problem WrongKind(int index, string needed) => Table[index].Kind switch
+    {
+        FieldKind.Blank => FileProblems.Blank(needed),
+        FieldKind.Plain => FileProblems.Null(Table.Text(index), needed),
+        var kind => FileProblems.ValueNeeded(FileProblems.KindName(kind), needed),
+    };
+
+    private static Problem WrongKindOfGroup(FieldKind kind, string key) => kind == FieldKind.Blank
+        ? FileProblems.Blank("a mapping")
+        : FileProblems.MappingNeeded(FileProblems.KindName(kind), key + ": {...}");
+
+    private static Problem NotAFlag(string text)
+    {
+        var remedy = text.ToUpperInvariant() switch
         {
             "YES" or "ON" or "Y" or "TRUE" => "write true",
             "NO" or "OFF" or "N" or "FALSE" => "write false",
             _ => null,
         };
-        return FileProblems.NotTrueOrFalse(field.Text, remedy);
+        return FileProblems.NotTrueOrFalse(text, remedy);
     }
 }

@@ -58,11 +58,11 @@ internal sealed class FileCompletion
         foreach (var (element, place) in _gathered.Duplicates)
         {
             var duplicate = Problems.DuplicateId(element.Section, element.Id).At(element.Section, element.Id, null);
-            var first = _gathered.Places.FindElement(element.Section, element.Id).GetValueOrDefault();
-            found.Add(Put(duplicate, _gathered.Places.IdOf(place)) with { RelatedLocation = Place(_gathered.Places.IdOf(first)) });
+            var first = _gathered.Elements.Find(element.Section, element.Id).GetValueOrDefault();
+            found.Add(Put(duplicate, _gathered.Elements.PlaceOf(place)) with { RelatedLocation = Place(_gathered.Elements.PlaceOf(first)) });
             var own = new List<Diagnostic>();
             new ElementCheck(_gathered.Draft, own, element).Run(element, _gathered.ReportedKeys(element));
-            found.AddRange(own.Select(one => Put(one, _gathered.Places.ValueOf(place, one.Key))));
+            found.AddRange(own.Select(one => Put(one, _gathered.Elements.PlaceOf(place, one.Key))));
         }
     }
 
@@ -73,8 +73,8 @@ internal sealed class FileCompletion
     {
         if (one.Location is not null)
             return one;
-        if (one.Section is not null && _gathered.Places.FindElement(one.Section, one.ElementId ?? string.Empty) is { } element)
-            return Put(one, _gathered.Places.ValueOf(element, one.Key));
+        if (one.Section is not null && _gathered.Elements.Find(one.Section, one.ElementId ?? string.Empty) is { } element)
+            return Put(one, _gathered.Elements.PlaceOf(element, one.Key));
         return _gathered.TopLevel.TryGetValue(one.Section ?? one.Key ?? "netfault", out var place) ? Put(one, place) : Put(one, (0, 1));
     }
 

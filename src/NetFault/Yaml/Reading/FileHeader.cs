@@ -10,47 +10,48 @@ internal sealed class FileHeader
 
     private static readonly KeySet Known = KeyRecorder.Record(fields => new Values(fields));
 
-    private readonly ElementReader _reader;
+    private readonly ProblemList _problems;
+    private readonly MappingReader _mapping;
+    private int _start;
 
     public FileHeader(EventReader events, ProblemList problems)
     {
-        _reader = new ElementReader(events, problems);
+        _problems = problems;
+        _mapping = new MappingReader(events, problems, new FieldTable(problems.Source.Text, Known.Keys.Count), Known);
     }
 
-    /// <summary>The keys' names.</summary>
-    public static IEnumerable<string> Names => Known.Names;
-
     /// <summary>The keys.</summary>
-    public static IReadOnlyList<KnownKey> Keys => Known.Keys;
+    public static KeySet Keys => Known;
 
-    public void Start(int offset) => _reader.Start(null, null, offset, 1);
+    public void Start(int offset) => _start = offset;
 
     /// <summary>Reads the key's value; false where the key is none of these.</summary>
     public bool TryRead(Scalar key)
     {
         if (Known.Find(key.Value) is not { } known)
             return false;
-        _reader.Append(known, -1);
+        _mapping.ReadField(known, -1);
         return true;
     }
 
     /// <summary>Notes that a key is probably there under a mistyped name.</summary>
-    public void Mistyped(string key) => _reader.Mistyped(-1, key);
+    public void AddMistyped(string key) => _mapping.AddMistyped(-1, key);
 
-    /// <summary>Puts the values into the draft and their places into the table.</summary>
+    /// <summary>Puts the values into the draft.</summary>
     public void Take(GatheredFile gathered)
     {
-        _reader.IsComplete = gathered.IsComplete;
-        for (var i = 0; i < _reader.Count; i++)
-            gathered.TopLevel[_reader[i].Key] = _reader.PlaceOf(i);
-        _reader.ExcuseMistyped();
-        var values = new Values(_reader.Root);
+        var table = _mapping.Fields;
+        for (var i = 0; i < table.Count; i++)
+            gathered.TopLevel[Known.Keys[table[i].Key].Name] = table[i].Place;
+        var fields = new ElementFields(_problems, table) { IsComplete = gathered.IsComplete };
+        fields.Start(null, null, (_start, 1), Known, (0, table.Count), _mapping.Mistyped());
+        var values = new Values(fields.Root);
         gathered.Draft.Title = values.Title;
         gathered.Draft.FrequencyHz = values.FrequencyHz;
         gathered.Draft.BaseMva = values.BaseMva ?? gathered.Draft.BaseMva;
         if (values.Format is { } format && format != Format)
-            gathered.OtherFormat = _reader.Report(_reader.Find(-1, "netfault"), FileProblems.OtherFormat(format, Format));
-        gathered.ReportedTopLevel.UnionWith(_reader.Reported ?? []);
+            gathered.OtherFormat = fields.Report(fields.Find(-1, 0), "netfault", FileProblems.OtherFormat(format, Format));
+        gathered.ReportedTopLevel.UnionWith(fields.Reported ?? []);
     }
 
     /// <summary>The values, asked for in one place.</summary>

@@ -5,14 +5,14 @@ internal sealed class GatheredFile
 {
     private Dictionary<NetworkElement, IReadOnlyCollection<string>>? _reported;
 
-    public GatheredFile(int textLength)
+    public GatheredFile(SourceText source)
     {
-        Places = new PlaceTable(textLength);
+        Elements = new ElementTable(source);
     }
 
     public NetworkDraft Draft { get; } = new();
 
-    public PlaceTable Places { get; }
+    public ElementTable Elements { get; }
 
     /// <summary>Elements whose id stands in their section already, with their place in the table.</summary>
     public List<(NetworkElement Element, int Place)> Duplicates { get; } = [];

@@ -50,13 +50,13 @@ internal sealed class KeyRecorder : IFields
     private KeyRecorder Nested(string key, KeyKind kind, bool required)
     {
         var nested = new KeyRecorder();
-        _keys.Add(new KnownKey(key, kind, required, nested._keys));
+        _keys.Add(key, kind, required, nested._keys);
         return nested;
     }
 
     private T Add<T>(string key, KeyKind kind, bool required, T value)
     {
-        _keys.Add(new KnownKey(key, kind, required));
+        _keys.Add(key, kind, required);
         return value;
     }
 }

@@ -23,19 +23,19 @@ internal sealed class NetworkFileReader
     /// <summary>Reads a file's text; the problems go to the list.</summary>
     public static GatheredFile Read(ProblemList problems)
     {
-        var gathered = new GatheredFile(problems.Source.Text.Length);
+        var gathered = new GatheredFile(problems.Source);
         var reader = new NetworkFileReader(problems, gathered);
         try
         {
             Characters.Check(problems);
             reader.ReadStream();
             gathered.IsComplete = gathered.HasRoot;
-            reader.TakeHeader();
         }
         catch (StopReadingException)
         {
-            reader.TakeHeader();
+            gathered.IsComplete = false;
         }
+        reader.Take();
         return gathered;
     }
 
@@ -58,7 +58,7 @@ internal sealed class NetworkFileReader
 
     private void ReportRoot()
     {
-        var kind = ElementReader.KindOf(_events.Current);
+        var kind = Field.KindOf(_events.Current);
         if (_events.Current is StreamEnd || kind == FieldKind.Blank)
             _problems.Add(FileProblems.Empty(), 0, 1);
         else if (kind != FieldKind.Refused)
@@ -105,27 +105,29 @@ internal sealed class NetworkFileReader
             _problems.Add(FileProblems.ReservedSection(key).At(null, null, key), offset, length);
             return null;
         }
-        var names = FileHeader.Names.Concat(AllSections.InOrder.Select(one => one.Name)).ToList();
+        var names = FileHeader.Keys.Names.Concat(AllSections.InOrder.Select(one => one.Name)).ToList();
         var problem = FileProblems.UnknownSection(key, NearestNames.Suggestion(key, names));
         _problems.Add(problem.At(null, null, Problems.Shown(key)), offset, length);
         if (NearestNames.Find(key, names, 1) is not [var nearest])
             return null;
         if (AllSections.Find(nearest) is not { } section)
         {
-            _header.Mistyped(nearest);
+            _header.AddMistyped(nearest);
             return null;
         }
         _gathered.ReportedTopLevel.Add(nearest);
         return section;
     }
 
-    private void TakeHeader()
+    /// <summary>Makes the draft of what was read, be it all of the file or its first part.</summary>
+    private void Take()
     {
         if (!_gathered.HasRoot)
             return;
         try
         {
             _header.Take(_gathered);
+            DraftBuilder.AddElements(_gathered, _problems);
         }
         catch (StopReadingException)
         {

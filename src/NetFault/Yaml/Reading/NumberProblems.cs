@@ -41,16 +41,18 @@ internal static class NumberProblems
     /// <summary>A number that lacks a digit beside its point, or one with something behind it.</summary>
     private static Problem? ExplainTail(string text)
     {
-        if (StrictNumber.TryParse(text.TrimEnd('.') + ".0", out _) || StrictNumber.TryParse(text.Replace(".", "0."), out _))
+        if (IsNumber(text.TrimEnd('.') + ".0") || IsNumber(text.Replace(".", "0.")))
             return FileProblems.MissingDigit(text);
         var end = text.Length;
-        while (end > 0 && !StrictNumber.TryParse(text.Substring(0, end), out _))
+        while (end > 0 && !IsNumber(text.Substring(0, end)))
             end--;
         var rest = text.Substring(end).TrimStart();
         return end > 0 && rest.Length > 0 && (char.IsLetter(rest[0]) || rest[0] is '%' or '°' or '\'' or 'Ω')
             ? FileProblems.NumberWithUnit(text, text.Substring(0, end))
             : null;
     }
+
+    private static bool IsNumber(string text) => StrictNumber.TryParse(text.AsSpan(), out _);
 
     private static bool IsDigit(char one) => one is >= '0' and <= '9';
 }

@@ -18,7 +18,7 @@ internal static class StrictNumber
     ];
 
     /// <summary>The number that the text is; false where it is none by the grammar. May be infinite, see <see cref="IsInRange"/>.</summary>
-    public static bool TryParse(string text, out double value)
+    public static bool TryParse(ReadOnlySpan<char> text, out double value)
     {
         value = 0;
         var at = text.Length > 0 && text[0] is '-' or '+' ? 1 : 0;
@@ -39,7 +39,7 @@ internal static class StrictNumber
         if (hasExponent && !Exponent(text, at))
             return false;
         if (hasExponent || digitCount + fraction > ExactDigits)
-            return double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out value) || Overflown(text, out value);
+            return double.TryParse(text.ToString(), NumberStyles.Float, CultureInfo.InvariantCulture, out value) || Overflown(text, out value);
         value = digits / ExactPowers[fraction];
         if (text[0] == '-')
             value = -value;
@@ -47,18 +47,23 @@ internal static class StrictNumber
     }
 
     /// <summary>Whether a parsed number is what its text says: neither infinite nor, unless the text is a zero, vanished.</summary>
-    public static bool IsInRange(string text, double value) =>
-        !double.IsInfinity(value) && (value != 0 || text.TakeWhile(one => one is not ('e' or 'E')).All(one => one is not (>= '1' and <= '9')));
+    public static bool IsInRange(ReadOnlySpan<char> text, double value)
+    {
+        if (value != 0)
+            return !double.IsInfinity(value);
+        var exponent = text.IndexOfAny('e', 'E');
+        return text.Slice(0, exponent < 0 ? text.Length : exponent).IndexOfAny("123456789".AsSpan()) < 0;
+    }
 
     /// <summary>The whole number that the text is; false where it has anything but a sign and digits, or does not fit.</summary>
-    public static bool TryParseWhole(string text, out int value)
+    public static bool TryParseWhole(ReadOnlySpan<char> text, out int value)
     {
         value = 0;
-        return TryParse(text, out _) && int.TryParse(text, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out value);
+        return TryParse(text, out _) && int.TryParse(text.ToString(), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out value);
     }
 
     /// <summary>Reads at least one digit; the digits' value counts only up to <see cref="ExactDigits"/> of them.</summary>
-    private static bool Digits(string text, ref int at, ref long value)
+    private static bool Digits(ReadOnlySpan<char> text, ref int at, ref long value)
     {
         var start = at;
         for (; at < text.Length && text[at] is >= '0' and <= '9'; at++)
@@ -66,7 +71,7 @@ internal static class StrictNumber
         return at > start;
     }
 
-    private static bool Exponent(string text, int at)
+    private static bool Exponent(ReadOnlySpan<char> text, int at)
     {
         if (text[at++] is not ('e' or 'E'))
             return false;
@@ -77,7 +82,7 @@ internal static class StrictNumber
     }
 
     /// <summary>.NET Framework refuses what is beyond a double, later versions give infinity: here it is infinity.</summary>
-    private static bool Overflown(string text, out double value)
+    private static bool Overflown(ReadOnlySpan<char> text, out double value)
     {
         value = text[0] == '-' ? double.NegativeInfinity : double.PositiveInfinity;
         return true;

@@ -12,5 +12,16 @@ internal static class AllSections
         new TransformerSection(), new ThreeWindingTransformerSection(), new LineSection(), new SeriesReactorSection(), new BusCouplerSection(),
     ];
 
+    /// <summary>The position of a section in <see cref="InOrder"/>; −1 where it is none.</summary>
+    public static int IndexOf(string name)
+    {
+        for (var i = 0; i < InOrder.Count; i++)
+        {
+            if (InOrder[i].Name == name)
+                return i;
+        }
+        return -1;
+    }
+
     public static Section? Find(string name) => InOrder.FirstOrDefault(one => one.Name == name);
 }
