@@ -113,6 +113,11 @@ internal static class KernelSuite
             worst = Math.Max(worst, (ours.Diagonal[k] - diagonal[k]).Magnitude / diagonal[k].Magnitude);
         }
 
+        if (!(worst < 1e-9))
+        {
+            throw new InvalidOperationException($"{grid.Name}: the diagonal differs from {other} by {worst:0.0e0}; no time is worth printing.");
+        }
+
         Console.WriteLine($"{grid.Name}: worst difference from {other} on the diagonal {worst:0.0e0} relative");
     }
 }

@@ -85,6 +85,33 @@ public class SelectedInverseTests
         (z - new Complex(3, 4) / 25).Magnitude.Should().BeLessThan(1e-16);
     }
 
+    // Oracle: the definition; nothing has nothing.
+    [Fact]
+    public void A_matrix_without_rows_is_no_trouble()
+    {
+        TestMatrix matrix = TestMatrix.FromEntries([]);
+        LdlFactor factor = matrix.Factor();
+        SelectedInverse.Of(factor, matrix.Diagonal, matrix.OffDiagonal, out InverseHealth health).Diagonal.Length.Should().Be(0);
+        health.WorstResidual.Should().Be(0);
+        factor.Solve([], new SolveScratch(0));
+        ConditionEstimate.Of(factor, [], []).Should().Be(0);
+    }
+
+    // Oracle: Math.NET's dense inverse of the matrix whose values are given, while the factors are those of a neighbour of it: refinement
+    // must bring the suspect node to the former.
+    [Fact]
+    public void A_suspect_node_is_solved_anew_by_refinement()
+    {
+        TestMatrix matrix = TestMatrix.Mesh(6, 6, 5);
+        LdlFactor factor = matrix.Factor();
+        matrix.Diagonal[20] *= 1.001;
+        SelectedInverse inverse = SelectedInverse.Of(factor, matrix.Diagonal, matrix.OffDiagonal, out InverseHealth health);
+        health.Repaired.Should().Be(1);
+        health.Suspects.Should().NotContain(20);
+        Complex expected = matrix.Dense().Inverse()[20, 20];
+        (inverse.Diagonal[20] - expected).Magnitude.Should().BeLessThan(1e-13 * expected.Magnitude);
+    }
+
     // Oracle: a wrong inverse on purpose. The factors of one matrix are checked against the values of another.
     [Fact]
     public void The_health_check_finds_values_that_do_not_belong_to_the_factors_and_repairs_nothing_silently()
