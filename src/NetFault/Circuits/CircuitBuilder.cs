@@ -10,10 +10,11 @@ internal sealed class CircuitBuilder
     private readonly BranchRules _rules;
     private readonly AssumptionLog? _log;
     private readonly int[] _nodeOfBus;
-    private readonly List<CircuitBranch> _branches;
-    private readonly List<Complex> _impedances;
+    private CircuitBranch[] _branches;
+    private Complex[] _impedances;
     private readonly List<CircuitSource> _sources = [];
     private readonly int _nodeCount;
+    private int _branchCount;
 
     private CircuitBuilder(Network network, BranchRules rules, AssumptionLog? log)
     {
@@ -22,8 +23,9 @@ internal sealed class CircuitBuilder
         _rules = rules;
         _log = log;
         _nodeOfBus = NumberEnergisedNodes(out _nodeCount);
-        _branches = new List<CircuitBranch>(network.Elements.Count);
-        _impedances = new List<Complex>(network.Elements.Count);
+        var most = network.Transformers.Count + 3 * network.ThreeWindingTransformers.Count + network.Lines.Count + network.SeriesReactors.Count;
+        _branches = new CircuitBranch[most];
+        _impedances = new Complex[most];
     }
 
     /// <summary>The circuit of a network.</summary>
@@ -40,8 +42,9 @@ internal sealed class CircuitBuilder
         builder.AddSources(network.NetworkFeeders);
         builder.AddSources(network.SynchronousMachines);
         builder.AddSources(network.AsynchronousMotors);
-        return new Circuit(
-            network, builder._nodeOfBus, builder._nodeCount, [.. builder._branches], [.. builder._impedances], [.. builder._sources]);
+        Array.Resize(ref builder._branches, builder._branchCount);
+        Array.Resize(ref builder._impedances, builder._branchCount);
+        return new Circuit(network, builder._nodeOfBus, builder._nodeCount, builder._branches, builder._impedances, [.. builder._sources]);
     }
 
     private int[] NumberEnergisedNodes(out int count)
@@ -141,8 +144,8 @@ internal sealed class CircuitBuilder
 
     private void Add(int element, byte from, byte to, double fromRatio, double toRatio, BranchKind kind, Complex impedance)
     {
-        _branches.Add(new CircuitBranch(element, Node(element, from), Node(element, to), from, to, fromRatio, toRatio, kind));
-        _impedances.Add(impedance);
+        _branches[_branchCount] = new CircuitBranch(element, Node(element, from), Node(element, to), from, to, fromRatio, toRatio, kind);
+        _impedances[_branchCount++] = impedance;
     }
 
     private bool IsEnergised(int element) => _nodeOfBus[_topology.FirstBus(element)] >= 0;

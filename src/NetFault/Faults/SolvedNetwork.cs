@@ -46,9 +46,9 @@ internal sealed class SolvedNetwork
 
     private DrivingPointImpedances FindDrivingPoints() => _matrix.Guarded(() =>
     {
-        var inverse = SelectedInverse.Of(_factor, Values.Diagonal, Values.OffDiagonal, out var health);
-        _matrix.RefuseResonance(Values, inverse.Diagonal);
-        return new DrivingPointImpedances(inverse.Diagonal.ToArray(), health.WorstResidual);
+        var impedances = SelectedInverse.CheckedDiagonalOf(_factor, Values.Diagonal, Values.OffDiagonal, out var health);
+        _matrix.RefuseResonance(Values, impedances);
+        return new DrivingPointImpedances(impedances, health.WorstResidual);
     });
 }
 

@@ -20,29 +20,33 @@ internal sealed record InverseHealth(double WorstResidual, int WorstNode, int[] 
         SelectedInverse inverse, SymmetricPattern pattern, ReadOnlySpan<Complex> diagonal, ReadOnlySpan<Complex> offDiagonal)
     {
         int n = pattern.Order;
-        Complex[] sum = new Complex[n];
-        double[] size = new double[n];
+        using var sums = new Scratch<Complex>(n);
+        using var sizes = new Scratch<double>(n);
+        Span<Complex> sum = sums.Span;
+        Span<double> size = sizes.Span;
+        sum.Clear();
+        size.Clear();
         for (int j = 0; j < n; j++)
         {
-            Add(j, ComplexKernel.Multiply(diagonal[j], inverse.Diagonal[j]) - Complex.One);
+            Add(sum, size, j, ComplexKernel.Multiply(diagonal[j], inverse.Diagonal[j]) - Complex.One);
             for (int slot = pattern.ColumnStart[j]; slot < pattern.ColumnStart[j + 1]; slot++)
             {
                 Complex term = ComplexKernel.Multiply(offDiagonal[slot], inverse.OffDiagonal(slot));
-                Add(j, term);
-                Add(pattern.RowIndex[slot], term);
+                Add(sum, size, j, term);
+                Add(sum, size, pattern.RowIndex[slot], term);
             }
         }
 
         return Judge(sum, size);
-
-        void Add(int k, Complex term)
-        {
-            sum[k] += term;
-            size[k] += ComplexKernel.Size(term);
-        }
     }
 
-    private static InverseHealth Judge(Complex[] sum, double[] size)
+    private static void Add(Span<Complex> sum, Span<double> size, int k, Complex term)
+    {
+        sum[k] += term;
+        size[k] += ComplexKernel.Size(term);
+    }
+
+    private static InverseHealth Judge(ReadOnlySpan<Complex> sum, ReadOnlySpan<double> size)
     {
         double worst = -1;
         int worstNode = -1;

@@ -1,3 +1,4 @@
+using System.Buffers;
 using System.Diagnostics;
 using System.Numerics;
 
@@ -15,11 +16,16 @@ internal sealed class SelectedInverse
     private readonly Complex[] diagonal;
     private readonly Complex[] below;   // on the pattern of L
 
-    private SelectedInverse(LdlFactor factor)
+    private SelectedInverse(LdlFactor factor, Complex[] below)
     {
         positionOfSlot = factor.Symbolic.PositionOfSlot;
         diagonal = new Complex[factor.Order];
-        below = new Complex[factor.Lower.Length];
+        this.below = below;
+        TakahashiRecursion.Run(factor, below.AsSpan(0, factor.Lower.Length + 1), diagonal);
+        if (factor.Correction is { } correction)
+        {
+            Correct(factor, correction);
+        }
     }
 
     /// <summary>Z_kk for each node k, in original numbering.</summary>
@@ -29,17 +35,7 @@ internal sealed class SelectedInverse
     public Complex OffDiagonal(int slot) => below[positionOfSlot[slot]];
 
     /// <summary>Works out the inverse on the pattern of L.</summary>
-    public static SelectedInverse Of(LdlFactor factor)
-    {
-        var inverse = new SelectedInverse(factor);
-        TakahashiRecursion.Run(factor, inverse.below, inverse.diagonal);
-        if (factor.Correction is { } correction)
-        {
-            inverse.Correct(factor, correction);
-        }
-
-        return inverse;
-    }
+    public static SelectedInverse Of(LdlFactor factor) => new(factor, new Complex[factor.Lower.Length + 1]);
 
     /// <summary>The diagonal alone, in original numbering, without keeping the rest.</summary>
     public static void DiagonalOf(LdlFactor factor, Span<Complex> diagonal)
@@ -63,15 +59,37 @@ internal sealed class SelectedInverse
         LdlFactor factor, ReadOnlySpan<Complex> diagonal, ReadOnlySpan<Complex> offDiagonal, out InverseHealth health)
     {
         SelectedInverse inverse = Of(factor);
-        health = InverseHealth.Check(inverse, factor.Symbolic.Pattern, diagonal, offDiagonal);
-        if (health.Suspects.Length > 0)
+        health = inverse.CheckAndMend(factor, diagonal, offDiagonal);
+        return inverse;
+    }
+
+    /// <summary>The diagonal alone, checked and mended as by the overload of <c>Of</c> that does so, without keeping the rest.</summary>
+    public static Complex[] CheckedDiagonalOf(
+        LdlFactor factor, ReadOnlySpan<Complex> diagonal, ReadOnlySpan<Complex> offDiagonal, out InverseHealth health)
+    {
+        Complex[] lent = ArrayPool<Complex>.Shared.Rent(factor.Lower.Length + 1);
+        try
         {
-            inverse.SolveAnew(factor, diagonal, offDiagonal, health.Suspects);
-            int repaired = health.Suspects.Length;
-            health = InverseHealth.Check(inverse, factor.Symbolic.Pattern, diagonal, offDiagonal) with { Repaired = repaired };
+            var inverse = new SelectedInverse(factor, lent);
+            health = inverse.CheckAndMend(factor, diagonal, offDiagonal);
+            return inverse.diagonal;
+        }
+        finally
+        {
+            ArrayPool<Complex>.Shared.Return(lent);
+        }
+    }
+
+    private InverseHealth CheckAndMend(LdlFactor factor, ReadOnlySpan<Complex> a, ReadOnlySpan<Complex> offDiagonal)
+    {
+        InverseHealth health = InverseHealth.Check(this, factor.Symbolic.Pattern, a, offDiagonal);
+        if (health.Suspects.Length == 0)
+        {
+            return health;
         }
 
-        return inverse;
+        SolveAnew(factor, a, offDiagonal, health.Suspects);
+        return InverseHealth.Check(this, factor.Symbolic.Pattern, a, offDiagonal) with { Repaired = health.Suspects.Length };
     }
 
     /// <summary>
