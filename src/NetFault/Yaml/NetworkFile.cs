@@ -1,3 +1,4 @@
+using System.Buffers;
 using System.Text;
 
 namespace NetFault;
@@ -49,11 +50,12 @@ public static class NetworkFile
     /// <param name="fileName">The file's name in messages.</param>
     public static NetworkFileResult Check(Stream stream, string fileName = "network.yaml")
     {
-        var bytes = FileBytes.ReadAll(Guard.NotNull(stream), MaximumBytes);
         Guard.NotNull(fileName);
-        if (bytes.Count > MaximumBytes)
-            return Refuse(fileName, string.Empty, FileProblems.TooLarge(MaximumBytes), 0);
-        var text = FileBytes.Decode(bytes, out var problem);
+        var bytes = FileBytes.ReadAll(Guard.NotNull(stream), MaximumBytes);
+        var isTooLarge = bytes.Count > MaximumBytes;
+        (Problem Problem, int Offset)? problem = isTooLarge ? (FileProblems.TooLarge(MaximumBytes), 0) : null;
+        var text = isTooLarge ? string.Empty : FileBytes.Decode(bytes, out problem);
+        ArrayPool<byte>.Shared.Return(bytes.Array!);
         return problem is var (what, offset) ? Refuse(fileName, text, what, offset) : CheckDecoded(text, fileName);
     }
 

@@ -6,16 +6,20 @@ internal readonly record struct ElementEntry(int Section, int IdOffset, int IdLe
 /// <summary>The elements of a file with all their fields.</summary>
 internal sealed class ElementTable
 {
-    private readonly List<ElementEntry> _entries = [];
+    private readonly List<ElementEntry> _entries;
     private readonly Dictionary<int, string> _unlikeIds = [];
     private readonly Dictionary<int, HashSet<string>> _mistyped = [];
     private readonly SourceText _source;
-    private Dictionary<(int Section, string Id), int>? _byId;
+
+    /// <summary>The elements of each section by id, made when one is looked for.</summary>
+    private readonly Dictionary<string, int>?[] _byId = new Dictionary<string, int>?[AllSections.InOrder.Count];
 
     public ElementTable(SourceText source)
     {
         _source = source;
-        Fields = new FieldTable(source.Text, Math.Max(16, source.Text.Length / 12));
+        // An element takes about 70 characters in files that are full of buses and lines, and a key with its value about 15.
+        _entries = new List<ElementEntry>(source.Text.Length / 64);
+        Fields = new FieldTable(source.Text, Math.Max(16, source.Text.Length / 14));
     }
 
     public FieldTable Fields { get; }
@@ -44,8 +48,8 @@ internal sealed class ElementTable
     /// <summary>Where an element's id stands first, by section and id; null where it does not stand.</summary>
     public int? Find(string section, string id)
     {
-        _byId ??= IndexById();
-        return _byId.TryGetValue((AllSections.IndexOf(section), id), out var element) ? element : null;
+        var index = AllSections.IndexOf(section);
+        return (_byId[index] ??= IndexById(index)).TryGetValue(id, out var element) ? element : null;
     }
 
     /// <summary>The offset and length of an element's id.</summary>
@@ -70,14 +74,13 @@ internal sealed class ElementTable
     private int Find(ElementEntry entry, int parent, KnownKey? key) =>
         key is null ? -1 : Fields.Find(entry.FirstField, entry.EndField, parent, key.Index);
 
-    private Dictionary<(int Section, string Id), int> IndexById()
+    private Dictionary<string, int> IndexById(int section)
     {
-        var byId = new Dictionary<(int Section, string Id), int>();
+        var byId = new Dictionary<string, int>(StringComparer.Ordinal);
         for (var i = 0; i < Count; i++)
         {
-            var key = (_entries[i].Section, IdOf(i));
-            if (!byId.ContainsKey(key))
-                byId.Add(key, i);
+            if (_entries[i].Section == section && IdOf(i) is var id && !byId.ContainsKey(id))
+                byId.Add(id, i);
         }
         return byId;
     }

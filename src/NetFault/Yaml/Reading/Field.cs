@@ -26,22 +26,23 @@ internal enum FieldKind : byte
 }
 
 /// <summary>
-/// A known key with its value, as offsets into the text. Without references on purpose: fields of a whole file stand in one array while it
-/// is scanned, and the garbage collector need not look at them.
+/// A known key with its value, as offsets into the text: 16 bytes. Without references on purpose: the fields of a whole file stand in one
+/// array while it is scanned, and the garbage collector need not look at them.
 /// </summary>
 internal readonly struct Field
 {
-    /// <summary>The position of the key in its <see cref="KeySet"/>.</summary>
-    public required short Key { get; init; }
+    /// <summary>The position of the key in its <see cref="KeySet"/>; there are at most 127 keys in one.</summary>
+    public required sbyte Key { get; init; }
 
     /// <summary>The position, among the element's fields, of the mapping that holds this key; −1 for the element itself.</summary>
-    public required short Parent { get; init; }
+    public required sbyte Parent { get; init; }
 
     public required FieldKind Kind { get; init; }
 
-    public required int KeyOffset { get; init; }
+    /// <summary>The length of the key as it is written, in quotes perhaps; longer keys are none that is known.</summary>
+    public required byte KeyLength { get; init; }
 
-    public required int KeyLength { get; init; }
+    public required int KeyOffset { get; init; }
 
     public required int Offset { get; init; }
 

@@ -1,3 +1,4 @@
+using System.Buffers;
 using System.Text;
 
 namespace NetFault;
@@ -7,19 +8,27 @@ internal static class FileBytes
 {
     private static readonly UTF8Encoding Strict = new(encoderShouldEmitUTF8Identifier: false, throwOnInvalidBytes: true);
 
-    /// <summary>All bytes of a stream; where it has more than the limit, a few more than the limit.</summary>
+    /// <summary>All bytes of a stream, in a rented array; where it has more than the limit, a few more than the limit.</summary>
     public static ArraySegment<byte> ReadAll(Stream stream, int limit)
     {
         var expected = stream.CanSeek ? Math.Min(stream.Length - stream.Position, limit) : 0;
-        var bytes = new byte[Math.Max(4096, expected + 1)];
+        var bytes = ArrayPool<byte>.Shared.Rent((int)Math.Max(4096, expected + 1));
         var count = 0;
         for (int read; count <= limit && (read = stream.Read(bytes, count, bytes.Length - count)) > 0;)
         {
             count += read;
             if (count == bytes.Length)
-                Array.Resize(ref bytes, 2 * bytes.Length);
+                bytes = Larger(bytes);
         }
         return new ArraySegment<byte>(bytes, 0, count);
+    }
+
+    private static byte[] Larger(byte[] bytes)
+    {
+        var larger = ArrayPool<byte>.Shared.Rent(2 * bytes.Length);
+        bytes.CopyTo(larger, 0);
+        ArrayPool<byte>.Shared.Return(bytes);
+        return larger;
     }
 
     /// <summary>The text that the bytes are, and a problem with its offset where they are not all of it.</summary>

@@ -81,11 +81,11 @@ internal sealed class MappingReader
     {
         var field = new Field
         {
-            Key = (short)known.Index,
-            Parent = (short)parent,
+            Key = (sbyte)known.Index,
+            Parent = (sbyte)parent,
             Kind = Field.KindOf(value),
             KeyOffset = EventReader.Offset(key),
-            KeyLength = EventReader.Length(key),
+            KeyLength = (byte)Math.Min(EventReader.Length(key), byte.MaxValue),
             Offset = EventReader.Offset(value),
             Length = EventReader.Length(value),
         };

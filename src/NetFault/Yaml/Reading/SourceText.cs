@@ -57,10 +57,12 @@ internal sealed class SourceText
     private static int[] FindLines(string text)
     {
         var starts = new List<int> { 0 };
-        for (var i = 0; i < text.Length; i++)
+        var rest = text.AsSpan();
+        for (int end; (end = rest.IndexOfAny('\n', '\r')) >= 0;)
         {
-            if (text[i] == '\n' || (text[i] == '\r' && (i + 1 == text.Length || text[i + 1] != '\n')))
-                starts.Add(i + 1);
+            var isPair = rest[end] == '\r' && end + 1 < rest.Length && rest[end + 1] == '\n';
+            rest = rest.Slice(isPair ? end + 2 : end + 1);
+            starts.Add(text.Length - rest.Length);
         }
         return starts.ToArray();
     }
