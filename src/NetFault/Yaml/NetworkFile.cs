@@ -91,7 +91,9 @@ public static class NetworkFile
     private static NetworkFileResult CheckDecoded(string text, string fileName)
     {
         var problems = new ProblemList(new SourceText(fileName, text), MaximumProblems);
-        return FileCompletion.Complete(NetworkFileReader.Read(problems), problems);
+        var gathered = NetworkFileReader.Read(problems);
+        using var fields = gathered.Elements.Fields;
+        return FileCompletion.Complete(gathered, problems);
     }
 
     private static NetworkFileResult Refuse(string fileName, string text, Problem problem, int offset)
