@@ -109,7 +109,7 @@ internal static class FileProblems
         new("NF118", Error, $"{Quoted(text)} lacks a digit beside its point", "write a digit before and after the point");
 
     public static Problem NotWhole(string text) =>
-        new("NF119", Error, $"{Quoted(text)} is not a whole number");
+        new("NF119", Error, FormattableString.Invariant($"{Quoted(text)} is not a whole number up to {int.MaxValue}"));
 
     public static Problem NotTrueOrFalse(string text, string? remedy) =>
         new("NF120", Error, $"{Quoted(text)} is neither true nor false", remedy ?? "write true or false");

@@ -77,6 +77,7 @@ public static class NetworkFile
     /// </summary>
     /// <param name="network">The network.</param>
     /// <param name="path">The file's path.</param>
+    /// <exception cref="ArgumentException">A text holds half a surrogate pair, which no file can hold.</exception>
     /// <exception cref="IOException">The file cannot be written.</exception>
     public static void Write(Network network, string path)
     {
@@ -86,12 +87,15 @@ public static class NetworkFile
 
     /// <summary>The text of a network's file, with LF line ends; see <see cref="Write"/>.</summary>
     /// <param name="network">The network.</param>
+    /// <exception cref="ArgumentException">A text holds half a surrogate pair, which no file can hold.</exception>
     public static string ToText(Network network) => NetworkFileWriter.Write(Guard.NotNull(network));
 
     private static NetworkFileResult CheckDecoded(string text, string fileName)
     {
         var problems = new ProblemList(new SourceText(fileName, text), MaximumProblems);
-        return FileCompletion.Complete(NetworkFileReader.Read(problems), problems);
+        var gathered = NetworkFileReader.Read(problems);
+        using var fields = gathered.Elements.Fields;
+        return FileCompletion.Complete(gathered, problems);
     }
 
     private static NetworkFileResult Refuse(string fileName, string text, Problem problem, int offset)

@@ -8,6 +8,9 @@ internal sealed class ElementCheck
 {
     private readonly NetworkDraft _draft;
     private readonly List<Diagnostic> _found;
+
+    /// <summary>How many letters may still be compared for suggestions; about a second's work in all.</summary>
+    private long _comparisons = 200_000_000;
     private NetworkElement _element;
     private IReadOnlyCollection<string>? _reported;
 
@@ -170,15 +173,15 @@ internal sealed class ElementCheck
 
     public void BusReference(string key, string bus)
     {
-        if (!_draft.HasBus(bus))
-            Say(key, Problems.UnknownBus(bus, NearestNames.Suggestion(bus, _draft.BusIds)));
+        if (!_draft.HasBus(bus) && _draft.BusIds.Count > 0)
+            Say(key, Problems.UnknownBus(bus, Nearest(bus, _draft.BusIds)));
     }
 
     public void TransformerReference(string key, string id, string bus)
     {
         if (!_draft.Declares("transformers", id))
-            Say(key, Problems.UnknownTransformer(id, NearestNames.Suggestion(id, _draft.IdsOf("transformers"))));
-        else if (_draft.Find("transformers", id) is Transformer transformer && transformer.Hv != bus && transformer.Lv != bus)
+            Say(key, Problems.UnknownTransformer(id, Nearest(id, _draft.IdsOf("transformers"))));
+        else if (_draft.HasBus(bus) && _draft.Find("transformers", id) is Transformer transformer && transformer.Hv != bus && transformer.Lv != bus)
             Say(key, Problems.UnitTransformerElsewhere(id, bus));
     }
 
@@ -190,11 +193,18 @@ internal sealed class ElementCheck
 
     public void SameNominalVoltage(string from, string to, bool perUnit)
     {
-        if (_draft.FindBus(from) is not { } one || _draft.FindBus(to) is not { } other || one.NominalKv.Equals(other.NominalKv))
+        if (_draft.FindBus(from) is not { NominalKv: > 0 } one || _draft.FindBus(to) is not { NominalKv: > 0 } other || one.NominalKv.Equals(other.NominalKv))
             return;
         Say(null, perUnit
             ? Problems.UnitRatio(from, one.NominalKv, to, other.NominalKv)
             : Problems.UnequalVoltages(from, one.NominalKv, to, other.NominalKv));
+    }
+
+    /// <summary>The nearest ids, as long as looking for them does not take too long: a file may have a thousand mistakes in a large network.</summary>
+    private string? Nearest(string id, IReadOnlyCollection<string> known)
+    {
+        _comparisons -= (long)known.Count * id.Length * id.Length;
+        return _comparisons < 0 ? null : NearestNames.Suggestion(id, known);
     }
 
     private static bool OffByMoreThan(double factor, double one, double other) => one > factor * other || other > factor * one;

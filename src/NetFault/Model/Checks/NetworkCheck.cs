@@ -3,6 +3,9 @@ namespace NetFault;
 /// <summary>The checks that a network passes before it is one, the same for a file and for a builder.</summary>
 internal static class NetworkCheck
 {
+    /// <summary>The most characters an id may have.</summary>
+    private const int LongestId = 200;
+
     /// <summary>All problems of a draft's elements, one by one.</summary>
     /// <param name="draft">The draft.</param>
     /// <param name="reportedKeys">The keys of an element that the reader has complained about; null where there is no reader.</param>
@@ -17,9 +20,24 @@ internal static class NetworkCheck
             var element = draft.Elements[i];
             if (element.Id.Length == 0)
                 found.Add(Problems.BlankId(element.Section).At(element.Section, null, null));
+            else if (!IsLine(element.Id))
+                found.Add(Problems.BadId(LongestId).At(element.Section, element.Id, null));
             check.Run(element, reportedKeys?.Invoke(element));
         }
         return found;
+    }
+
+    /// <summary>Whether an id can stand in one cell of a table: not too long, no line breaks, no control characters, no half characters.</summary>
+    private static bool IsLine(string id)
+    {
+        for (var i = 0; i < id.Length; i++)
+        {
+            if (char.IsHighSurrogate(id[i]) && i + 1 < id.Length && char.IsLowSurrogate(id[i + 1]))
+                i++;
+            else if (char.IsControl(id[i]) || char.IsSurrogate(id[i]) || id[i] is '\u2028' or '\u2029' or '\uFFFE' or '\uFFFF')
+                return false;
+        }
+        return id.Length <= LongestId;
     }
 
     /// <summary>The problems of the values that belong to the network as a whole.</summary>

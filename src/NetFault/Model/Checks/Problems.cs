@@ -66,13 +66,16 @@ internal static class Problems
         new("NF218", Error, $"{Text(hz)} Hz must be above 0 and at most 1000");
 
     public static Problem OutsideRange(double value, double low, double high) =>
-        new("NF219", Error, $"{Text(value)} must be from {Text(low)} to {Text(high)}");
+        new("NF220", Error, $"{Text(value)} must be from {Text(low)} to {Text(high)}");
+
+    public static Problem BadId(int longest) =>
+        new("NF219", Error, $"an id has at most {Text(longest)} characters, and none that breaks the line or cannot be seen");
 
     public static Problem UnknownBus(string id, string? nearest) =>
-        new("NF301", Error, $"there is no bus \"{id}\"", nearest ?? "add it to buses");
+        new("NF301", Error, $"there is no bus \"{Shown(id)}\"", nearest ?? "add it to buses");
 
     public static Problem UnknownTransformer(string id, string? nearest) =>
-        new("NF302", Error, $"there is no transformer \"{id}\"", nearest ?? "add it to transformers");
+        new("NF302", Error, $"there is no transformer \"{Shown(id)}\"", nearest ?? "add it to transformers");
 
     public static Problem UnitTransformerElsewhere(string transformer, string bus) =>
         new("NF303", Error, $"transformer \"{transformer}\" is not connected to the machine's bus \"{bus}\"",
@@ -86,7 +89,7 @@ internal static class Problems
             "different nominal voltages need a transformer between them");
 
     public static Problem DuplicateId(string section, string id) =>
-        new("NF306", Error, $"the id \"{id}\" stands twice in {section}", "give each element of a section its own id");
+        new("NF306", Error, $"the id \"{Shown(id)}\" stands twice in {section}", "give each element of a section its own id");
 
     public static Problem NoBuses() =>
         new("NF307", Error, "the network has no buses", "at least one bus is needed");

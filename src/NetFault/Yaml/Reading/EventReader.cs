@@ -102,6 +102,9 @@ internal sealed class EventReader
     {
         var bracket = _depth > 0 ? _openBracket[_depth - 1] : -1;
         var at = (int)((exception as YamlException)?.Start.Index ?? _scanner.CurrentPosition.Index);
+        // A zero character is the end of the text for the parser; what it says of that is beside the point.
+        if (_problems.Found.Exists(one => one.Id == FileProblems.ControlCharacter(default).Id))
+            return new StopReadingException();
         SyntaxErrors.Report(_problems, exception.Message, at, (int)_scanner.CurrentPosition.Index, bracket);
         return new StopReadingException();
     }

@@ -155,7 +155,7 @@ internal sealed class FieldGroup : IFields
         var text = Table.Text(index);
         if (Table[index].Kind == FieldKind.Plain && text is "true" or "false")
             return text == "true";
-        Report(index, key, IsText(index) && !IsNull(index) ? NotAFlag(text) : WrongKind(index, "true or false"));
+        Report(index, key, IsText(index) && !IsNull(index) ? NotAFlag(text, Table[index].Kind == FieldKind.Quoted) : WrongKind(index, "true or false"));
         return null;
     }
 
@@ -175,10 +175,11 @@ internal sealed class FieldGroup : IFields
         ? FileProblems.Blank("a mapping")
         : FileProblems.MappingNeeded(FileProblems.KindName(kind), key + ": {...}");
 
-    private static Problem NotAFlag(string text)
+    private static Problem NotAFlag(string text, bool inQuotes)
     {
         var remedy = text.ToUpperInvariant() switch
         {
+            "TRUE" or "FALSE" when inQuotes => $"write {text.ToLowerInvariant()} without quotes",
             "YES" or "ON" or "Y" or "TRUE" => "write true",
             "NO" or "OFF" or "N" or "FALSE" => "write false",
             _ => null,

@@ -1,9 +1,10 @@
+using System.Buffers;
 using YamlDotNet.Core.Events;
 
 namespace NetFault;
 
 /// <summary>The fields of many elements one after the other, with their texts.</summary>
-internal sealed class FieldTable
+internal sealed class FieldTable : IDisposable
 {
     private readonly string _text;
 
@@ -14,7 +15,7 @@ internal sealed class FieldTable
     public FieldTable(string text, int capacity)
     {
         _text = text;
-        _fields = new Field[capacity];
+        _fields = ArrayPool<Field>.Shared.Rent(capacity);
     }
 
     public int Count { get; private set; }
@@ -25,7 +26,7 @@ internal sealed class FieldTable
     public int Add(in Field field, ParsingEvent value)
     {
         if (Count == _fields.Length)
-            Array.Resize(ref _fields, 2 * Count);
+            Grow();
         if (value is Scalar scalar && !IsSlice(scalar.Value, field.Offset, field.Length))
             _unlike.Add(Count, scalar.Value);
         _fields[Count] = field;
@@ -50,6 +51,22 @@ internal sealed class FieldTable
                 return i;
         }
         return -1;
+    }
+
+    /// <summary>Gives the array back: one that large would otherwise bring on a collection of everything for each file that is read.</summary>
+    public void Dispose()
+    {
+        ArrayPool<Field>.Shared.Return(_fields);
+        _fields = [];
+        Count = 0;
+    }
+
+    private void Grow()
+    {
+        var larger = ArrayPool<Field>.Shared.Rent(2 * Count);
+        Array.Copy(_fields, larger, Count);
+        ArrayPool<Field>.Shared.Return(_fields);
+        _fields = larger;
     }
 
     private bool IsSlice(string value, int offset, int length) =>

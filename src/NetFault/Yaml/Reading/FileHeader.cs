@@ -40,7 +40,7 @@ internal sealed class FileHeader
     /// <summary>Puts the values into the draft.</summary>
     public void Take(GatheredFile gathered)
     {
-        var table = _mapping.Fields;
+        using var table = _mapping.Fields;
         for (var i = 0; i < table.Count; i++)
             gathered.TopLevel[Known.Keys[table[i].Key].Name] = table[i].Place;
         var fields = new ElementFields(_problems, table) { IsComplete = gathered.IsComplete };

@@ -101,10 +101,13 @@ internal sealed class MappingReader
     private void ReportUnknown(Scalar key, KeySet keys, int parent)
     {
         var (offset, length) = (EventReader.Offset(key), EventReader.Length(key));
+        if (key.Value == "<<")
+            keys.Keys.ForEach(one => AddMistyped(parent, one.Name));
         if (_events.Next() is AnchorAlias && key.Value == "<<")
             return;
-        if (NearestNames.Find(key.Value, keys.Names, 1) is [var nearest])
-            AddMistyped(parent, nearest);
+        var colon = key.Value.IndexOf(':');
+        foreach (var meant in NearestNames.Find(colon < 0 ? key.Value : key.Value.Substring(0, colon), keys.Names, 1))
+            AddMistyped(parent, meant);
         var problem = key.Value == "<<"
             ? FileProblems.Alias()
             : FileProblems.UnknownKey(key.Value, NearestNames.Suggestion(key.Value, keys.Names), string.Join(", ", keys.Names));

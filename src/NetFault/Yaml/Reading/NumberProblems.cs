@@ -41,7 +41,7 @@ internal static class NumberProblems
     /// <summary>A number that lacks a digit beside its point, or one with something behind it.</summary>
     private static Problem? ExplainTail(string text)
     {
-        if (IsNumber(text.TrimEnd('.') + ".0") || IsNumber(text.Replace(".", "0.")))
+        if (IsNumber(text.Replace(".", ".0")) || IsNumber(text.Replace(".", "0.")))
             return FileProblems.MissingDigit(text);
         var end = text.Length;
         while (end > 0 && !IsNumber(text.Substring(0, end)))

@@ -26,11 +26,19 @@ internal static class YamlScalar
             && !NumberProblems.IsNull(text);
     }
 
+    /// <exception cref="ArgumentException">The text holds half a character.</exception>
     private static string Quoted(string text)
     {
         var quoted = new StringBuilder("\"", text.Length + 2);
-        foreach (var one in text)
-            quoted.Append(Escaped(one));
+        for (var i = 0; i < text.Length; i++)
+        {
+            if (i + 1 < text.Length && char.IsSurrogatePair(text[i], text[i + 1]))
+                quoted.Append(text[i++]).Append(text[i]);
+            else if (char.IsSurrogate(text[i]))
+                throw new ArgumentException($"the text \"{Problems.Shown(text)}\" holds half a surrogate pair, which no file can hold");
+            else
+                quoted.Append(Escaped(text[i]));
+        }
         return quoted.Append('"').ToString();
     }
 
