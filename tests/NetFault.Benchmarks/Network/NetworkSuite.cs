@@ -19,7 +19,10 @@ internal static class NetworkSuite
             ?? Environment.GetEnvironmentVariable("NETFAULT_NETWORKS") ?? Path.Combine("..", "shared", "networks");
         var table = new ResultTable();
         if (TryRead(folder, "case10000_goc") is { } large)
+        {
             AgainstKlu("case10000_goc", large, table, goal: 200);
+            Iec("case10000_goc", large, table);
+        }
         AgainstKlu("generated, 1,000 buses", Grids.Meshed(40, 25), table, goal: null);
         AgainstKlu("generated, 10,000 buses", Grids.Meshed(125, 80), table, goal: null);
         Alone("generated, 100,000 buses", Grids.Meshed(400, 250), table);
@@ -66,6 +69,25 @@ internal static class NetworkSuite
         table.AddAlone($"{name}: model to I″k, X/R, DC at every bus", times[0]);
         table.AddAlone("  the same with I′k and Ik", times[1]);
         table.AddAlone("  the same with X/R of separate networks", times[2]);
+    }
+
+    /// <summary>Everything IEC 60909-0 gives at every bus: I″k, ip, Ib and i_dc at 0.1 s, Ik, Ith.</summary>
+    private static void Iec(string name, NetFault.Network network, ResultTable table)
+    {
+        var times = Stopwatches.Medians(31, TimeSpan.FromSeconds(2), () => SolveIec(network), () => Solve(network, AllInstants));
+        table.Add($"{name}: IEC 60909-0, all quantities at every bus", times[0], "machine decrement, three instants", times[1],
+            times[0] / times[1], "<= 10", times[0] / times[1] <= 10.0);
+    }
+
+    private static double SolveIec(NetFault.Network network)
+    {
+        var sum = 0.0;
+        foreach (var fault in new FaultStudy(network, new Iec60909()).EveryBus())
+        {
+            var result = fault.Iec60909!;
+            sum += fault.PeakKa + fault.DcComponentKa(0.1) + result.BreakingKa(0.1) + fault.SteadyStateKa!.Value + result.ThermalEquivalentKa(1.0);
+        }
+        return sum;
     }
 
     private static void AgainstDenseInverse(string name, NetFault.Network network, ResultTable table)
