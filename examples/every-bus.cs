@@ -5,6 +5,10 @@
 // Reads a network file and prints the short-circuit currents at every bus. From the repository's root:
 //
 //     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --csv plant.csv
+//     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --method iec --case min
+//
+// --method decrement (default) takes --prefault and --x-over-r complex|separate; --method iec, which is IEC 60909-0, takes
+// --case max|min and --x-over-r a|b|c, the standard's three ways to the factor kappa.
 //
 // Exit codes: 0 done, 1 the network cannot be read or solved, 2 wrong arguments.
 
@@ -14,7 +18,7 @@ using NetFault;
 
 const string Usage =
     "usage: dotnet run examples/every-bus.cs -- NETWORK.yaml [--csv FILE] [--json FILE]"
-    + " [--at SECONDS[,SECONDS...]] [--x-over-r complex|separate] [--prefault PU]";
+    + " [--at SECONDS[,SECONDS...]] [--method decrement|iec] [--case max|min] [--x-over-r complex|separate|a|b|c] [--prefault PU]";
 
 Console.OutputEncoding = Encoding.UTF8;
 try
@@ -28,7 +32,7 @@ catch (UsageException wrong)
     Console.Error.WriteLine(Usage);
     return 2;
 }
-catch (Exception known) when (known is NetworkFileException or SingularNetworkException or IOException or UnauthorizedAccessException)
+catch (Exception known) when (known is NetworkFileException or MethodDataException or SingularNetworkException or IOException or UnauthorizedAccessException)
 {
     Console.Error.WriteLine(known.Message);
     return 1;
@@ -57,9 +61,9 @@ static void Run(Arguments arguments)
 }
 
 /// <summary>What the command line asks for.</summary>
-sealed record Arguments(string NetworkPath, MachineDecrement Method, ReportOptions Report, string? CsvPath, string? JsonPath)
+sealed record Arguments(string NetworkPath, FaultMethod Method, ReportOptions Report, string? CsvPath, string? JsonPath)
 {
-    private static readonly string[] Known = ["--csv", "--json", "--at", "--x-over-r", "--prefault"];
+    private static readonly string[] Known = ["--csv", "--json", "--at", "--method", "--case", "--x-over-r", "--prefault"];
 
     public static Arguments Parse(string[] args)
     {
@@ -82,16 +86,37 @@ sealed record Arguments(string NetworkPath, MachineDecrement Method, ReportOptio
         return new Arguments(paths[0], MethodOf(options), ReportOf(options), csvPath, jsonPath);
     }
 
-    private static MachineDecrement MethodOf(Dictionary<string, string> options) => new()
+    private static FaultMethod MethodOf(Dictionary<string, string> options) => options.GetValueOrDefault("--method", "decrement") switch
     {
-        PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
-        XOverRRule = options.GetValueOrDefault("--x-over-r", "complex") switch
+        "decrement" => Without("--case", options, "goes with --method iec", () => new MachineDecrement
         {
-            "complex" => XOverRRule.ComplexImpedance,
-            "separate" => XOverRRule.SeparateNetworks,
-            var other => throw new UsageException($"--x-over-r {other}: complex or separate"),
-        },
+            PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
+            XOverRRule = Choice(options, "--x-over-r", ("complex", XOverRRule.ComplexImpedance), ("separate", XOverRRule.SeparateNetworks)),
+        }),
+        "iec" => Without("--prefault", options, "goes with --method decrement: IEC 60909-0 has its factor c", () => new Iec60909
+        {
+            Case = Choice(options, "--case", ("max", ShortCircuitCase.Maximum), ("min", ShortCircuitCase.Minimum)),
+            XOverRRule = Choice(options, "--x-over-r",
+                ("c", XOverRRule.EquivalentFrequency), ("b", XOverRRule.ComplexImpedance), ("a", XOverRRule.SmallestRatio)),
+        }),
+        var other => throw new UsageException($"--method {other}: decrement or iec"),
     };
+
+    private static FaultMethod Without(string option, Dictionary<string, string> options, string why, Func<FaultMethod> make) =>
+        options.ContainsKey(option) ? throw new UsageException($"{option} {why}") : make();
+
+    /// <summary>The value of the word given, of the first word where none is.</summary>
+    private static T Choice<T>(Dictionary<string, string> options, string option, params (string Word, T Value)[] choices)
+    {
+        if (!options.TryGetValue(option, out var given))
+            return choices[0].Value;
+        foreach (var (word, value) in choices)
+        {
+            if (word == given)
+                return value;
+        }
+        throw new UsageException($"{option} {given}: {string.Join(" or ", choices.Select(choice => choice.Word))}");
+    }
 
     private static ReportOptions ReportOf(Dictionary<string, string> options) => options.TryGetValue("--at", out var times)
         ? new ReportOptions { InstantsSeconds = times.Split(',').Select(time => Number("--at", time, zeroAllowed: true)).ToArray() }

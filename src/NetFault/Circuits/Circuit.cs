@@ -50,6 +50,9 @@ internal enum BranchKind : byte
     /// <summary>An impedance between the branch's two nodes.</summary>
     Series,
 
+    /// <summary>The same, capacitive: its reactance falls with frequency.</summary>
+    Capacitor,
+
     /// <summary>The first of three branches that make a star: HV–MV, HV–LV, MV–LV.</summary>
     StarFirst,
 

@@ -23,7 +23,8 @@ internal sealed class CircuitBuilder
         _rules = rules;
         _log = log;
         _nodeOfBus = NumberEnergisedNodes(out _nodeCount);
-        var most = network.Transformers.Count + 3 * network.ThreeWindingTransformers.Count + network.Lines.Count + network.SeriesReactors.Count;
+        var most = network.Transformers.Count + 3 * network.ThreeWindingTransformers.Count + network.Lines.Count
+            + network.SeriesReactors.Count + network.SeriesCapacitors.Count;
         _branches = new CircuitBranch[most];
         _impedances = new Complex[most];
     }
@@ -39,9 +40,13 @@ internal sealed class CircuitBuilder
         builder.AddBranches(network.ThreeWindingTransformers, builder.AddThreeWindingTransformer);
         builder.AddBranches(network.Lines, builder.AddLine);
         builder.AddBranches(network.SeriesReactors, builder.AddSeriesReactor);
+        builder.AddBranches(network.SeriesCapacitors, builder.AddSeriesCapacitor);
         builder.AddSources(network.NetworkFeeders);
         builder.AddSources(network.SynchronousMachines);
         builder.AddSources(network.AsynchronousMotors);
+        builder.AddSources(network.ConverterFedDrives);
+        builder.AddSources(network.FullConverterSources);
+        builder.AddSources(network.DoublyFedGenerators);
         Array.Resize(ref builder._branches, builder._branchCount);
         Array.Resize(ref builder._impedances, builder._branchCount);
         return new Circuit(network, builder._nodeOfBus, builder._nodeCount, builder._branches, builder._impedances, [.. builder._sources]);
@@ -91,6 +96,12 @@ internal sealed class CircuitBuilder
 
     private void AddSeriesReactor(SeriesReactor reactor, int element) =>
         AddSeries(element, 0, 1, 1.0, SeriesReactorCircuit.SeriesPu(reactor, Kv(element, 0), _network.BaseMva, _log));
+
+    private void AddSeriesCapacitor(SeriesCapacitor capacitor, int element)
+    {
+        if (!capacitor.VoltageLimited)
+            Add(element, 0, 1, 1.0, 1.0, BranchKind.Capacitor, SeriesCapacitorCircuit.SeriesPu(capacitor, Kv(element, 0), _network.BaseMva));
+    }
 
     private void AddThreeWindingTransformer(ThreeWindingTransformer transformer, int element)
     {

@@ -34,7 +34,7 @@ internal static class NetworkAdmittances
         {
             switch (circuit.Branches[i].Kind)
             {
-                case BranchKind.Series:
+                case BranchKind.Series or BranchKind.Capacitor:
                     admittances[i] = Reciprocal(Part(impedances[i], part));
                     break;
                 case BranchKind.StarFirst:
@@ -50,8 +50,15 @@ internal static class NetworkAdmittances
     {
         if (ratio.Equals(1.0))
             return circuit.BranchImpedances;
-        return Array.ConvertAll(circuit.BranchImpedances, z => new Complex(z.Real, z.Imaginary * ratio));
+        var impedances = new Complex[circuit.BranchImpedances.Length];
+        for (var i = 0; i < impedances.Length; i++)
+            impedances[i] = AtFrequency(circuit.BranchImpedances[i], circuit.Branches[i].Kind, ratio);
+        return impedances;
     }
+
+    /// <summary>A branch impedance with its reactance at another frequency.</summary>
+    public static Complex AtFrequency(Complex z, BranchKind kind, double ratio) =>
+        new(z.Real, kind == BranchKind.Capacitor ? z.Imaginary / ratio : z.Imaginary * ratio);
 
     /// <summary>The admittance of a source; 0 where it is not in the network at the instant.</summary>
     public static Complex OfSource(Complex? impedance, ImpedancePart part) =>

@@ -6,11 +6,13 @@ namespace NetFault;
 internal static class NetworkFeederCircuit
 {
     /// <summary>Impedance Un²/S″kQ per unit on the bus's nominal voltage, of the maximum case.</summary>
-    public static Complex ImpedancePu(NetworkFeeder feeder, double nominalKv, double baseMva)
-    {
-        var mva = feeder.ShortCircuitMva is { } power
-            ? power.Max
-            : PerUnit.Sqrt3 * nominalKv * feeder.ShortCircuitKa.GetValueOrDefault().Max;
-        return PerUnit.FromROverX(baseMva / mva, feeder.ROverX ?? 1.0 / feeder.XOverR.GetValueOrDefault());
-    }
+    public static Complex MaximumPu(NetworkFeeder feeder, double nominalKv, double baseMva) => ImpedancePu(
+        feeder, feeder.ShortCircuitMva?.Max ?? PerUnit.Sqrt3 * nominalKv * feeder.ShortCircuitKa.GetValueOrDefault().Max, baseMva);
+
+    /// <summary>Impedance Un²/S″kQ per unit on the bus's nominal voltage.</summary>
+    /// <param name="feeder">The feeder, for its R/X.</param>
+    /// <param name="mva">S″kQ in MVA.</param>
+    /// <param name="baseMva">Base power in MVA.</param>
+    public static Complex ImpedancePu(NetworkFeeder feeder, double mva, double baseMva) =>
+        PerUnit.FromROverX(baseMva / mva, feeder.ROverX ?? 1.0 / feeder.XOverR.GetValueOrDefault());
 }

@@ -11,10 +11,14 @@ internal static class ThreeWindingTransformerCircuit
     /// <summary>The impedance of a pair of windings as a fraction of the rated impedance of the smaller one's rating.</summary>
     public readonly record struct Pair(double RatedMva, double ShortCircuitVoltagePercent, double ResistivePercent)
     {
+        /// <summary>Relative reactance of the pair on its own rating.</summary>
+        public double RelativeReactance => OnOwnRating.Imaginary;
+
+        private Complex OnOwnRating => PerUnit.FromResistance(ShortCircuitVoltagePercent / 100.0, ResistivePercent / 100.0);
+
         /// <summary>The pair's impedance per unit on <paramref name="ratedKv"/>² / baseMva of the winding it is referred to.</summary>
         public Complex PerUnitOn(double ratedKv, double nominalKv, double baseMva) =>
-            PerUnit.FromResistance(ShortCircuitVoltagePercent / 100.0, ResistivePercent / 100.0)
-            * (ratedKv * ratedKv / RatedMva / PerUnit.BaseOhm(nominalKv, baseMva));
+            OnOwnRating * (ratedKv * ratedKv / RatedMva / PerUnit.BaseOhm(nominalKv, baseMva));
     }
 
     /// <summary>The pair of windings <paramref name="one"/> and <paramref name="other"/>, each 0 for HV, 1 for MV, 2 for LV.</summary>

@@ -16,6 +16,9 @@ internal static class TransformerCircuit
     public static double Ratio(Transformer transformer, double hvKv, double lvKv) =>
         transformer.RatedHvKv / transformer.RatedLvKv * (lvKv / hvKv);
 
+    /// <summary>Relative reactance xT = XT/(UrT²/SrT).</summary>
+    public static double RelativeReactance(Transformer transformer) => ShortCircuitImpedance(transformer).Imaginary;
+
     /// <summary>Short-circuit impedance per unit on the transformer's rating.</summary>
     private static Complex ShortCircuitImpedance(Transformer transformer)
     {

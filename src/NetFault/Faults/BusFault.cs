@@ -16,7 +16,7 @@ public sealed class BusFault
     {
         _context = context;
         _bus = bus;
-        _currents = context.Method.Currents(context, bus, seen);
+        _currents = context.Currents.At(context, bus, seen);
         FaultImpedanceOhm = faultImpedanceOhm;
     }
 
@@ -90,6 +90,12 @@ public sealed class BusFault
 
     /// <summary>What this result rests on that the network does not say: the assumed values of its connected part of the network.</summary>
     public IReadOnlyList<Assumption> Assumptions => IsEnergised ? _context.Assumptions.OfBus(_bus) : [];
+
+    /// <summary>
+    /// What IEC 60909-0 gives beyond these: breaking currents, thermal equivalent, factors, contributions; null by another method and at a
+    /// de-energised bus.
+    /// </summary>
+    public Iec60909Result? Iec60909 => _currents?.Standard;
 
     private ReactanceRatio Ratio => _currents?.Ratio ?? new ReactanceRatio(null, XOverRStatus.DeEnergised);
 

@@ -11,7 +11,7 @@ internal sealed class CouplerFlows
     private readonly StudyContext _context;
     private readonly Complex[] _surplus;
     private readonly List<int>[] _couplersAt;
-    private readonly List<(BusCoupler Coupler, int From, int To)> _couplers = [];
+    private readonly List<(NetworkElement Joint, int From, int To)> _couplers = [];
     private readonly Complex?[] _current;
     private readonly bool[] _done;
 
@@ -30,20 +30,27 @@ internal sealed class CouplerFlows
     {
         var flows = new CouplerFlows(context, injections);
         flows.PeelLeaves();
-        return flows._couplers.Select(flows.Flow).ToList().AsReadOnly();
+        return flows._couplers.Select(flows.Flow).OfType<CouplerFlow>().ToList().AsReadOnly();
     }
 
+    /// <summary>Closed couplers, and capacitors that their voltage-limiting devices bridge: current passes these too.</summary>
     private void Gather(Network network)
     {
-        var first = network.Topology.FirstOfKind<BusCoupler>();
-        for (var i = 0; i < network.BusCouplers.Count; i++)
+        Gather(network, network.BusCouplers);
+        Gather(network, network.SeriesCapacitors);
+    }
+
+    private void Gather<T>(Network network, IReadOnlyList<T> joints) where T : NetworkElement
+    {
+        var first = network.Topology.FirstOfKind<T>();
+        for (var i = 0; i < joints.Count; i++)
         {
-            if (!network.BusCouplers[i].Closed || !network.Topology.IsActive(first + i))
+            if (joints[i].Role != ElementRole.Joint || !network.Topology.IsActive(first + i))
                 continue;
             int from = network.Topology.TerminalBus(first + i, 0), to = network.Topology.TerminalBus(first + i, 1);
             (_couplersAt[from] ??= []).Add(_couplers.Count);
             (_couplersAt[to] ??= []).Add(_couplers.Count);
-            _couplers.Add((network.BusCouplers[i], from, to));
+            _couplers.Add((joints[i], from, to));
         }
     }
 
@@ -75,9 +82,9 @@ internal sealed class CouplerFlows
         return other;
     }
 
-    private CouplerFlow Flow((BusCoupler Coupler, int From, int To) entry, int index)
+    private CouplerFlow? Flow((NetworkElement Joint, int From, int To) entry, int index)
     {
         var baseKa = _context.BaseKa(_context.Network.Buses[entry.From]);
-        return new CouplerFlow(entry.Coupler.Id, entry.Coupler.From, entry.Coupler.To, _current[index] * baseKa);
+        return entry.Joint is BusCoupler coupler ? new CouplerFlow(coupler.Id, coupler.From, coupler.To, _current[index] * baseKa) : null;
     }
 }

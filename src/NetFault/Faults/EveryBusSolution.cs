@@ -67,7 +67,7 @@ internal sealed class EveryBusSolution
             var node = _networks.Circuit.NodeOfBus[bus];
             results[bus] = node < 0
                 ? BusFault.DeEnergised(_context, bus)
-                : new BusFault(_context, bus, new SeenImpedances(variants, impedances, node, Complex.Zero), Complex.Zero);
+                : new BusFault(_context, bus, new SeenImpedances(variants, impedances, node, node, Complex.Zero), Complex.Zero);
         }
         return results;
     }

@@ -28,7 +28,7 @@ public sealed class FaultStudy
         Method = Guard.NotNull(method);
         _networks = new StudyNetworks(network, method);
         _assumptions = new StudyAssumptions(network, method);
-        _context = new StudyContext(network, method, _assumptions);
+        _context = new StudyContext(network, method, _networks, _assumptions);
         _ = _networks.At(FaultInstant.Initial);
     }
 

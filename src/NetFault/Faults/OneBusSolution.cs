@@ -23,7 +23,7 @@ internal sealed class OneBusSolution
         var wanted = _context.Method.Networks;
         var impedances = wanted.Select(one => At(_networks.Of(one), node)).ToArray();
         var fault = faultImpedanceOhm / _context.BaseOhm(_context.Network.Buses[bus]);
-        return new BusFault(_context, bus, new SeenImpedances(wanted, impedances, 0, fault), faultImpedanceOhm);
+        return new BusFault(_context, bus, new SeenImpedances(wanted, impedances, 0, node, fault), faultImpedanceOhm);
     }
 
     private static DrivingPointImpedances At(SolvedNetwork network, int node)

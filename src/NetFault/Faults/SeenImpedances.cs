@@ -13,9 +13,12 @@ internal readonly struct SeenImpedances
     /// <param name="variants">The networks.</param>
     /// <param name="networks">Their impedances, in the same order.</param>
     /// <param name="index">Where the node stands in them.</param>
+    /// <param name="node">The node with the fault.</param>
     /// <param name="faultPu">The impedance of the fault itself.</param>
-    public SeenImpedances(IReadOnlyList<NetworkVariant> variants, DrivingPointImpedances[] networks, int index, Complex faultPu)
+    public SeenImpedances(
+        IReadOnlyList<NetworkVariant> variants, DrivingPointImpedances[] networks, int index, int node, Complex faultPu)
     {
+        Node = node;
         _variants = variants;
         _networks = networks;
         _index = index;
@@ -35,6 +38,12 @@ internal readonly struct SeenImpedances
         }
         return null;
     }
+
+    /// <summary>The node with the fault.</summary>
+    public int Node { get; }
+
+    /// <summary>Whether this is one of the results at every bus, so that what takes one pass for all of them is worth it.</summary>
+    public bool CoversEveryBus => _networks[0].Impedances.Length > 1;
 
     /// <summary>The impedance of the fault itself per unit.</summary>
     public Complex FaultPu => _faultPu;

@@ -44,6 +44,9 @@ internal sealed class SolvedNetwork
         return column;
     }
 
+    /// <summary>The columns of Zbus as far as their entries are large.</summary>
+    public PrunedColumns PrunedColumns() => Sparse.PrunedColumns.Of(_factor, DrivingPoints.Impedances);
+
     private DrivingPointImpedances FindDrivingPoints() => _matrix.Guarded(() =>
     {
         var impedances = SelectedInverse.CheckedDiagonalOf(_factor, Values.Diagonal, Values.OffDiagonal, out var health);

@@ -3,10 +3,15 @@ using System.Numerics;
 namespace NetFault;
 
 /// <summary>What all results of a study share.</summary>
-internal sealed record StudyContext(Network Network, FaultMethod Method, StudyAssumptions Assumptions)
+internal sealed record StudyContext(Network Network, FaultMethod Method, StudyNetworks Networks, StudyAssumptions Assumptions)
 {
+    private readonly Lazy<CurrentsOfMethod> _currents = new(() => Method.Begin(Networks));
+
     /// <summary>ω = 2πf in rad/s.</summary>
     public double Omega { get; } = 2.0 * Math.PI * Network.FrequencyHz;
+
+    /// <summary>The method at work on this study.</summary>
+    public CurrentsOfMethod Currents => _currents.Value;
 
     /// <summary>Base impedance at a bus in ohm.</summary>
     public double BaseOhm(Bus bus) => PerUnit.BaseOhm(bus.NominalKv, Network.BaseMva);

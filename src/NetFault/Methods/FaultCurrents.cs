@@ -29,9 +29,19 @@ internal abstract class FaultCurrents
     /// <summary>The largest residual of the solutions behind these currents.</summary>
     public abstract double Residual { get; }
 
+    /// <summary>What the method gives beyond the quantities that all methods share, where it is IEC 60909-0.</summary>
+    public virtual Iec60909Result? Standard => null;
+
     /// <summary>i_dc(t) in kA.</summary>
     public abstract double DcComponentKa(double seconds);
 
     /// <summary>Iac(t) in kA.</summary>
     public abstract double SymmetricalRmsKa(double seconds);
+}
+
+/// <summary>A method at work on one study: makes the currents of each fault. Immutable, or safe for many threads.</summary>
+internal abstract class CurrentsOfMethod
+{
+    /// <summary>The currents of a fault at a bus, from the impedances seen there in the method's networks.</summary>
+    public abstract FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen);
 }

@@ -36,8 +36,8 @@ public abstract record FaultMethod
     /// <summary>The impedance of each source of a circuit in a network, per unit; null where it is not in it.</summary>
     internal abstract Complex?[] SourceImpedances(Circuit circuit, NetworkVariant variant, AssumptionLog? log);
 
-    /// <summary>The currents of a fault at a bus, from the impedances seen there in <see cref="Networks"/>.</summary>
-    internal abstract FaultCurrents Currents(StudyContext context, int bus, in SeenImpedances seen);
+    /// <summary>Sets the method to work on a study.</summary>
+    internal abstract CurrentsOfMethod Begin(StudyNetworks networks);
 }
 
 /// <summary>An instant of the short circuit, by the reactance of the machines that governs it.</summary>
@@ -81,4 +81,12 @@ public enum XOverRRule
     /// without resistance gets R = |X|/200 there, which is said to be assumed.
     /// </summary>
     SeparateNetworks,
+
+    /// <summary>The smallest R/X of all branches and sources that the bus is connected with: IEC 60909-0, method (a) for the peak.</summary>
+    SmallestRatio,
+
+    /// <summary>
+    /// R/X of the network solved at 20 Hz (24 Hz in 60 Hz networks), brought to rated frequency: IEC 60909-0, method (c) for the peak.
+    /// </summary>
+    EquivalentFrequency,
 }

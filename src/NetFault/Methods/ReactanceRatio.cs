@@ -34,6 +34,12 @@ public enum AcComponentRule
 {
     /// <summary>Held at I″k: on the safe side, for the machines' AC decrement is not credited.</summary>
     HeldAtInitial,
+
+    /// <summary>
+    /// By IEC 60909-0: at a time t it is the breaking current Ib of the minimum time delay t, and I″k before the 0.02 s at which the
+    /// standard's curves begin.
+    /// </summary>
+    BreakingCurrent,
 }
 
 /// <summary>X/R at a fault by a named rule.</summary>

@@ -20,4 +20,10 @@ internal static class Guard
         value > 0 && !double.IsInfinity(value)
             ? value
             : throw new ArgumentOutOfRangeException(name, value, "must be a finite number above 0");
+
+    /// <summary>The value, or an <see cref="ArgumentOutOfRangeException"/> where it is none of those allowed.</summary>
+    public static T OneOf<T>(T value, params T[] allowed) where T : struct, Enum =>
+        Array.IndexOf(allowed, value) >= 0
+            ? value
+            : throw new ArgumentOutOfRangeException(nameof(value), value, "must be " + string.Join(" or ", allowed));
 }

@@ -18,15 +18,20 @@ public sealed class Network
         NetworkFeeders = draft.Of<NetworkFeeder>("network_feeders");
         SynchronousMachines = draft.Of<SynchronousMachine>("synchronous_machines");
         AsynchronousMotors = draft.Of<AsynchronousMotor>("asynchronous_motors");
+        ConverterFedDrives = draft.Of<ConverterFedDrive>("converter_fed_drives");
+        FullConverterSources = draft.Of<FullConverterSource>("full_converter_sources");
+        DoublyFedGenerators = draft.Of<DoublyFedGenerator>("doubly_fed_generators");
         Transformers = draft.Of<Transformer>("transformers");
         ThreeWindingTransformers = draft.Of<ThreeWindingTransformer>("three_winding_transformers");
         Lines = draft.Of<Line>("lines");
         SeriesReactors = draft.Of<SeriesReactor>("series_reactors");
+        SeriesCapacitors = draft.Of<SeriesCapacitor>("series_capacitors");
         BusCouplers = draft.Of<BusCoupler>("bus_couplers");
         Elements =
         [
             .. Buses, .. NetworkFeeders, .. SynchronousMachines, .. AsynchronousMotors,
-            .. Transformers, .. ThreeWindingTransformers, .. Lines, .. SeriesReactors, .. BusCouplers,
+            .. ConverterFedDrives, .. FullConverterSources, .. DoublyFedGenerators,
+            .. Transformers, .. ThreeWindingTransformers, .. Lines, .. SeriesReactors, .. SeriesCapacitors, .. BusCouplers,
         ];
         Topology = new NetworkTopology(this);
     }
@@ -55,6 +60,15 @@ public sealed class Network
     /// <summary>The asynchronous motors.</summary>
     public IReadOnlyList<AsynchronousMotor> AsynchronousMotors { get; }
 
+    /// <summary>The drives fed by static converters.</summary>
+    public IReadOnlyList<ConverterFedDrive> ConverterFedDrives { get; }
+
+    /// <summary>The sources behind full-size converters.</summary>
+    public IReadOnlyList<FullConverterSource> FullConverterSources { get; }
+
+    /// <summary>The doubly fed generators.</summary>
+    public IReadOnlyList<DoublyFedGenerator> DoublyFedGenerators { get; }
+
     /// <summary>The two-winding transformers.</summary>
     public IReadOnlyList<Transformer> Transformers { get; }
 
@@ -66,6 +80,9 @@ public sealed class Network
 
     /// <summary>The series reactors.</summary>
     public IReadOnlyList<SeriesReactor> SeriesReactors { get; }
+
+    /// <summary>The series capacitors.</summary>
+    public IReadOnlyList<SeriesCapacitor> SeriesCapacitors { get; }
 
     /// <summary>The bus couplers.</summary>
     public IReadOnlyList<BusCoupler> BusCouplers { get; }

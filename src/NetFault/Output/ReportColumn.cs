@@ -29,11 +29,13 @@ internal sealed record ReportColumn(string Name, string? Symbol, string Unit, Fu
             new("peak_ka", "ip", "kA", fault => fault.PeakKa),
         };
         foreach (var seconds in options.InstantsSeconds)
-            columns.AddRange(AtInstant(seconds));
+            columns.AddRange(AtInstant(method, seconds));
         if (method.CalculatedInstants.HasFlag(FaultInstants.Transient))
             columns.Add(new("transient_ka", "I′k", "kA", fault => fault.TransientKa));
         if (method.CalculatedInstants.HasFlag(FaultInstants.SteadyState))
             columns.Add(new("steady_state_ka", "Ik", "kA", fault => fault.SteadyStateKa));
+        if (method is Iec60909)
+            columns.AddRange(Iec60909Columns.Of(options));
         columns.AddRange(
         [
             new("x_over_r_rule", null, "", fault => Snake(fault.XOverRRule.ToString())),
@@ -42,7 +44,7 @@ internal sealed record ReportColumn(string Name, string? Symbol, string Unit, Fu
             new("ac_component_rule", null, "", fault => Snake(fault.AcComponentRule.ToString())),
             new("assumed_values", null, "", fault => fault.Assumptions.Count),
             new("solution_residual", null, "", fault => fault.SolutionResidual),
-            new("", "Notes", "", Marks),
+            new("", "Notes", "", ReportMark.Of),
         ]);
         return columns;
     }
@@ -59,18 +61,12 @@ internal sealed record ReportColumn(string Name, string? Symbol, string Unit, Fu
     internal static string Snake(string name) =>
         string.Concat(name.Select((c, i) => i > 0 && char.IsUpper(c) ? "_" + char.ToLowerInvariant(c) : char.ToLowerInvariant(c).ToString()));
 
-    private static IEnumerable<ReportColumn> AtInstant(double seconds)
+    private static IEnumerable<ReportColumn> AtInstant(FaultMethod method, double seconds)
     {
         var time = seconds.ToString("R", CultureInfo.InvariantCulture);
+        if (method is Iec60909)
+            yield return new($"symmetrical_rms_ka_at_{time}_s", $"Ib({time} s)", "kA", fault => fault.SymmetricalRmsKa(seconds));
         yield return new($"dc_component_ka_at_{time}_s", $"i_dc({time} s)", "kA", fault => fault.DcComponentKa(seconds));
         yield return new($"asymmetrical_rms_ka_at_{time}_s", $"I_asym({time} s)", "kA", fault => fault.AsymmetricalRmsKa(seconds));
-    }
-
-    /// <summary>The marks that a table explains below: a for assumed values, u for an undamped DC component, d for de-energised.</summary>
-    private static string Marks(BusFault fault)
-    {
-        if (!fault.IsEnergised)
-            return "d";
-        return (fault.Assumptions.Count > 0 ? "a" : "") + (fault.DcDecayRule == DcDecayRule.Undamped ? "u" : "");
     }
 }

@@ -4,6 +4,7 @@ namespace NetFault;
 public sealed record ReportOptions
 {
     private readonly IReadOnlyList<double> _instantsSeconds = [0.05, 0.1];
+    private readonly double _thermalDurationSeconds = 1.0;
 
     /// <summary>
     /// The times after the beginning of the fault, in seconds, at which DC component and asymmetrical RMS are given: commonly those of contact
@@ -15,6 +16,17 @@ public sealed record ReportOptions
         get => _instantsSeconds;
         init => _instantsSeconds = Array.AsReadOnly(
             Guard.NotNull(value, nameof(InstantsSeconds)).Select(one => Guard.NotNegative(one, nameof(InstantsSeconds))).ToArray());
+    }
+
+    /// <summary>
+    /// The duration Tk of the short circuit in seconds for the thermal equivalent current, above 0. Default 1 s. Methods that give no such
+    /// current leave it out.
+    /// </summary>
+    /// <exception cref="ArgumentOutOfRangeException">Not a finite number above 0.</exception>
+    public double ThermalDurationSeconds
+    {
+        get => _thermalDurationSeconds;
+        init => _thermalDurationSeconds = Guard.Positive(value, nameof(ThermalDurationSeconds));
     }
 
     /// <summary>

@@ -9,13 +9,18 @@ internal static class ReportTexts
         + "this does not replace licensed practice and is not for live switching decisions.";
 
     /// <summary>How the method treats AC and DC over time, in one line.</summary>
-    public static string MethodLine(FaultMethod method) =>
-        $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; DC component by X/R; AC component held at I″k over time.";
+    public static string MethodLine(FaultMethod method) => method is Iec60909
+        ? $"Method: {method.Name}; kappa by {RuleName(method.RatioRule)}; DC component by equivalent frequency; AC component over time is Ib."
+        : $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; DC component by X/R; AC component held at I″k over time.";
 
     /// <summary>An X/R rule in words.</summary>
-    public static string RuleName(XOverRRule rule) => rule == XOverRRule.SeparateNetworks
-        ? "separate R and X networks"
-        : "the complex impedance at the fault";
+    private static string RuleName(XOverRRule rule) => rule switch
+    {
+        XOverRRule.SeparateNetworks => "separate R and X networks",
+        XOverRRule.EquivalentFrequency => "the equivalent frequency, method (c)",
+        XOverRRule.SmallestRatio => "the smallest R/X, method (a)",
+        _ => "the complex impedance at the fault",
+    };
 
     /// <summary>The assumptions, those alike together.</summary>
     public static IReadOnlyList<AssumptionGroup> Group(IEnumerable<Assumption> assumptions) =>

@@ -58,13 +58,12 @@ internal static class TableReport
     private static void AppendNotes(StringBuilder text, FaultStudy study, IReadOnlyList<BusFault> faults)
     {
         var start = text.Length;
-        if (faults.Any(fault => fault.DcDecayRule == DcDecayRule.Undamped))
-            text.Append("u: no X/R at this bus; the DC component is taken as undamped, an upper bound\n");
-        if (faults.Any(fault => !fault.IsEnergised))
-            text.Append("d: de-energised, no path to a source\n");
+        foreach (var mark in ReportMark.All)
+        {
+            if (faults.Any(mark.Holds))
+                text.Append(mark.Sign).Append(": ").Append(mark.Meaning).Append('\n');
+        }
         var groups = ReportTexts.Group(study.Assumptions);
-        if (groups.Count > 0)
-            text.Append("a: rests on values that the network does not give:\n");
         foreach (var group in groups)
             text.Append("   ").Append(group).Append('\n');
         if (text.Length > start)

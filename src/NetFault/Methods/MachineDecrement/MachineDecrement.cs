@@ -16,6 +16,7 @@ public sealed record MachineDecrement : FaultMethod
     internal static readonly NetworkVariant Resistances = new() { Name = "network of the resistances", Part = ImpedancePart.Resistance };
 
     private readonly double _prefaultVoltagePu = 1.0;
+    private readonly XOverRRule _xOverRRule;
 
     /// <inheritdoc/>
     public override string Name => "Machine decrement";
@@ -31,8 +32,16 @@ public sealed record MachineDecrement : FaultMethod
     /// <summary>The instants to calculate; each costs one factorisation. Default all three.</summary>
     public FaultInstants Instants { get; init; } = FaultInstants.All;
 
-    /// <summary>The rule by which X/R at the fault is found. Default <see cref="XOverRRule.ComplexImpedance"/>.</summary>
-    public XOverRRule XOverRRule { get; init; }
+    /// <summary>
+    /// The rule by which X/R at the fault is found: <see cref="XOverRRule.ComplexImpedance"/>, the default, or
+    /// <see cref="XOverRRule.SeparateNetworks"/>.
+    /// </summary>
+    /// <exception cref="ArgumentOutOfRangeException">A rule of another method.</exception>
+    public XOverRRule XOverRRule
+    {
+        get => _xOverRRule;
+        init => _xOverRRule = Guard.OneOf(value, XOverRRule.ComplexImpedance, XOverRRule.SeparateNetworks);
+    }
 
     internal override XOverRRule RatioRule => XOverRRule;
 
@@ -70,20 +79,29 @@ public sealed record MachineDecrement : FaultMethod
         return impedances;
     }
 
-    internal override FaultCurrents Currents(StudyContext context, int bus, in SeenImpedances seen) =>
-        new MachineDecrementCurrents(context, context.Network.Buses[bus], seen);
+    internal override CurrentsOfMethod Begin(StudyNetworks networks) => new AtWork();
 
     private static Complex? Impedance(Network network, int element, FaultInstant instant, AssumptionLog? log)
     {
         var kv = network.Buses[network.Topology.TerminalBus(element, 0)].NominalKv;
         return network.Elements[element] switch
         {
-            NetworkFeeder feeder => NetworkFeederCircuit.ImpedancePu(feeder, kv, network.BaseMva),
+            NetworkFeeder feeder => NetworkFeederCircuit.MaximumPu(feeder, kv, network.BaseMva),
             SynchronousMachine machine => Machine(machine, kv, network, instant, log),
             AsynchronousMotor motor when instant == FaultInstant.Initial =>
                 AsynchronousMotorCircuit.ImpedancePu(motor, kv, network.BaseMva, log),
+            ConverterFedDrive drive when instant == FaultInstant.Initial => ConverterFedDriveCircuit.ImpedancePu(drive, kv, network.BaseMva, log),
+            DoublyFedGenerator generator when instant == FaultInstant.Initial =>
+                DoublyFedGeneratorCircuit.ImpedancePu(generator, kv, network.BaseMva, log),
+            FullConverterSource source => LeftOut(source, log),
             _ => null,
         };
+    }
+
+    private static Complex? LeftOut(FullConverterSource source, AssumptionLog? log)
+    {
+        log?.Add(source, "source_current_ka", "left out: this method knows no current sources");
+        return null;
     }
 
     private static Complex Machine(SynchronousMachine machine, double kv, Network network, FaultInstant instant, AssumptionLog? log)
@@ -97,5 +115,11 @@ public sealed record MachineDecrement : FaultMethod
         var toBase = SynchronousMachineCircuit.RatedToBase(machine, kv, network.BaseMva, log);
         var resistance = SynchronousMachineCircuit.ArmatureResistancePu(machine, kv, network.FrequencyHz, log);
         return new Complex(resistance * toBase, reactance * toBase);
+    }
+
+    private sealed class AtWork : CurrentsOfMethod
+    {
+        public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
+            new MachineDecrementCurrents(context, context.Network.Buses[bus], seen);
     }
 }

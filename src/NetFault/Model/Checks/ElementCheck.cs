@@ -54,6 +54,12 @@ internal sealed class ElementCheck
             Say(key, Problems.OutsidePercent(value.GetValueOrDefault()));
     }
 
+    public void Within(string key, double? value, double low, double high)
+    {
+        if (Finite(key, value) && (value < low || value > high))
+            Say(key, Problems.OutsideRange(value.GetValueOrDefault(), low, high));
+    }
+
     public void AboveZeroUpToOne(string key, double? value)
     {
         if (Finite(key, value) && value is <= 0 or > 1)

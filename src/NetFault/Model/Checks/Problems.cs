@@ -65,6 +65,9 @@ internal static class Problems
     public static Problem OutOfFrequency(double hz) =>
         new("NF218", Error, $"{Text(hz)} Hz must be above 0 and at most 1000");
 
+    public static Problem OutsideRange(double value, double low, double high) =>
+        new("NF220", Error, $"{Text(value)} must be from {Text(low)} to {Text(high)}");
+
     public static Problem BadId(int longest) =>
         new("NF219", Error, $"an id has at most {Text(longest)} characters, and none that breaks the line or cannot be seen");
 

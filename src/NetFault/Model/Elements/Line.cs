@@ -27,6 +27,12 @@ public sealed record Line : NetworkElement
     /// <summary>How many equal circuits run in parallel, 1 or more. Default 1.</summary>
     public int Parallel { get; init; } = 1;
 
+    /// <summary>
+    /// The conductor temperature θe at the end of the short circuit in °C, for the resistance in the minimum case (IEC 60909-0), 20 to 400;
+    /// the impedance given is that at 20 °C.
+    /// </summary>
+    public double? EndTemperatureC { get; init; }
+
     /// <inheritdoc/>
     public override string Section => "lines";
 
@@ -45,6 +51,7 @@ public sealed record Line : NetworkElement
         check.SeriesImpedance("ohm", Ohm);
         check.SeriesImpedance("per_unit", PerUnit);
         check.Positive("length_km", LengthKm);
+        check.Within("end_temperature_c", EndTemperatureC, 20.0, 400.0);
         if (OhmPerKm.HasValue)
             check.Needed("length_km", LengthKm, "ohm_per_km");
         check.SameNominalVoltage(From, To, PerUnit.HasValue);

@@ -49,6 +49,12 @@ public sealed record SynchronousMachine : ShuntElement
     /// <summary>The id of the transformer with which the machine forms one power station unit (IEC 60909-0).</summary>
     public string? UnitTransformer { get; init; }
 
+    /// <summary>
+    /// The factors λmax and λmin for the steady-state current of a machine that feeds a short circuit alone, read off the curves of IEC
+    /// 60909-0; null where they are not known.
+    /// </summary>
+    public MaxMin? SteadyStateFactor { get; init; }
+
     /// <inheritdoc/>
     public override string Section => "synchronous_machines";
 
@@ -62,6 +68,7 @@ public sealed record SynchronousMachine : ShuntElement
         check.RatedVoltage("rated_kv", RatedKv, Bus);
         check.AboveZeroUpToOne("rated_power_factor", RatedPowerFactor);
         check.WithinPercent("voltage_regulation_percent", VoltageRegulationPercent);
+        check.PositiveMaxMin("steady_state_factor", SteadyStateFactor);
         CheckReactances(check);
         CheckTimeConstants(check);
         CheckArmatureResistance(check);

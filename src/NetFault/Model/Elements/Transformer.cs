@@ -36,6 +36,12 @@ public sealed record Transformer : NetworkElement
     /// <summary>Whether the transformer has an on-load tap changer; null where it is not known.</summary>
     public bool? OnLoadTapChanger { get; init; }
 
+    /// <summary>
+    /// The range pT in percent by which a permanently used off-load tap of a unit transformer may be off the main one (IEC 60909-0, K_SO), 0
+    /// to 100; null where only the main tap is used.
+    /// </summary>
+    public double? OffLoadTapRangePercent { get; init; }
+
     /// <inheritdoc/>
     public override string Section => "transformers";
 
@@ -55,6 +61,7 @@ public sealed record Transformer : NetworkElement
         check.Positive("short_circuit_voltage_percent", ShortCircuitVoltagePercent);
         check.UnusualPercent("short_circuit_voltage_percent", ShortCircuitVoltagePercent);
         check.ExactlyOne(("load_loss_kw", LoadLossKw.HasValue), ("resistive_percent", ResistivePercent.HasValue), ("x_over_r", XOverR.HasValue));
+        check.WithinPercent("off_load_tap_range_percent", OffLoadTapRangePercent);
         check.NotNegative("load_loss_kw", LoadLossKw);
         check.NotNegative("resistive_percent", ResistivePercent);
         check.Positive("x_over_r", XOverR);

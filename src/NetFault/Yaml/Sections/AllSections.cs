@@ -9,7 +9,9 @@ internal static class AllSections
     public static IReadOnlyList<Section> InOrder { get; } =
     [
         new BusSection(), new NetworkFeederSection(), new SynchronousMachineSection(), new AsynchronousMotorSection(),
-        new TransformerSection(), new ThreeWindingTransformerSection(), new LineSection(), new SeriesReactorSection(), new BusCouplerSection(),
+        new ConverterFedDriveSection(), new FullConverterSourceSection(), new DoublyFedGeneratorSection(),
+        new TransformerSection(), new ThreeWindingTransformerSection(), new LineSection(), new SeriesReactorSection(),
+        new SeriesCapacitorSection(), new BusCouplerSection(),
     ];
 
     /// <summary>The position of a section in <see cref="InOrder"/>; −1 where it is none.</summary>

@@ -19,6 +19,7 @@ internal sealed class LineSection : Section<Line>
         Ohm = fields.Impedance("ohm"),
         PerUnit = fields.Impedance("per_unit"),
         Parallel = fields.Whole("parallel") ?? 1,
+        EndTemperatureC = fields.Number("end_temperature_c"),
         InService = fields.InService(),
         Note = fields.Note(),
     };
@@ -32,5 +33,6 @@ internal sealed class LineSection : Section<Line>
         fields.Impedance("ohm", line.Ohm);
         fields.Impedance("per_unit", line.PerUnit);
         fields.Number("parallel", line.Parallel == 1 ? null : line.Parallel);
+        fields.Number("end_temperature_c", line.EndTemperatureC);
     }
 }

@@ -25,6 +25,7 @@ internal sealed class SynchronousMachineSection : Section<SynchronousMachine>
         ArmatureResistancePu = fields.Number("armature_resistance_pu"),
         ArmatureResistanceOhm = fields.Number("armature_resistance_ohm"),
         VoltageRegulationPercent = fields.Number("voltage_regulation_percent"),
+        SteadyStateFactor = fields.MaxMin("steady_state_factor"),
         UnitTransformer = fields.Reference("unit_transformer"),
         InService = fields.InService(),
         Note = fields.Note(),
@@ -46,6 +47,7 @@ internal sealed class SynchronousMachineSection : Section<SynchronousMachine>
         fields.Number("armature_resistance_pu", machine.ArmatureResistancePu);
         fields.Number("armature_resistance_ohm", machine.ArmatureResistanceOhm);
         fields.Number("voltage_regulation_percent", machine.VoltageRegulationPercent);
+        fields.MaxMin("steady_state_factor", machine.SteadyStateFactor);
         fields.Reference("unit_transformer", machine.UnitTransformer);
     }
 

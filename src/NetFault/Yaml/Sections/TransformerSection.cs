@@ -27,7 +27,8 @@ internal sealed class TransformerSection : Section<Transformer>
             XOverR = fields.Number("x_over_r"),
             VectorGroup = fields.Text("vector_group"),
             OnLoadTapChanger = fields.Flag("on_load_tap_changer"),
-            InService = fields.InService(),
+            OffLoadTapRangePercent = fields.Number("off_load_tap_range_percent"),
+        InService = fields.InService(),
             Note = fields.Note(),
         };
     }
@@ -44,5 +45,6 @@ internal sealed class TransformerSection : Section<Transformer>
         fields.Number("x_over_r", transformer.XOverR);
         fields.Text("vector_group", transformer.VectorGroup);
         fields.Flag("on_load_tap_changer", transformer.OnLoadTapChanger);
+        fields.Number("off_load_tap_range_percent", transformer.OffLoadTapRangePercent);
     }
 }

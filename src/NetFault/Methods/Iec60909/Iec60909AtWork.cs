@@ -1,0 +1,91 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>IEC 60909-0 at work on one study: what the currents at all buses share, each part made when it is first needed.</summary>
+internal sealed class Iec60909AtWork : CurrentsOfMethod
+{
+    private readonly Lazy<CircuitGraph> _graph;
+    private readonly Lazy<double[]> _levels;
+    private readonly Lazy<bool[]> _radial;
+    private readonly Lazy<SmallestRatios> _smallest;
+    private readonly Lazy<RatedMotors> _motors;
+    private readonly Lazy<int[]> _islands;
+    private readonly Lazy<Dictionary<int, List<SynchronousMachine>>> _machines;
+
+    public Iec60909AtWork(Iec60909 method, StudyNetworks networks)
+    {
+        Method = method;
+        Networks = networks;
+        var units = new PowerStationUnits(Circuit.Network, method.Case);
+        Sources = new Iec60909Sources(Circuit.Network, units, method.Case);
+        _graph = new(() => new CircuitGraph(Circuit));
+        _levels = new(() => _graph.Value.Levels());
+        _radial = new(() => RadialNodes.Of(Circuit, _graph.Value));
+        _smallest = new(() => new SmallestRatios(Circuit, Sources));
+        _motors = new(() => new RatedMotors(Circuit));
+        _islands = new(() => Islands.OfNodes(Circuit));
+        _machines = new(GatherMachines);
+        Inside = new InsideUnits(networks, units, Sources, _graph);
+        Partial = new PartialCurrents(this);
+        Converters = new ConverterCurrents(networks);
+    }
+
+    /// <summary>The method's options.</summary>
+    public Iec60909 Method { get; }
+
+    /// <summary>The study's networks.</summary>
+    public StudyNetworks Networks { get; }
+
+    /// <summary>The circuit.</summary>
+    public Circuit Circuit => Networks.Circuit;
+
+    /// <summary>The impedances of the sources.</summary>
+    public Iec60909Sources Sources { get; }
+
+    /// <summary>The nodes between machines and unit transformers.</summary>
+    public InsideUnits Inside { get; }
+
+    /// <summary>The machines' shares of the fault currents.</summary>
+    public PartialCurrents Partial { get; }
+
+    /// <summary>What full-size converters add.</summary>
+    public ConverterCurrents Converters { get; }
+
+    /// <summary>The smallest R/X around each node, for method (a).</summary>
+    public SmallestRatios Smallest => _smallest.Value;
+
+    /// <summary>The rated currents of the motors around each node.</summary>
+    public RatedMotors Motors => _motors.Value;
+
+    public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
+        new Iec60909Currents(this, context, context.Network.Buses[bus], seen);
+
+    /// <summary>Whether each source feeds a node by a way of its own.</summary>
+    public bool IsRadial(int node) => _radial.Value[node];
+
+    /// <summary>The synchronous machines in a node's connected part.</summary>
+    public List<SynchronousMachine> MachinesAround(int node) =>
+        _machines.Value.TryGetValue(_islands.Value[node], out var machines) ? machines : [];
+
+    private Dictionary<int, List<SynchronousMachine>> GatherMachines() => Circuit.Sources
+        .Where(source => Circuit.Network.Elements[source.Element] is SynchronousMachine)
+        .GroupBy(source => _islands.Value[source.Node], source => (SynchronousMachine)Circuit.Network.Elements[source.Element])
+        .ToDictionary(group => group.Key, group => group.ToList());
+
+    /// <summary>What a current at one node is at another, per unit, through the ratios between.</summary>
+    public double Transfer(int from, int to) => _levels.Value[from] / _levels.Value[to];
+
+    /// <summary>Zkk in a network that is not among the method's standing ones, with the fault's own impedance.</summary>
+    public Complex Seen(NetworkVariant variant, in SeenImpedances seen)
+    {
+        var network = Networks.Of(variant);
+        var z = seen.CoversEveryBus || network.HasDrivingPoints
+            ? network.DrivingPoints.Impedances[seen.Node]
+            : network.Column(seen.Node, out _)[seen.Node];
+        return Corrected(variant, seen.Node, z + variant.OfFault(seen.FaultPu));
+    }
+
+    /// <summary>An impedance with the factors for faults inside a power station unit, where the node is in one.</summary>
+    public Complex Corrected(NetworkVariant variant, int node, Complex z) => Inside.Of(node) is { } unit ? unit.Corrected(variant, node, z) : z;
+}

@@ -1,0 +1,105 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>The currents of one fault by <see cref="Iec60909"/>. Currents that full-size converters add stand apart: they have no DC component.</summary>
+internal sealed class Iec60909Currents : FaultCurrents
+{
+    private readonly Iec60909AtWork _work;
+    private readonly StudyContext _context;
+    private readonly SeenImpedances _seen;
+
+    public Iec60909Currents(Iec60909AtWork work, StudyContext context, Bus bus, in SeenImpedances seen)
+    {
+        _work = work;
+        _context = context;
+        _seen = seen;
+        Bus = bus;
+        DrivingVoltagePu = work.Inside.DrivingVoltagePu(seen.Node, bus, work.Method.Case) ?? work.Method.DrivingVoltagePu(bus);
+        WithoutMotorsPu = work.Corrected(Iec60909.WithoutMotors, seen.Node, seen[1]);
+        var withMotors = work.Corrected(Iec60909.Initial, seen.Node, seen[0]);
+        MotorsLeftOut = work.Method.LeaveOutSmallMotors && work.Motors.AreSmall(seen.Node, DrivingVoltagePu / Complex.Abs(WithoutMotorsPu));
+        ImpedancePu = MotorsLeftOut ? WithoutMotorsPu : withMotors;
+        ImpedancePartKa = Ka(DrivingVoltagePu / Complex.Abs(ImpedancePu));
+        ConverterPartKa = Ka(work.Converters.Initial(seen.Node) / Complex.Abs(ImpedancePu));
+    }
+
+    /// <summary>The bus.</summary>
+    public Bus Bus { get; }
+
+    /// <summary>The node.</summary>
+    public int Node => _seen.Node;
+
+    /// <summary>c, or c·UrG/Un at a machine's terminals inside a power station unit.</summary>
+    public double DrivingVoltagePu { get; }
+
+    /// <summary>Zk without motors.</summary>
+    public Complex WithoutMotorsPu { get; }
+
+    /// <summary>Whether the motors were left out here as small.</summary>
+    public bool MotorsLeftOut { get; }
+
+    /// <summary>What flows through the impedance at the fault, in kA.</summary>
+    public double ImpedancePartKa { get; }
+
+    /// <summary>What full-size converters add at the beginning, in kA.</summary>
+    public double ConverterPartKa { get; }
+
+    /// <summary>Whether this is one of the results at every bus.</summary>
+    public bool CoversEveryBus => _seen.CoversEveryBus;
+
+    /// <summary>The impedance of the fault itself per unit.</summary>
+    public Complex FaultPu => _seen.FaultPu;
+
+    public override Complex ImpedancePu { get; }
+
+    public override double InitialSymmetricalKa => ImpedancePartKa + ConverterPartKa;
+
+    public override double? TransientKa => null;
+
+    public override double? SteadyStateKa => SteadyState.Ka;
+
+    public override ReactanceRatio Ratio => _work.Method.PeakNetwork is { } network
+        ? EquivalentFrequency.Ratio(_work.Corrected(network, Node, _seen[2]), network.FrequencyRatio)
+        : _work.Smallest.At(Node);
+
+    public override AcComponentRule AcComponentRule => AcComponentRule.BreakingCurrent;
+
+    public override double PeakKa => PerUnit.Sqrt2 * (Kappa * ImpedancePartKa + ConverterPartKa);
+
+    public override double Residual => _seen.Residual;
+
+    public override Iec60909Result Standard => new(this, _context);
+
+    /// <summary>κ, with the margin 1.15 of method (b) unless all branches have R/X below 0.3.</summary>
+    public double Kappa
+    {
+        get
+        {
+            var kappa = PeakFactorKappa.Of(Ratio);
+            return _work.Method.XOverRRule == XOverRRule.ComplexImpedance && !_work.Smallest.AllBelow(Node, 0.3)
+                ? PeakFactorKappa.WithMargin(kappa, VoltageFactor.IsLowVoltage(Bus))
+                : kappa;
+        }
+    }
+
+    /// <summary>Ik with the rule it came by.</summary>
+    public SteadyStateCurrent SteadyState => SteadyStateCurrent.Of(_work, this);
+
+    public override double DcComponentKa(double seconds)
+    {
+        var frequencyRatio = EquivalentFrequency.OfDcComponent(seconds * _context.Network.FrequencyHz);
+        var variant = Iec60909.DcNetwork(frequencyRatio);
+        var ratio = EquivalentFrequency.Ratio(_work.Seen(variant, _seen), frequencyRatio);
+        return DcComponent.Ka(ImpedancePartKa, ratio, _context.Omega * seconds);
+    }
+
+    public override double SymmetricalRmsKa(double seconds) =>
+        seconds < DecrementFactors.ShortestDelaySeconds ? InitialSymmetricalKa : Breaking.Ka(seconds);
+
+    /// <summary>Ib with the rule it comes by.</summary>
+    public BreakingCurrent Breaking => BreakingCurrent.Of(_work, this);
+
+    /// <summary>A per-unit current at this bus in kA.</summary>
+    public double Ka(double perUnit) => perUnit * _context.BaseKa(Bus);
+}

@@ -1,0 +1,89 @@
+namespace NetFault;
+
+/// <summary>A synchronous machine with its unit transformer, and the factors that hold for them together.</summary>
+/// <param name="Machine">The machine.</param>
+/// <param name="Transformer">Its unit transformer.</param>
+/// <param name="Factor">K_S or K_SO, for machine and transformer alike.</param>
+/// <param name="MachineInside">K_G,S or K_G,SO: the machine's factor for faults between machine and transformer.</param>
+/// <param name="TransformerInside">K_T,S or K_T,SO: the transformer's factor for these faults.</param>
+internal sealed record PowerStationUnit(
+    SynchronousMachine Machine, Transformer Transformer, double Factor, double MachineInside, double TransformerInside);
+
+/// <summary>Finds the power station units of a network (IEC 60909-0:2016, 6.7).</summary>
+internal sealed class PowerStationUnits
+{
+    private readonly Dictionary<string, PowerStationUnit> _byTransformer = new(StringComparer.Ordinal);
+    private readonly Dictionary<string, PowerStationUnit> _byMachine = new(StringComparer.Ordinal);
+
+    /// <summary>The units in service.</summary>
+    /// <exception cref="MethodDataException">A unit lacks what its factors need, or two machines share a unit transformer.</exception>
+    public PowerStationUnits(Network network, ShortCircuitCase which)
+    {
+        foreach (var machine in network.SynchronousMachines)
+        {
+            if (machine.UnitTransformer is not { } id || !machine.InService)
+                continue;
+            var transformer = network.Find<Transformer>(id);
+            if (!transformer.InService)
+                continue;
+            if (_byTransformer.TryGetValue(id, out var other))
+                throw MethodDataException.SharedUnitTransformer(machine, other.Machine);
+            var unit = Of(network, machine, transformer, which);
+            _byTransformer.Add(id, unit);
+            _byMachine.Add(machine.Id, unit);
+        }
+    }
+
+    /// <summary>All of them.</summary>
+    public IReadOnlyCollection<PowerStationUnit> All => _byMachine.Values;
+
+    /// <summary>The unit of a transformer, or null where it is a network transformer.</summary>
+    public PowerStationUnit? Of(Transformer transformer) => _byTransformer.TryGetValue(transformer.Id, out var unit) ? unit : null;
+
+    /// <summary>The unit of a machine, or null where it is connected directly.</summary>
+    public PowerStationUnit? Of(SynchronousMachine machine) => _byMachine.TryGetValue(machine.Id, out var unit) ? unit : null;
+
+    private static PowerStationUnit Of(Network network, SynchronousMachine machine, Transformer transformer, ShortCircuitCase which)
+    {
+        var terminals = network.Find<Bus>(machine.Bus);
+        var atHv = transformer.Lv == machine.Bus;
+        var highSide = network.Find<Bus>(atHv ? transformer.Hv : transformer.Lv);
+        var ratio = atHv ? transformer.RatedHvKv / transformer.RatedLvKv : transformer.RatedLvKv / transformer.RatedHvKv;
+        var xT = TransformerCircuit.RelativeReactance(transformer);
+        double xd = machine.ReactancePu.Subtransient, sinPhi = SinPhi.Of(machine), ratedKv = machine.RatedKv ?? terminals.NominalKv;
+        double cMax = VoltageFactor.Max(highSide), cMaxInside = VoltageFactor.Max(terminals);
+        var hasTapChanger = transformer.OnLoadTapChanger ?? throw MethodDataException.Missing(
+            transformer, "on_load_tap_changer", "it decides between K_S and K_SO of the power station unit");
+        if (hasTapChanger)
+        {
+            var factor = CorrectionFactors.UnitWithTapChanger(highSide.NominalKv, ratedKv, ratio, cMax, xd, xT, sinPhi);
+            return Inside(machine, transformer, factor, 0.0, cMaxInside, xT, sinPhi);
+        }
+        var regulation = machine.VoltageRegulationPercent.GetValueOrDefault() / 100.0;
+        var tap = (which == ShortCircuitCase.Maximum ? -1.0 : 1.0) * transformer.OffLoadTapRangePercent.GetValueOrDefault() / 100.0;
+        var withoutTapChanger = CorrectionFactors.UnitWithoutTapChanger(
+            highSide.NominalKv, ratedKv, ratio, regulation, tap, cMax, xd, sinPhi);
+        return Inside(machine, transformer, withoutTapChanger, regulation, cMaxInside, xT, sinPhi);
+    }
+
+    private static PowerStationUnit Inside(
+        SynchronousMachine machine, Transformer transformer, double factor, double regulation, double cMax, double xT, double sinPhi) => new(
+        machine, transformer, factor,
+        CorrectionFactors.GeneratorInsideUnit(regulation, cMax, machine.ReactancePu.Subtransient, sinPhi),
+        CorrectionFactors.TransformerInsideUnit(regulation, cMax, xT, sinPhi));
+}
+
+/// <summary>sin φrG of a synchronous machine.</summary>
+internal static class SinPhi
+{
+    /// <summary>From the rated power factor; 1 for a condenser that does not give one.</summary>
+    /// <exception cref="MethodDataException">The power factor is missing.</exception>
+    public static double Of(SynchronousMachine machine)
+    {
+        if (machine.RatedPowerFactor is { } cosPhi)
+            return Math.Sqrt(1.0 - cosPhi * cosPhi);
+        return machine.Service == SynchronousService.Condenser
+            ? 1.0
+            : throw MethodDataException.Missing(machine, "rated_power_factor", "the factor K_G, K_S or K_SO needs sin φrG");
+    }
+}

@@ -1,0 +1,55 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>By which rule of IEC 60909-0:2016, clause 11, a steady-state current was found.</summary>
+public enum SteadyStateCurrentRule
+{
+    /// <summary>Ik = I″k without asynchronous motors: meshed networks, and wherever no machine feeds the fault on its own way.</summary>
+    WithoutMotors,
+
+    /// <summary>Non-meshed: each machine feeds λ·IrG, with λ from the network file, the feeders their initial current, motors nothing.</summary>
+    RadialByFactor,
+
+    /// <summary>
+    /// Non-meshed, but a machine does not give its <c>steady_state_factor</c>: its initial current is kept, which is too large at a
+    /// maximum and of no use as a minimum.
+    /// </summary>
+    RadialFactorMissing,
+}
+
+/// <summary>The steady-state current at a fault.</summary>
+/// <param name="Ka">Ik in kA.</param>
+/// <param name="Rule">The rule.</param>
+internal readonly record struct SteadyStateCurrent(double Ka, SteadyStateCurrentRule Rule)
+{
+    public static SteadyStateCurrent Of(Iec60909AtWork work, Iec60909Currents fault)
+    {
+        var current = fault.DrivingVoltagePu / fault.WithoutMotorsPu;
+        var converters = fault.Ka(work.Converters.SteadyState(fault.Node, work.Method.Case) / Complex.Abs(fault.WithoutMotorsPu));
+        var machines = work.MachinesAround(fault.Node);
+        if (machines.Count == 0 || !work.IsRadial(fault.Node))
+            return new(fault.Ka(Complex.Abs(current)) + converters, SteadyStateCurrentRule.WithoutMotors);
+        if (!machines.Exists(one => one.SteadyStateFactor.HasValue))
+            return new(fault.Ka(Complex.Abs(current)) + converters, SteadyStateCurrentRule.RadialFactorMissing);
+        return new(fault.Ka(ByFactors(work, fault, current)) + converters, machines.TrueForAll(one => one.SteadyStateFactor.HasValue)
+            ? SteadyStateCurrentRule.RadialByFactor
+            : SteadyStateCurrentRule.RadialFactorMissing);
+    }
+
+    /// <summary>Takes each machine's initial current out of the whole and puts λ·IrG in its place.</summary>
+    private static double ByFactors(Iec60909AtWork work, Iec60909Currents fault, Complex current)
+    {
+        var steady = 0.0;
+        foreach (var share in work.Partial.WithoutMotors(fault))
+        {
+            var source = work.Circuit.Sources[share.Source];
+            if (work.Circuit.Network.Elements[source.Element] is not SynchronousMachine { SteadyStateFactor: { } factor })
+                continue;
+            var transfer = work.Transfer(source.Node, fault.Node);
+            current -= transfer * share.Current;
+            steady += (work.Method.Case == ShortCircuitCase.Maximum ? factor.Max : factor.Min ?? factor.Max) * share.Rated * transfer;
+        }
+        return Complex.Abs(current) + steady;
+    }
+}
