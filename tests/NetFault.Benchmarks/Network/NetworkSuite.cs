@@ -29,7 +29,6 @@ internal static class NetworkSuite
         if (!args.Contains("--quick") && TryRead(folder, "case1354_pegase") is { } medium)
             AgainstDenseInverse("case1354_pegase", medium, table);
         table.Print(Console.Out);
-        Memory();
         if (File.Exists(Path.Combine(folder, "case10000_goc.yaml")))
             ReaderBenchmark.Run(Path.Combine(folder, "case10000_goc.yaml"));
         return 0;
@@ -122,19 +121,6 @@ internal static class NetworkSuite
         for (var i = 1; i < columns.Length; i++)
             columns[i] += columns[i - 1];
         return (columns, [.. entries.Select(one => one.Item1)], [.. entries.Select(one => one.Item3)]);
-    }
-
-    private static void Memory()
-    {
-        var network = Grids.Meshed(400, 250);
-        GC.Collect();
-        var before = GC.GetTotalMemory(true);
-        var allocated = GC.GetTotalAllocatedBytes(true);
-        var faults = Solve(network, InitialOnly);
-        var held = GC.GetTotalMemory(true) - before;
-        Console.WriteLine(FormattableString.Invariant(
-            $"generated, {faults.Count} buses: allocated {(GC.GetTotalAllocatedBytes(true) - allocated) / 1e6:0} MB in all, results hold {held / 1e6:0} MB; ")
-            + FormattableString.Invariant($"peak working set of this process {Process.GetCurrentProcess().PeakWorkingSet64 / 1e6:0} MB"));
     }
 
     private static void Repeat(int times, Action work)
