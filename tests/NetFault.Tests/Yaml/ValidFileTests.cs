@@ -37,7 +37,7 @@ public class ValidFileTests
         network.SynchronousMachines[0].Should().Be(new SynchronousMachine
         {
             Id = "G1", Bus = "MV-A", RatedMva = 12.5, RatedKv = 11, RatedPowerFactor = 0.8, ReactancePu = new(0.14, 0.22, 1.9, 0.15),
-            TimeConstantSeconds = new(0.03, 0.9, 0.12), ArmatureResistancePu = 0.004, VoltageRegulationPercent = 5, UnitTransformer = "T1", Note = "two\nlines\n",
+            TimeConstantSeconds = new(0.03, 0.9, 0.12), ArmatureResistancePu = 0.004, VoltageRegulationPercent = 5, SteadyStateFactor = new(1.8, 0.5), UnitTransformer = "T1", Note = "two\nlines\n",
         });
         network.SynchronousMachines[1].Service.Should().Be(SynchronousService.Motor);
         network.SynchronousMachines[1].ArmatureResistanceOhm.Should().Be(0.1);
@@ -51,7 +51,7 @@ public class ValidFileTests
         t1.Should().Be(new Transformer
         {
             Id = "T1", Hv = "GRID", Lv = "MV-A", RatedMva = 25, RatedHvKv = 110, RatedLvKv = 11, ShortCircuitVoltagePercent = 10, LoadLossKw = 120,
-            VectorGroup = "Dyn11", OnLoadTapChanger = true, Note = "T1",
+            VectorGroup = "Dyn11", OnLoadTapChanger = true, OffLoadTapRangePercent = 5, Note = "T1",
         });
         network.Transformers[1].ResistivePercent.Should().Be(1.1);
         network.Transformers[2].XOverR.Should().Be(25);
@@ -72,7 +72,7 @@ public class ValidFileTests
         network.ThreeWindingTransformers[1].RatedMva.Should().Be(new WindingValues(35, 35, null));
         network.Lines[0].Should().Be(new Line
         {
-            Id = "C1", From = "MV-A", To = "MV-B", LengthKm = 0.8, OhmPerKm = new(0.098, 0.095), Parallel = 2, Note = "cable",
+            Id = "C1", From = "MV-A", To = "MV-B", LengthKm = 0.8, OhmPerKm = new(0.098, 0.095), Parallel = 2, EndTemperatureC = 160, Note = "cable",
         });
         network.Lines[1].Ohm.Should().Be(new Impedance(0.1, 0.2));
         network.Lines[2].PerUnit.Should().Be(new Impedance(0.001, -0.02));
@@ -82,6 +82,21 @@ public class ValidFileTests
         });
         network.SeriesReactors[1].Ohm.Should().Be(new Impedance(0.001, 0.12));
         network.BusCouplers.Select(one => one.Closed).Should().Equal(false, true);
+    }
+
+    [Fact]
+    public void Every_key_of_the_converters_and_capacitors_is_read()
+    {
+        var network = Read("every-key.yaml");
+        network.ConverterFedDrives.Should().Equal(new ConverterFedDrive { Id = "D1", Bus = "MV-A", RatedMva = 4, RatedKv = 11, Note = "rolling mill" });
+        network.FullConverterSources.Should().Equal(
+            new FullConverterSource { Id = "PV1", Bus = "MV-A", SourceCurrentKa = 0.12, SteadyStateKa = new(0.12, 0.1), Note = "roof" });
+        network.DoublyFedGenerators.Should().Equal(new DoublyFedGenerator
+        {
+            Id = "WP1", Bus = "MV-A", HighestInstantaneousKa = 0.5, RatedKv = 11, PeakFactor = 1.8, ROverX = 0.1, SteadyStateKa = new(0.15), Note = "hill",
+        });
+        network.SeriesCapacitors.Should().Equal(
+            new SeriesCapacitor { Id = "SC1", From = "MV-A", To = "MV-B", ReactanceOhm = 12, VoltageLimited = false, Note = "north line" });
     }
 
     [Fact]

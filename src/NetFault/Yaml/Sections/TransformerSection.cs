@@ -28,7 +28,7 @@ internal sealed class TransformerSection : Section<Transformer>
             VectorGroup = fields.Text("vector_group"),
             OnLoadTapChanger = fields.Flag("on_load_tap_changer"),
             OffLoadTapRangePercent = fields.Number("off_load_tap_range_percent"),
-        InService = fields.InService(),
+            InService = fields.InService(),
             Note = fields.Note(),
         };
     }
