@@ -45,8 +45,9 @@ public sealed record Iec60909 : FaultMethod
     }
 
     /// <summary>
-    /// Leaves asynchronous motors and converter-fed drives out at buses where the sum of their rated currents, all motors of the connected
-    /// network together, is at most 1 % of the initial current without them. Default false. The result says where motors were left out.
+    /// Leaves asynchronous motors and converter-fed drives out at buses where the standard's rules (6.10) allow it: those connected without a
+    /// transformer by ΣIrM ≤ 0.01·I″k, those behind transformers that step down by their power against the transformers' and the fault
+    /// level. Default false. The result says where motors were left out.
     /// </summary>
     public bool LeaveOutSmallMotors { get; init; }
 

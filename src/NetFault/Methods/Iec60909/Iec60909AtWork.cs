@@ -9,7 +9,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     private readonly Lazy<double[]> _levels;
     private readonly Lazy<bool[]> _radial;
     private readonly Lazy<SmallestRatios> _smallest;
-    private readonly Lazy<RatedMotors> _motors;
+    private readonly Lazy<SmallMotors> _motors;
     private readonly Lazy<int[]> _islands;
     private readonly Lazy<Dictionary<int, List<SynchronousMachine>>> _machines;
 
@@ -23,7 +23,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
         _levels = new(() => _graph.Value.Levels());
         _radial = new(() => RadialNodes.Of(Circuit, _graph.Value));
         _smallest = new(() => new SmallestRatios(Circuit, Sources));
-        _motors = new(() => new RatedMotors(Circuit));
+        _motors = new(() => new SmallMotors(Circuit));
         _islands = new(() => Islands.OfNodes(Circuit));
         _machines = new(GatherMachines);
         Inside = new InsideUnits(networks, units, Sources, _graph);
@@ -55,8 +55,8 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     /// <summary>The smallest R/X around each node, for method (a).</summary>
     public SmallestRatios Smallest => _smallest.Value;
 
-    /// <summary>The rated currents of the motors around each node.</summary>
-    public RatedMotors Motors => _motors.Value;
+    /// <summary>Where motors may be left out.</summary>
+    public SmallMotors Motors => _motors.Value;
 
     public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
         new Iec60909Currents(this, context, context.Network.Buses[bus], seen);

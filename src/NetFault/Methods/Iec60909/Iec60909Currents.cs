@@ -18,7 +18,8 @@ internal sealed class Iec60909Currents : FaultCurrents
         DrivingVoltagePu = work.Inside.DrivingVoltagePu(seen.Node, bus, work.Method.Case) ?? work.Method.DrivingVoltagePu(bus);
         WithoutMotorsPu = work.Corrected(Iec60909.WithoutMotors, seen.Node, seen[1]);
         var withMotors = work.Corrected(Iec60909.Initial, seen.Node, seen[0]);
-        MotorsLeftOut = work.Method.LeaveOutSmallMotors && work.Motors.AreSmall(seen.Node, DrivingVoltagePu / Complex.Abs(WithoutMotorsPu));
+        MotorsLeftOut = work.Method.LeaveOutSmallMotors && work.Motors.AreSmall(
+            seen.Node, DrivingVoltagePu, DrivingVoltagePu / Complex.Abs(WithoutMotorsPu));
         ImpedancePu = MotorsLeftOut ? WithoutMotorsPu : withMotors;
         ImpedancePartKa = Ka(DrivingVoltagePu / Complex.Abs(ImpedancePu));
         ConverterPartKa = Ka(work.Converters.Initial(seen.Node) / Complex.Abs(ImpedancePu));
