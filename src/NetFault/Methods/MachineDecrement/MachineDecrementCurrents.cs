@@ -15,7 +15,6 @@ internal sealed class MachineDecrementCurrents : FaultCurrents
         _bus = bus;
         _seen = seen;
         InitialSymmetricalKa = context.CurrentKa(bus, seen[0]);
-        Ratio = RatioOf((MachineDecrement)context.Method, seen);
     }
 
     public override double InitialSymmetricalKa { get; }
@@ -26,7 +25,7 @@ internal sealed class MachineDecrementCurrents : FaultCurrents
 
     public override Complex ImpedancePu => _seen[0];
 
-    public override ReactanceRatio Ratio { get; }
+    public override ReactanceRatio Ratio => RatioOf((MachineDecrement)_context.Method, _seen);
 
     public override AcComponentRule AcComponentRule => AcComponentRule.HeldAtInitial;
 
