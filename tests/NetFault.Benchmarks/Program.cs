@@ -1,3 +1,4 @@
+using BenchmarkDotNet.Running;
 using NetFault.Benchmarks.Kernel;
 using NetFault.Benchmarks.Network;
 
@@ -8,7 +9,12 @@ switch (args.FirstOrDefault())
         return KernelSuite.Run(args[1..]);
     case "network":
         return NetworkSuite.Run(args[1..]);
+    case "memory":
+        return MemorySuite.Run();
+    case "dotnet":
+        BenchmarkSwitcher.FromTypes([typeof(StudyBenchmarks)]).Run(args[1..]);
+        return 0;
     default:
-        Console.WriteLine("usage: <suite> [options]; suites: kernel, network; each takes [networks-folder] [--quick]");
+        Console.WriteLine("usage: <suite> [options]; suites: kernel and network, with [networks-folder] [--quick]; memory; dotnet, with the options of BenchmarkDotNet");
         return args.Length == 0 ? 0 : 1;
 }

@@ -3,12 +3,13 @@ namespace NetFault;
 /// <summary>The network is valid, but lacks data that the chosen method needs.</summary>
 public sealed class MethodDataException : Exception
 {
-    private MethodDataException(NetworkElement element, string key, string message)
-        : base($"{element.Section} {element.Id}, {key}: {message}")
+    private MethodDataException(Network network, NetworkElement element, string key, string message)
+        : base($"{Place(network.PlaceOf(element))}{element.Section} {element.Id}, {key}: {message}")
     {
         Section = element.Section;
         ElementId = element.Id;
         Key = key;
+        (File, Line) = network.PlaceOf(element) is { } place ? (place.File, (int?)place.Line) : (null, null);
     }
 
     /// <summary>The section of the element concerned.</summary>
@@ -20,9 +21,18 @@ public sealed class MethodDataException : Exception
     /// <summary>The key of the network file concerned.</summary>
     public string Key { get; }
 
-    internal static MethodDataException Missing(NetworkElement element, string key, string reason) =>
-        new(element, key, $"is missing, and the method needs it: {reason}");
+    /// <summary>The file in which the element stands; null for a network built by a program.</summary>
+    public string? File { get; }
 
-    internal static MethodDataException SharedUnitTransformer(SynchronousMachine machine, SynchronousMachine other) =>
-        new(machine, "unit_transformer", $"machine \"{other.Id}\" names the same unit transformer; the method knows units of one machine and one transformer");
+    /// <summary>The line at which the element begins, counted from 1; null for a network built by a program.</summary>
+    public int? Line { get; }
+
+    internal static MethodDataException Missing(Network network, NetworkElement element, string key, string reason) =>
+        new(network, element, key, $"is missing, and the method needs it: {reason}");
+
+    internal static MethodDataException SharedUnitTransformer(Network network, SynchronousMachine machine, SynchronousMachine other) => new(
+        network, machine, "unit_transformer",
+        $"machine \"{other.Id}\" names the same unit transformer; the method knows units of one machine and one transformer");
+
+    private static string Place((string File, int Line)? place) => place is { } at ? FormattableString.Invariant($"{at.File}({at.Line}): ") : string.Empty;
 }

@@ -90,6 +90,22 @@ public sealed class Network
     /// <summary>What is odd but possible: buses without a source, unusual values. <see cref="NetworkBuilder.Build"/> fills it.</summary>
     public IReadOnlyList<Diagnostic> Warnings { get; internal set; } = [];
 
+    /// <summary>The file the network was read from, with the line of each element in the order of the file; null without a file.</summary>
+    internal (string File, int[] Lines)? Origin { get; set; }
+
+    /// <summary>Where in its file an element stands.</summary>
+    internal (string File, int Line)? PlaceOf(NetworkElement element)
+    {
+        if (Origin is not { } origin)
+            return null;
+        for (var i = 0; i < origin.Lines.Length; i++)
+        {
+            if (ReferenceEquals(_draft.Elements[i], element))
+                return (origin.File, origin.Lines[i]);
+        }
+        return null;
+    }
+
     /// <summary>The network as a graph.</summary>
     internal NetworkTopology Topology { get; }
 

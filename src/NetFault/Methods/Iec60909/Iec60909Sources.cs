@@ -53,7 +53,7 @@ internal sealed class Iec60909Sources
             log?.Add(machine, "rated_power_factor", "a condenser: cos φ = 0 assumed in K_G");
         var terminalKv = (machine.RatedKv ?? bus.NominalKv) * (1.0 + machine.VoltageRegulationPercent.GetValueOrDefault() / 100.0);
         return CorrectionFactors.Generator(
-            bus.NominalKv, terminalKv, VoltageFactor.Max(bus), machine.ReactancePu.Subtransient, SinPhi.Of(machine));
+            bus.NominalKv, terminalKv, VoltageFactor.Max(bus), machine.ReactancePu.Subtransient, SinPhi.Of(_network, machine));
     }
 
     /// <summary>R_Gf/X″d for the peak current (6.6.1): 0.05 from 100 MVA, 0.07 below, 0.15 up to 1 kV.</summary>

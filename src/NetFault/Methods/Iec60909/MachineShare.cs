@@ -5,10 +5,12 @@ namespace NetFault;
 /// <summary>A machine's share of a short-circuit current, and what of it is left at contact parting (IEC 60909-0:2016, clause 10).</summary>
 public sealed class MachineShare
 {
+    private readonly Network _network;
     private readonly NetworkElement _element;
 
-    private MachineShare(NetworkElement element, double initialKa, double ratedKa)
+    private MachineShare(Network network, NetworkElement element, double initialKa, double ratedKa)
     {
+        _network = network;
         _element = element;
         InitialKa = initialKa;
         RatedKa = ratedKa;
@@ -40,7 +42,7 @@ public sealed class MachineShare
     {
         if (_element is not AsynchronousMotor motor || RatioToRated <= 2.0)
             return 1.0;
-        var pairs = motor.PolePairs ?? throw MethodDataException.Missing(motor, "pole_pairs", "the factor q needs the power of one pole pair");
+        var pairs = motor.PolePairs ?? throw MethodDataException.Missing(_network, motor, "pole_pairs", "the factor q needs the power of one pole pair");
         return DecrementFactors.QAt(motor.RatedKw / 1000.0 / pairs, Delay(minimumTimeDelaySeconds));
     }
 
@@ -52,7 +54,7 @@ public sealed class MachineShare
         var element = circuit.Sources[share.Source].Element;
         var bus = circuit.Network.Buses[circuit.Network.Topology.TerminalBus(element, 0)];
         var baseKa = PerUnit.BaseKa(bus.NominalKv, circuit.Network.BaseMva);
-        return new MachineShare(circuit.Network.Elements[element], Complex.Abs(share.Current) * baseKa, share.Rated * baseKa);
+        return new MachineShare(circuit.Network, circuit.Network.Elements[element], Complex.Abs(share.Current) * baseKa, share.Rated * baseKa);
     }
 
     private static double Delay(double seconds) =>

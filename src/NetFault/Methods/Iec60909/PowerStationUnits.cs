@@ -27,7 +27,7 @@ internal sealed class PowerStationUnits
             if (!transformer.InService)
                 continue;
             if (_byTransformer.TryGetValue(id, out var other))
-                throw MethodDataException.SharedUnitTransformer(machine, other.Machine);
+                throw MethodDataException.SharedUnitTransformer(network, machine, other.Machine);
             var unit = Of(network, machine, transformer, which);
             _byTransformer.Add(id, unit);
             _byMachine.Add(machine.Id, unit);
@@ -50,10 +50,10 @@ internal sealed class PowerStationUnits
         var highSide = network.Find<Bus>(atHv ? transformer.Hv : transformer.Lv);
         var ratio = atHv ? transformer.RatedHvKv / transformer.RatedLvKv : transformer.RatedLvKv / transformer.RatedHvKv;
         var xT = TransformerCircuit.RelativeReactance(transformer);
-        double xd = machine.ReactancePu.Subtransient, sinPhi = SinPhi.Of(machine), ratedKv = machine.RatedKv ?? terminals.NominalKv;
+        double xd = machine.ReactancePu.Subtransient, sinPhi = SinPhi.Of(network, machine), ratedKv = machine.RatedKv ?? terminals.NominalKv;
         double cMax = VoltageFactor.Max(highSide), cMaxInside = VoltageFactor.Max(terminals);
         var hasTapChanger = transformer.OnLoadTapChanger ?? throw MethodDataException.Missing(
-            transformer, "on_load_tap_changer", "it decides between K_S and K_SO of the power station unit");
+            network, transformer, "on_load_tap_changer", "it decides between K_S and K_SO of the power station unit");
         if (hasTapChanger)
         {
             var factor = CorrectionFactors.UnitWithTapChanger(highSide.NominalKv, ratedKv, ratio, cMax, xd, xT, sinPhi);
@@ -78,12 +78,12 @@ internal static class SinPhi
 {
     /// <summary>From the rated power factor; 1 for a condenser that does not give one.</summary>
     /// <exception cref="MethodDataException">The power factor is missing.</exception>
-    public static double Of(SynchronousMachine machine)
+    public static double Of(Network network, SynchronousMachine machine)
     {
         if (machine.RatedPowerFactor is { } cosPhi)
             return Math.Sqrt(1.0 - cosPhi * cosPhi);
         return machine.Service == SynchronousService.Condenser
             ? 1.0
-            : throw MethodDataException.Missing(machine, "rated_power_factor", "the factor K_G, K_S or K_SO needs sin φrG");
+            : throw MethodDataException.Missing(network, machine, "rated_power_factor", "the factor K_G, K_S or K_SO needs sin φrG");
     }
 }

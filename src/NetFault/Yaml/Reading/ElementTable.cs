@@ -57,6 +57,15 @@ internal sealed class ElementTable
         return (_byId[index] ??= IndexById(index)).TryGetValue(id, out var element) ? element : null;
     }
 
+    /// <summary>The line of each element's id, counted from 1.</summary>
+    public int[] Lines()
+    {
+        var lines = new int[_entries.Count];
+        for (var i = 0; i < lines.Length; i++)
+            lines[i] = _source.LineOf(_entries[i].IdOffset);
+        return lines;
+    }
+
     /// <summary>The offset and length of an element's id.</summary>
     public (int Offset, int Length) PlaceOf(int element) => (_entries[element].IdOffset, _entries[element].IdLength);
 

@@ -30,6 +30,8 @@ internal sealed class FileCompletion
             network = CheckAll(found);
         else
             CheckPart(found);
+        if (network is not null)
+            network.Origin = (_problems.Source.File, _gathered.Elements.Lines());
         if (found.Count == 0 && _problems.Found.Count == 0)
             return new NetworkFileResult(network, []);
         var all = InOrder(_problems.Found.Concat(found.Where(IsNews).Select(Locate)));

@@ -23,13 +23,18 @@ internal sealed class SourceText
     public SourceLocation Locate(int offset, int length)
     {
         offset = Math.Max(0, Math.Min(offset, Text.Length));
+        var line = LineOf(offset) - 1;
+        var text = LineText(line);
+        var column = offset - _lineStarts![line];
+        return new SourceLocation(File, line + 1, column + 1, Math.Max(1, Math.Min(length, text.Length - column)), text);
+    }
+
+    /// <summary>The line of an offset, counted from 1.</summary>
+    public int LineOf(int offset)
+    {
         _lineStarts ??= FindLines(Text);
         var line = Array.BinarySearch(_lineStarts, offset);
-        if (line < 0)
-            line = ~line - 1;
-        var text = LineText(line);
-        var column = offset - _lineStarts[line];
-        return new SourceLocation(File, line + 1, column + 1, Math.Max(1, Math.Min(length, text.Length - column)), text);
+        return line < 0 ? ~line : line + 1;
     }
 
     /// <summary>Offset of the start of the line that holds an offset.</summary>
