@@ -8,7 +8,7 @@ internal sealed class NetworkDraft
 {
     private readonly Dictionary<string, SectionDraft> _sections = new(StringComparer.Ordinal);
     private readonly List<NetworkElement> _elements = [];
-    private readonly SectionDraft _buses;
+    private SectionDraft _buses;
 
     /// <summary>The section of the last element: elements of a section come one after the other.</summary>
     private SectionDraft _last;
@@ -50,6 +50,22 @@ internal sealed class NetworkDraft
         return true;
     }
 
+    /// <summary>Makes room for as many elements of a section.</summary>
+    public void Expect(string section, int count)
+    {
+        if (_sections.TryGetValue(section, out var known) && known.ById.Count > 0)
+            return;
+        var expected = new SectionDraft(section, count);
+        _sections[section] = expected;
+        if (section == _buses.Name)
+            _buses = expected;
+        _last = expected;
+        _elements.Capacity = Math.Max(_elements.Capacity, _elements.Count + count);
+    }
+
+    /// <summary>The one string for an id of a bus that is here already: many elements name the same one.</summary>
+    public string SameText(string busId) => _buses.ById.TryGetValue(busId, out var bus) && bus is not null ? bus.Id : busId;
+
     public bool HasBus(string id) => _buses.ById.ContainsKey(id);
 
     public Bus? FindBus(string id) => _buses.ById.TryGetValue(id, out var bus) ? (Bus?)bus : null;
@@ -75,15 +91,17 @@ internal sealed class NetworkDraft
 
     private sealed class SectionDraft
     {
-        public SectionDraft(string name)
+        public SectionDraft(string name, int capacity = 0)
         {
             Name = name;
+            ById = new Dictionary<string, NetworkElement?>(capacity, StringComparer.Ordinal);
+            Elements = new List<NetworkElement>(capacity);
         }
 
         public string Name { get; }
 
-        public Dictionary<string, NetworkElement?> ById { get; } = new(StringComparer.Ordinal);
+        public Dictionary<string, NetworkElement?> ById { get; }
 
-        public List<NetworkElement> Elements { get; } = [];
+        public List<NetworkElement> Elements { get; }
     }
 }

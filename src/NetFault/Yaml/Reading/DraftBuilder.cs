@@ -11,7 +11,9 @@ internal static class DraftBuilder
     public static void AddElements(GatheredFile gathered, ProblemList problems)
     {
         var table = gathered.Elements;
-        var fields = new ElementFields(problems, table.Fields);
+        var fields = new ElementFields(problems, table.Fields) { SameText = gathered.Draft.SameText };
+        for (var i = 0; i < AllSections.InOrder.Count; i++)
+            gathered.Draft.Expect(AllSections.InOrder[i].Name, table.CountOf(i));
         for (var i = 0; i < table.Count; i++)
         {
             var entry = table[i];

@@ -29,6 +29,9 @@ internal sealed class ElementFields
     /// <summary>The keys about which something has been reported, with dots; null where there is nothing.</summary>
     public HashSet<string>? Reported { get; private set; }
 
+    /// <summary>Gives one string for texts that many elements hold.</summary>
+    public Func<string, string> SameText { get; init; } = text => text;
+
     /// <summary>False where the text ends early: then nothing is missed.</summary>
     public bool IsComplete { get; set; } = true;
 

@@ -9,6 +9,7 @@ internal sealed class ElementTable
     private readonly List<ElementEntry> _entries;
     private readonly Dictionary<int, string> _unlikeIds = [];
     private readonly Dictionary<int, HashSet<string>> _mistyped = [];
+    private readonly int[] _counts = new int[AllSections.InOrder.Count];
     private readonly SourceText _source;
 
     /// <summary>The elements of each section by id, made when one is looked for.</summary>
@@ -26,6 +27,9 @@ internal sealed class ElementTable
 
     public int Count => _entries.Count;
 
+    /// <summary>How many elements a section has.</summary>
+    public int CountOf(int section) => _counts[section];
+
     public ElementEntry this[int element] => _entries[element];
 
     /// <summary>Adds an element whose fields have been added.</summary>
@@ -35,6 +39,7 @@ internal sealed class ElementTable
             _unlikeIds.Add(_entries.Count, id);
         if (mistyped is not null)
             _mistyped.Add(_entries.Count, mistyped);
+        _counts[entry.Section]++;
         _entries.Add(entry);
     }
 

@@ -145,7 +145,7 @@ internal sealed class FieldGroup : IFields
     {
         var text = Table.Text(index);
         if (Table[index].Kind == FieldKind.Quoted || (Table[index].Kind == FieldKind.Plain && text != "~"))
-            return text;
+            return _element.SameText(text);
         Report(index, key, WrongKind(index, "an id"));
         return string.Empty;
     }
