@@ -10,23 +10,33 @@ internal sealed class ConverterCurrents
 {
     private readonly StudyNetworks _networks;
     private readonly Lazy<double[]?> _initial;
-    private readonly Lazy<double[]?> _steadyMax;
-    private readonly Lazy<double[]?> _steadyMin;
+    private readonly Lazy<double[]?> _steady;
 
-    public ConverterCurrents(StudyNetworks networks)
+    public ConverterCurrents(StudyNetworks networks, ShortCircuitCase which)
     {
         _networks = networks;
-        _initial = new(() => Sum(Iec60909.Initial, source => source.SourceCurrentKa));
-        _steadyMax = new(() => Sum(Iec60909.WithoutMotors, source => source.SteadyStateKa?.Max ?? source.SourceCurrentKa));
-        _steadyMin = new(() => Sum(Iec60909.WithoutMotors, source => source.SteadyStateKa?.Min ?? source.SteadyStateKa?.Max ?? source.SourceCurrentKa));
+        var maximum = which == ShortCircuitCase.Maximum;
+        _initial = new(() => Sum(Iec60909.Initial, source => maximum ? source.SourceCurrentKa : Least(source)));
+        _steady = new(() => Sum(Iec60909.WithoutMotors, source => maximum ? source.SteadyStateKa?.Max ?? source.SourceCurrentKa : Least(source)));
     }
 
     /// <summary>Σ |Zkj|·IskPFj per unit at a node.</summary>
     public double Initial(int node) => _initial.Value?[node] ?? 0.0;
 
     /// <summary>Σ |Zkj|·IkPFj per unit at a node, in the network without motors.</summary>
-    public double SteadyState(int node, ShortCircuitCase which) =>
-        (which == ShortCircuitCase.Maximum ? _steadyMax : _steadyMin).Value?[node] ?? 0.0;
+    public double SteadyState(int node) => _steady.Value?[node] ?? 0.0;
+
+    /// <summary>Notes what is assumed of a source because it does not say it.</summary>
+    public static void Log(FullConverterSource source, ShortCircuitCase which, AssumptionLog? log)
+    {
+        if (which == ShortCircuitCase.Minimum && source.SteadyStateKa?.Min is null)
+            log?.Add(source, "steady_state_ka.min", "left out in the minimum case: no smallest current is given");
+        else if (which == ShortCircuitCase.Maximum && source.SteadyStateKa is null)
+            log?.Add(source, "steady_state_ka", "the source current is kept for the steady state");
+    }
+
+    /// <summary>In the minimum case only what is there at the least counts.</summary>
+    private static double Least(FullConverterSource source) => source.SteadyStateKa?.Min ?? 0.0;
 
     private double[]? Sum(NetworkVariant variant, Func<FullConverterSource, double> currentKa)
     {

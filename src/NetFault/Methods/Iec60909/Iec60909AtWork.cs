@@ -28,7 +28,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
         _machines = new(GatherMachines);
         Inside = new InsideUnits(networks, units, Sources, _graph);
         Partial = new PartialCurrents(this);
-        Converters = new ConverterCurrents(networks);
+        Converters = new ConverterCurrents(networks, method.Case);
     }
 
     /// <summary>The method's options.</summary>

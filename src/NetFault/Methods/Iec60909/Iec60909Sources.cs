@@ -78,6 +78,8 @@ internal sealed class Iec60909Sources
     /// <summary>What feeds only while others hold the voltage is left out of the minimum case (7.1.2).</summary>
     private Complex? Follower(NetworkElement element, Bus bus, AssumptionLog? log)
     {
+        if (element is FullConverterSource converter)
+            ConverterCurrents.Log(converter, _case, log);
         if (_case == ShortCircuitCase.Minimum)
             return null;
         return element switch

@@ -26,7 +26,7 @@ internal readonly record struct SteadyStateCurrent(double Ka, SteadyStateCurrent
     public static SteadyStateCurrent Of(Iec60909AtWork work, Iec60909Currents fault)
     {
         var current = fault.DrivingVoltagePu / fault.WithoutMotorsPu;
-        var converters = fault.Ka(work.Converters.SteadyState(fault.Node, work.Method.Case) / Complex.Abs(fault.WithoutMotorsPu));
+        var converters = fault.Ka(work.Converters.SteadyState(fault.Node) / Complex.Abs(fault.WithoutMotorsPu));
         var machines = work.MachinesAround(fault.Node);
         if (machines.Count == 0 || !work.IsRadial(fault.Node))
             return new(fault.Ka(Complex.Abs(current)) + converters, SteadyStateCurrentRule.WithoutMotors);
