@@ -1,0 +1,96 @@
+using CsCheck;
+using NetFault.Tests.Support;
+
+namespace NetFault.Tests.ByIec60909;
+
+/// <summary>Oracle: <see cref="IecOracle"/>, a second implementation of IEC 60909-0:2016 in ohm over dense inverses, on generated networks.</summary>
+public class GeneratedNetworkTests
+{
+    private static readonly double[] Delays = [0.02, 0.035, 0.05, 0.1, 0.18, 0.3];
+    private static readonly double[] DcTimes = [0, 0.01, 0.03, 0.07, 0.15];
+
+    [Theory]
+    [InlineData(ShortCircuitCase.Maximum)]
+    [InlineData(ShortCircuitCase.Minimum)]
+    public void Initial_peak_and_direct_currents_agree_with_dense_inverses_at_each_frequency(ShortCircuitCase which) =>
+        RandomNetworks.Cases(40).Sample((seed, buses) =>
+        {
+            var network = IecRandomNetworks.Make(seed, buses, equalRatios: seed % 2 == 0);
+            ForEachBus(network, which, (fault, oracle, way) =>
+            {
+                AssertClose(fault.InitialSymmetricalKa, oracle.InitialKa(fault.BusId), $"I\u2033k {way} {fault.BusId}");
+                AssertClose(fault.PeakKa, oracle.PeakKa(fault.BusId), $"ip {way} {fault.BusId}");
+                foreach (var t in DcTimes)
+                    AssertClose(fault.DcComponentKa(t), oracle.DcKa(fault.BusId, t), $"i_dc({t}) {way} {fault.BusId}");
+            });
+        }, iter: 60);
+
+    [Theory]
+    [InlineData(ShortCircuitCase.Maximum)]
+    [InlineData(ShortCircuitCase.Minimum)]
+    public void Breaking_currents_agree_with_all_machines_shares_by_superposition(ShortCircuitCase which) =>
+        RandomNetworks.Cases(40).Sample((seed, buses) =>
+        {
+            var network = IecRandomNetworks.Make(seed, buses, equalRatios: true);
+            ForEachBus(network, which, (fault, oracle, way) =>
+            {
+                var rule = !oracle.IsNearMachines(fault.BusId) ? BreakingCurrentRule.FarFromMachines
+                    : oracle.IsRadial(fault.BusId) ? BreakingCurrentRule.Radial : BreakingCurrentRule.Meshed;
+                fault.Iec60909!.BreakingCurrentRule.Should().Be(rule, $"{way} {fault.BusId}");
+                foreach (var t in Delays)
+                    AssertClose(fault.Iec60909!.BreakingKa(t), oracle.BreakingKa(fault.BusId, t), $"Ib({t}) {rule} {way} {fault.BusId}");
+            });
+        }, iter: 60);
+
+    [Fact]
+    public void Meshed_breaking_currents_agree_where_ratios_in_loops_differ() =>
+        RandomNetworks.Cases(40).Sample((seed, buses) =>
+        {
+            var network = IecRandomNetworks.Make(seed, buses, equalRatios: false);
+            ForEachBus(network, ShortCircuitCase.Maximum, (fault, oracle, way) =>
+            {
+                if (!oracle.IsRadial(fault.BusId))
+                    AssertClose(fault.Iec60909!.BreakingKa(0.1), oracle.MeshedBreakingKa(fault.BusId, 0.1), $"Ib {way} {fault.BusId}");
+            });
+        }, iter: 60);
+
+    [Fact]
+    public void Steady_state_currents_without_factors_are_the_initial_ones_without_motors() =>
+        RandomNetworks.Cases(40).Sample((seed, buses) =>
+            ForEachBus(IecRandomNetworks.Make(seed, buses, equalRatios: false), ShortCircuitCase.Maximum, (fault, oracle, way) =>
+                AssertClose(fault.SteadyStateKa!.Value, oracle.SteadyWithoutMotorsKa(fault.BusId), $"Ik {way} {fault.BusId}")), iter: 40);
+
+    [Fact]
+    public void Method_b_agrees_with_a_dense_inverse_at_rated_frequency() =>
+        RandomNetworks.Cases(30).Sample((seed, buses) =>
+        {
+            var network = IecRandomNetworks.Make(seed, buses, equalRatios: false);
+            var oracle = new IecOracle(network);
+            foreach (var fault in Energised(new FaultStudy(network, new Iec60909 { XOverRRule = XOverRRule.ComplexImpedance }).EveryBus()))
+            {
+                var kappa = oracle.KappaB(fault.BusId);
+                var limited = Math.Min(1.15 * kappa, fault.NominalKv > 1 ? 2.0 : 1.8);
+                var expected = Math.Abs(fault.Iec60909!.Kappa - kappa) < Math.Abs(fault.Iec60909.Kappa - limited) ? kappa : limited;
+                AssertClose(fault.Iec60909.Kappa, expected, fault.BusId);
+            }
+        }, iter: 40);
+
+    /// <summary>Results at every bus and at one bus come by different ways inside the library.</summary>
+    private static void ForEachBus(Network network, ShortCircuitCase which, Action<BusFault, IecOracle, string> check)
+    {
+        var method = new Iec60909 { Case = which };
+        var oracle = new IecOracle(network, which);
+        foreach (var fault in new FaultStudy(network, method).EveryBus())
+            fault.IsEnergised.Should().Be(oracle.IsEnergised(fault.BusId));
+        foreach (var fault in Energised(new FaultStudy(network, method).EveryBus()))
+            check(fault, oracle, "at every bus");
+        var study = new FaultStudy(network, method);
+        foreach (var bus in network.Buses.Where(bus => oracle.IsEnergised(bus.Id)))
+            check(study.At(bus.Id), oracle, "at one bus");
+    }
+
+    private static IEnumerable<BusFault> Energised(IEnumerable<BusFault> faults) => faults.Where(fault => fault.IsEnergised);
+
+    private static void AssertClose(double actual, double expected, string what) =>
+        actual.Should().BeApproximately(expected, 1e-9 * Math.Abs(expected), what);
+}
