@@ -100,8 +100,15 @@ internal sealed class IecDenseNetwork
         }
         foreach (var source in sources)
             y[place[source.Node], place[source.Node]] += 1 / At(source.Ohm, frequencyRatio);
-        var z = y.Inverse();
-        return (i, j) => z[place[i], place[j]];
+        var (z, scale) = ScaledInverse(y);
+        return (i, j) => z[place[i], place[j]] * scale[place[i]] * scale[place[j]];
+    }
+
+    /// <summary>The inverse of S·Y·S with a diagonal of magnitude 1: from 0.4 to 220 kV, siemens alone would cost six digits.</summary>
+    private static (Matrix<Complex> Inverse, double[] Scale) ScaledInverse(Matrix<Complex> y)
+    {
+        var scale = y.Diagonal().Select(one => 1 / Math.Sqrt(one.Magnitude)).ToArray();
+        return (Matrix<Complex>.Build.Dense(y.RowCount, y.ColumnCount, (i, j) => y[i, j] * scale[i] * scale[j]).Inverse(), scale);
     }
 
     /// <summary>What a set of nodes reaches over branches, never through the node without.</summary>

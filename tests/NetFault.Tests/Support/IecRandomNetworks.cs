@@ -13,12 +13,14 @@ internal sealed class IecRandomNetworks
     private readonly List<Bus> _buses = [];
     private readonly Dictionary<double, double> _ratedShare = [];
     private readonly bool _equalRatios;
+    private readonly bool _drives;
     private int _next;
 
-    private IecRandomNetworks(int seed, bool equalRatios)
+    private IecRandomNetworks(int seed, bool equalRatios, bool drives)
     {
         _random = new Random(seed);
         _equalRatios = equalRatios;
+        _drives = drives;
         _builder = new NetworkBuilder { FrequencyHz = _random.Next(2) == 0 ? 50 : 60, BaseMva = 1 + _random.Next(200) };
         foreach (var level in Levels)
             _ratedShare[level] = Between(0.95, 1.06);
@@ -28,7 +30,9 @@ internal sealed class IecRandomNetworks
     /// <param name="seed">The seed.</param>
     /// <param name="buses">Buses of the grid; units bring their own in addition.</param>
     /// <param name="equalRatios">Whether all transformers between two levels have the same ratio, so that loops carry no current of their own.</param>
-    public static Network Make(int seed, int buses, bool equalRatios) => new IecRandomNetworks(seed, equalRatios).Build(buses);
+    /// <param name="drives">Whether converter-fed drives may be among the sources.</param>
+    public static Network Make(int seed, int buses, bool equalRatios, bool drives = true) =>
+        new IecRandomNetworks(seed, equalRatios, drives).Build(buses);
 
     private Network Build(int count)
     {
@@ -105,11 +109,12 @@ internal sealed class IecRandomNetworks
     private void AddCompensatedLine(Bus one, Bus other, double ohm)
     {
         var between = AddBus(one.NominalKv, certain: true);
-        AddLine(one, between, ohm);
-        _builder.Add(new SeriesCapacitor
-        {
-            Id = Id("C"), From = between.Id, To = other.Id, ReactanceOhm = ohm * Between(1e-5, 1e-4), VoltageLimited = _random.Next(2) == 0,
-        });
+        _builder.Add(
+            new Line { Id = Id("L"), From = one.Id, To = between.Id, Ohm = new Impedance(ohm * Between(0.05, 0.2), ohm * Between(0.5, 1.5)) },
+            new SeriesCapacitor
+            {
+                Id = Id("C"), From = between.Id, To = other.Id, ReactanceOhm = ohm * Between(2e-4, 1e-3), VoltageLimited = _random.Next(2) == 0,
+            });
     }
 
     private Transformer AddTransformer(Bus hv, Bus lv, bool inService = false)
@@ -131,12 +136,13 @@ internal sealed class IecRandomNetworks
         var buses = new[] { Any(), Any(), Any() }.OrderByDescending(bus => bus.NominalKv).ToArray();
         if (buses.Select(bus => bus.NominalKv).Distinct().Count() < 3)
             return;
+        var mva = Between(10, 60);
         _builder.Add(new ThreeWindingTransformer
         {
             Id = Id("W"), Hv = buses[0].Id, Mv = buses[1].Id, Lv = _random.Next(4) == 0 ? null : buses[2].Id,
-            RatedMva = new WindingValues(Between(20, 60), Between(20, 60), Between(5, 20)),
+            RatedMva = new WindingValues(mva, mva, mva),
             RatedKv = new WindingValues(RatedKv(buses[0]), RatedKv(buses[1]), RatedKv(buses[2])),
-            ShortCircuitVoltagePercent = new WindingPairValues(Between(8, 14), Between(14, 20), Between(5, 9)),
+            ShortCircuitVoltagePercent = new WindingPairValues(Between(9, 12), Between(14, 18), Between(6, 9)),
             ResistivePercent = new WindingPairValues(Between(0.2, 0.6), Between(0.2, 0.6), Between(0.2, 0.6)), InService = InService(),
         });
     }
@@ -187,7 +193,7 @@ internal sealed class IecRandomNetworks
             case 0 or 1:
                 AddMachine(bus, null);
                 break;
-            case 2:
+            case 2 when _drives:
                 _builder.Add(new ConverterFedDrive { Id = Id("D"), Bus = bus.Id, RatedMva = Between(0.5, 8), InService = InService() });
                 break;
             case 3:
