@@ -42,6 +42,47 @@ public class GeneratedNetworkTests
             });
         }, iter: 60);
 
+    /// <summary>
+    /// Drives do not contribute to Ib (6.11). At one bus this is exact; at every bus a drive with less than 1/1000 of the voltage change may
+    /// be left in.
+    /// </summary>
+    [Fact]
+    public void Converter_fed_drives_are_taken_out_of_breaking_currents() =>
+        RandomNetworks.Cases(40).Sample((seed, buses) =>
+        {
+            var network = IecRandomNetworks.Make(seed, buses, equalRatios: true);
+            ForEachBus(network, ShortCircuitCase.Maximum, (fault, oracle, way) =>
+            {
+                var expected = oracle.BreakingKa(fault.BusId, 0.1);
+                if (way == "at one bus")
+                    AssertClose(fault.Iec60909!.BreakingKa(0.1), expected, fault.BusId);
+                else
+                    fault.Iec60909!.BreakingKa(0.1).Should().BeInRange(expected * (1 - 1e-9), expected * (1 + 1e-3), fault.BusId);
+            });
+        }, iter: 40);
+
+    [Theory]
+    [InlineData(ShortCircuitCase.Maximum)]
+    [InlineData(ShortCircuitCase.Minimum)]
+    public void Radial_steady_state_currents_are_the_sum_of_factors_times_rated_currents(ShortCircuitCase which) =>
+        RandomNetworks.Cases(20).Sample((seed, buses) =>
+        {
+            var network = IecRandomNetworks.Make(seed, buses, equalRatios: true, drives: false);
+            network = network.With(
+            [
+                .. network.SynchronousMachines.Select(one => one with { SteadyStateFactor = new MaxMin(2.5 + one.RatedMva / 100, 0.4) }),
+                .. network.AsynchronousMotors.Select(one => one with { InService = false }),
+                .. network.DoublyFedGenerators.Select(one => one with { InService = false }),
+            ]);
+            ForEachBus(network, which, (fault, oracle, way) =>
+            {
+                if (fault.Iec60909!.SteadyStateCurrentRule == SteadyStateCurrentRule.WithoutMotors)
+                    return;
+                var expected = oracle.RadialSteadyKa(fault.BusId, one => which == ShortCircuitCase.Maximum ? 2.5 + one.RatedMva / 100 : 0.4);
+                AssertClose(fault.SteadyStateKa!.Value, expected, $"Ik {way} {fault.BusId}");
+            });
+        }, iter: 60);
+
     [Fact]
     public void Meshed_breaking_currents_agree_where_ratios_in_loops_differ() =>
         RandomNetworks.Cases(40).Sample((seed, buses) =>

@@ -18,7 +18,6 @@ internal sealed class IecOracle
         _network = network;
         _elements = new IecElements(network, which);
         _dense = new IecDenseNetwork(network, _elements, which);
-        _max = which == ShortCircuitCase.Minimum ? new IecOracle(network) : null;
     }
 
     public bool IsEnergised(string bus) => _dense.Live.Contains(_dense.Node(bus));
@@ -48,8 +47,7 @@ internal sealed class IecOracle
         Shares(bus).Any(one => one.Source.Element is ConverterFedDrive || one.Current.Magnitude / _elements.RatedKa(one.Source.Element) > 2);
 
     /// <summary>No part that is left when the node is taken out holds more than one source.</summary>
-    public bool IsRadial(string bus) => Environment.GetEnvironmentVariable("ALLSRC") == "1" && _max is not null ? _max.IsRadial(bus) : Parts(bus, new IecVariant()).All(part => part.Sources.Count <= 1);
-    private readonly IecOracle? _max;
+    public bool IsRadial(string bus) => Parts(bus, new IecVariant()).All(part => part.Sources.Count <= 1);
 
     /// <summary>11.2.2: each machine λ·IrG as far as the fault, feeders their initial current.</summary>
     public double RadialSteadyKa(string bus, Func<SynchronousMachine, double> lambda)
