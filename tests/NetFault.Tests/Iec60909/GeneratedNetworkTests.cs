@@ -116,6 +116,39 @@ public class GeneratedNetworkTests
             }
         }, iter: 40);
 
+    /// <summary>Large enough that most machines' shares at most buses are pruned away.</summary>
+    [Fact]
+    public void Breaking_currents_of_a_network_of_150_buses_agree_at_every_bus()
+    {
+        var network = IecRandomNetworks.Make(20263, 150, equalRatios: true, drives: false);
+        var oracle = new IecOracle(network);
+        foreach (var fault in Energised(new FaultStudy(network, new Iec60909()).EveryBus()))
+            AssertClose(fault.Iec60909!.BreakingKa(0.1), oracle.BreakingKa(fault.BusId, 0.1), fault.BusId);
+    }
+
+    /// <summary>Results at every bus take only the large shares, those at one bus take all.</summary>
+    [Fact]
+    public void Breaking_currents_of_a_grid_of_1200_buses_are_the_same_at_every_bus_and_at_one()
+    {
+        var grid = Grids.Meshed(24, 50);
+        var builder = grid.ToBuilder().Set([.. grid.SynchronousMachines.Select(one => one with { RatedPowerFactor = 0.85 })]);
+        for (var i = 3; i < 1200; i += 10)
+        {
+            builder.Add(
+                new Bus { Id = $"M{i}", NominalKv = 10 },
+                new Transformer
+                {
+                    Id = $"T{i}", Hv = $"B{i}", Lv = $"M{i}", RatedMva = 25, RatedHvKv = 110, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 11,
+                    ResistivePercent = 0.6,
+                },
+                IecCases.Motor($"M{i}") with { Count = 5 });
+        }
+        var network = builder.Build();
+        var study = new FaultStudy(network, new Iec60909());
+        foreach (var fault in new FaultStudy(network, new Iec60909()).EveryBus())
+            AssertClose(fault.Iec60909!.BreakingKa(0.1), study.At(fault.BusId).Iec60909!.BreakingKa(0.1), fault.BusId);
+    }
+
     /// <summary>Results at every bus and at one bus come by different ways inside the library.</summary>
     private static void ForEachBus(Network network, ShortCircuitCase which, Action<BusFault, IecOracle, string> check)
     {

@@ -23,6 +23,8 @@ internal sealed class IecDenseNetwork
     private readonly bool _maximum;
     private readonly Dictionary<string, int> _node = [];
     private readonly Dictionary<string, int> _star = [];
+    private readonly Dictionary<string, List<IecBranch>> _branches = [];
+    private readonly Dictionary<IecVariant, List<IecSource>> _sources = [];
 
     public IecDenseNetwork(Network network, IecElements elements, ShortCircuitCase which)
     {
@@ -45,7 +47,14 @@ internal sealed class IecDenseNetwork
 
     public int Node(string bus) => _node[bus];
 
-    public List<IecBranch> Branches(IecVariant variant)
+    public List<IecBranch> Branches(IecVariant variant) => _branches.TryGetValue(variant.InsideMachine ?? "", out var known)
+        ? known
+        : _branches[variant.InsideMachine ?? ""] = MakeBranches(variant);
+
+    public List<IecSource> Sources(IecVariant variant) =>
+        _sources.TryGetValue(variant, out var known) ? known : _sources[variant] = MakeSources(variant);
+
+    private List<IecBranch> MakeBranches(IecVariant variant)
     {
         var list = new List<IecBranch>();
         list.AddRange(_network.Lines.Where(one => Active(one, one.From, one.To))
@@ -60,7 +69,7 @@ internal sealed class IecDenseNetwork
         return list;
     }
 
-    public List<IecSource> Sources(IecVariant variant)
+    private List<IecSource> MakeSources(IecVariant variant)
     {
         var followers = variant.Motors && _maximum;
         var list = new List<IecSource>();

@@ -12,6 +12,7 @@ internal sealed class IecOracle
     private readonly IecElements _elements;
     private readonly IecDenseNetwork _dense;
     private readonly Dictionary<IecVariant, Func<int, int, Complex>> _solved = [];
+    private readonly Dictionary<string, string?> _inside = [];
 
     public IecOracle(Network network, ShortCircuitCase which = ShortCircuitCase.Maximum)
     {
@@ -86,7 +87,8 @@ internal sealed class IecOracle
         var variant = new IecVariant(InsideMachine: Inside(bus));
         var z = Solve(variant);
         var k = _dense.Node(bus);
-        return _dense.Sources(variant).Where(one => _dense.Live.Contains(one.Node) && _elements.RatedKa(one.Element).HasValue && SameIsland(k, one.Node))
+        var island = IecDenseNetwork.Flood([k], _dense.Branches(variant), -1);
+        return _dense.Sources(variant).Where(one => island.Contains(one.Node) && _elements.RatedKa(one.Element).HasValue)
             .Select(one => (one, DrivingKv(bus) / z(k, k) * z(one.Node, k) / one.Ohm));
     }
 
@@ -168,7 +170,9 @@ internal sealed class IecOracle
     /// 7.2.2 and 7.2.3: the machine of the unit inside which a bus lies. Auxiliary buses count where the terminals are their only way to a
     /// source.
     /// </summary>
-    private string? Inside(string bus)
+    private string? Inside(string bus) => _inside.TryGetValue(bus, out var known) ? known : _inside[bus] = FindInside(bus);
+
+    private string? FindInside(string bus)
     {
         var variant = new IecVariant();
         var branches = _dense.Branches(variant);
@@ -184,7 +188,4 @@ internal sealed class IecOracle
         }
         return null;
     }
-
-    private bool SameIsland(int one, int other) =>
-        IecDenseNetwork.Flood([one], _dense.Branches(new IecVariant()), -1).Contains(other);
 }
