@@ -16,21 +16,24 @@ internal sealed class RadialNodes
     private readonly bool[] _radial;
     private int _count;
 
-    private RadialNodes(Circuit circuit, CircuitGraph graph)
+    private RadialNodes(Circuit circuit, CircuitGraph graph, Func<CircuitSource, bool> counts)
     {
         var n = circuit.NodeCount;
         _graph = graph;
         _sourcesAt = new int[n];
         foreach (var source in circuit.Sources)
-            _sourcesAt[source.Node]++;
+            _sourcesAt[source.Node] += counts(source) ? 1 : 0;
         (_order, _low, _parentBranch, _beneath, _cutOff) = (new int[n], new int[n], new int[n], new int[n], new int[n]);
         _radial = new bool[n];
     }
 
     /// <summary>For each node, whether it is fed radially.</summary>
-    public static bool[] Of(Circuit circuit, CircuitGraph graph)
+    /// <param name="circuit">The circuit.</param>
+    /// <param name="graph">Its graph.</param>
+    /// <param name="counts">Which sources are there.</param>
+    public static bool[] Of(Circuit circuit, CircuitGraph graph, Func<CircuitSource, bool> counts)
     {
-        var nodes = new RadialNodes(circuit, graph);
+        var nodes = new RadialNodes(circuit, graph, counts);
         for (var root = 0; root < circuit.NodeCount; root++)
         {
             if (nodes._order[root] == 0)

@@ -35,7 +35,7 @@ internal sealed class BreakingCurrent
     /// <summary>The rule.</summary>
     public BreakingCurrentRule Rule => _shares.Count == 0
         ? BreakingCurrentRule.FarFromMachines
-        : _work.IsRadial(_fault.Node) ? BreakingCurrentRule.Radial : BreakingCurrentRule.Meshed;
+        : _work.IsRadial(_fault.Node, withMotors: !_fault.MotorsLeftOut) ? BreakingCurrentRule.Radial : BreakingCurrentRule.Meshed;
 
     public static BreakingCurrent Of(Iec60909AtWork work, Iec60909Currents fault) => new(work, fault);
 

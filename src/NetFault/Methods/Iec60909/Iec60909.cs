@@ -24,12 +24,18 @@ public sealed record Iec60909 : FaultMethod
     };
 
     private readonly XOverRRule _xOverRRule = XOverRRule.EquivalentFrequency;
+    private readonly ShortCircuitCase _case;
 
     /// <inheritdoc/>
     public override string Name => Case == ShortCircuitCase.Maximum ? "IEC 60909-0:2016, maximum" : "IEC 60909-0:2016, minimum";
 
     /// <summary>Maximum (default) or minimum short-circuit currents.</summary>
-    public ShortCircuitCase Case { get; init; }
+    /// <exception cref="ArgumentOutOfRangeException">None of the two.</exception>
+    public ShortCircuitCase Case
+    {
+        get => _case;
+        init => _case = Guard.OneOf(value, ShortCircuitCase.Maximum, ShortCircuitCase.Minimum);
+    }
 
     /// <summary>
     /// How R/X for the factor κ of the peak is found (8.1.2): <see cref="XOverRRule.SmallestRatio"/> is the standard's method (a),

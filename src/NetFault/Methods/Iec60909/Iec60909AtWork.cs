@@ -8,6 +8,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     private readonly Lazy<CircuitGraph> _graph;
     private readonly Lazy<double[]> _levels;
     private readonly Lazy<bool[]> _radial;
+    private readonly Lazy<bool[]> _radialWithoutMotors;
     private readonly Lazy<SmallestRatios> _smallest;
     private readonly Lazy<SmallMotors> _motors;
     private readonly Lazy<int[]> _islands;
@@ -21,7 +22,8 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
         Sources = new Iec60909Sources(Circuit.Network, units, method.Case);
         _graph = new(() => new CircuitGraph(Circuit));
         _levels = new(() => _graph.Value.Levels());
-        _radial = new(() => RadialNodes.Of(Circuit, _graph.Value));
+        _radial = new(() => RadialNodes.Of(Circuit, _graph.Value, source => Feeds(source, Iec60909.Initial)));
+        _radialWithoutMotors = new(() => RadialNodes.Of(Circuit, _graph.Value, source => Feeds(source, Iec60909.WithoutMotors)));
         _smallest = new(() => new SmallestRatios(Circuit, Sources));
         _motors = new(() => new SmallMotors(Circuit));
         _islands = new(() => Islands.OfNodes(Circuit));
@@ -62,7 +64,10 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
         new Iec60909Currents(this, context, context.Network.Buses[bus], seen);
 
     /// <summary>Whether each source feeds a node by a way of its own.</summary>
-    public bool IsRadial(int node) => _radial.Value[node];
+    public bool IsRadial(int node, bool withMotors) => (withMotors ? _radial : _radialWithoutMotors).Value[node];
+
+    private bool Feeds(CircuitSource source, NetworkVariant variant) =>
+        Circuit.Network.Elements[source.Element] is FullConverterSource || Sources.Impedance(source.Element, variant, log: null).HasValue;
 
     /// <summary>The synchronous machines in a node's connected part.</summary>
     public List<SynchronousMachine> MachinesAround(int node) =>

@@ -61,8 +61,9 @@ internal sealed class Iec60909Currents : FaultCurrents
     public override double? SteadyStateKa => SteadyState.Ka;
 
     public override ReactanceRatio Ratio => _work.Method.PeakNetwork is { } network
-        ? EquivalentFrequency.Ratio(_work.Corrected(network, Node, _seen[2]), network.FrequencyRatio)
-        : _work.Smallest.At(Node);
+        ? EquivalentFrequency.Ratio(
+            MotorsLeftOut ? _work.Seen(WithoutMotors(network), _seen) : _work.Corrected(network, Node, _seen[2]), network.FrequencyRatio)
+        : _work.Smallest.At(Node, withMotors: !MotorsLeftOut);
 
     public override AcComponentRule AcComponentRule => AcComponentRule.BreakingCurrent;
 
@@ -78,7 +79,7 @@ internal sealed class Iec60909Currents : FaultCurrents
         get
         {
             var kappa = PeakFactorKappa.Of(Ratio);
-            return _work.Method.XOverRRule == XOverRRule.ComplexImpedance && !_work.Smallest.AllBelow(Node, 0.3)
+            return _work.Method.XOverRRule == XOverRRule.ComplexImpedance && !_work.Smallest.AllBelow(Node, 0.3, withMotors: !MotorsLeftOut)
                 ? PeakFactorKappa.WithMargin(kappa, VoltageFactor.IsLowVoltage(Bus))
                 : kappa;
         }
@@ -91,7 +92,7 @@ internal sealed class Iec60909Currents : FaultCurrents
     {
         var frequencyRatio = EquivalentFrequency.OfDcComponent(seconds * _context.Network.FrequencyHz);
         var variant = Iec60909.DcNetwork(frequencyRatio);
-        var ratio = EquivalentFrequency.Ratio(_work.Seen(variant, _seen), frequencyRatio);
+        var ratio = EquivalentFrequency.Ratio(_work.Seen(MotorsLeftOut ? WithoutMotors(variant) : variant, _seen), frequencyRatio);
         return DcComponent.Ka(ImpedancePartKa, ratio, _context.Omega * seconds);
     }
 
@@ -100,6 +101,8 @@ internal sealed class Iec60909Currents : FaultCurrents
 
     /// <summary>Ib with the rule it comes by.</summary>
     public BreakingCurrent Breaking => BreakingCurrent.Of(_work, this);
+
+    private static NetworkVariant WithoutMotors(NetworkVariant variant) => variant with { Instant = FaultInstant.SteadyState };
 
     /// <summary>A per-unit current at this bus in kA.</summary>
     public double Ka(double perUnit) => perUnit * _context.BaseKa(Bus);

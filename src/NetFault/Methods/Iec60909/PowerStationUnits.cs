@@ -21,10 +21,10 @@ internal sealed class PowerStationUnits
     {
         foreach (var machine in network.SynchronousMachines)
         {
-            if (machine.UnitTransformer is not { } id || !machine.InService)
+            if (machine.UnitTransformer is not { } id || !IsInService(network, machine))
                 continue;
             var transformer = network.Find<Transformer>(id);
-            if (!transformer.InService)
+            if (!IsInService(network, transformer))
                 continue;
             if (_byTransformer.TryGetValue(id, out var other))
                 throw MethodDataException.SharedUnitTransformer(network, machine, other.Machine);
@@ -42,6 +42,9 @@ internal sealed class PowerStationUnits
 
     /// <summary>The unit of a machine, or null where it is connected directly.</summary>
     public PowerStationUnit? Of(SynchronousMachine machine) => _byMachine.TryGetValue(machine.Id, out var unit) ? unit : null;
+
+    private static bool IsInService(Network network, NetworkElement element) =>
+        element.InService && element.Terminals.All(bus => network.Find<Bus>(bus!).InService);
 
     private static PowerStationUnit Of(Network network, SynchronousMachine machine, Transformer transformer, ShortCircuitCase which)
     {

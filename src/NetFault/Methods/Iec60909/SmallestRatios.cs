@@ -5,34 +5,41 @@ namespace NetFault;
 /// <summary>The R/X of the branches and sources in each connected part of a circuit, machines with R_Gf (IEC 60909-0:2016, 8.1.2, method (a)).</summary>
 internal sealed class SmallestRatios
 {
-    private readonly Dictionary<int, (double Smallest, double Largest)> _byIsland = [];
+    private readonly Dictionary<int, (double Smallest, double Largest)> _withMotors = [];
+    private readonly Dictionary<int, (double Smallest, double Largest)> _withoutMotors = [];
     private readonly int[] _islandOfNode;
 
     public SmallestRatios(Circuit circuit, Iec60909Sources sources)
     {
         _islandOfNode = Islands.OfNodes(circuit);
         for (var i = 0; i < circuit.Branches.Length; i++)
-            Add(circuit.Branches[i].From, circuit.BranchImpedances[i]);
+        {
+            Add(_withMotors, circuit.Branches[i].From, circuit.BranchImpedances[i]);
+            Add(_withoutMotors, circuit.Branches[i].From, circuit.BranchImpedances[i]);
+        }
         foreach (var source in circuit.Sources)
         {
-            if (sources.Impedance(source.Element, Iec60909.PeakAtRatedFrequency, log: null) is { } z)
-                Add(source.Node, z);
+            Add(_withMotors, source.Node, sources.Impedance(source.Element, Iec60909.PeakAtRatedFrequency, log: null));
+            Add(_withoutMotors, source.Node, sources.Impedance(
+                source.Element, Iec60909.PeakAtRatedFrequency with { Instant = FaultInstant.SteadyState }, log: null));
         }
     }
 
     /// <summary>The smallest R/X in a node's part as X/R.</summary>
-    public ReactanceRatio At(int node) => ReactanceRatio.Of(_byIsland[_islandOfNode[node]].Smallest, 1.0);
+    public ReactanceRatio At(int node, bool withMotors) =>
+        ReactanceRatio.Of((withMotors ? _withMotors : _withoutMotors)[_islandOfNode[node]].Smallest, 1.0);
 
     /// <summary>Whether every branch and source in a node's part has R/X below a limit.</summary>
-    public bool AllBelow(int node, double limit) => _byIsland[_islandOfNode[node]].Largest < limit;
+    public bool AllBelow(int node, double limit, bool withMotors) =>
+        (withMotors ? _withMotors : _withoutMotors)[_islandOfNode[node]].Largest < limit;
 
     /// <summary>Legs and capacitors without positive reactance are no branches that a ratio could be read from.</summary>
-    private void Add(int node, Complex z)
+    private void Add(Dictionary<int, (double Smallest, double Largest)> ratios, int node, Complex? impedance)
     {
-        if (z.Imaginary <= 0.0)
+        if (impedance is not { Imaginary: > 0.0 } z)
             return;
         var ratio = z.Real / z.Imaginary;
-        _byIsland[_islandOfNode[node]] = _byIsland.TryGetValue(_islandOfNode[node], out var known)
+        ratios[_islandOfNode[node]] = ratios.TryGetValue(_islandOfNode[node], out var known)
             ? (Math.Min(known.Smallest, ratio), Math.Max(known.Largest, ratio))
             : (ratio, ratio);
     }

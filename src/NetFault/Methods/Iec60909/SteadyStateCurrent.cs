@@ -28,11 +28,11 @@ internal readonly record struct SteadyStateCurrent(double Ka, SteadyStateCurrent
         var current = fault.DrivingVoltagePu / fault.WithoutMotorsPu;
         var converters = fault.Ka(work.Converters.SteadyState(fault.Node) / Complex.Abs(fault.WithoutMotorsPu));
         var machines = work.MachinesAround(fault.Node);
-        if (machines.Count == 0 || !work.IsRadial(fault.Node))
+        if (machines.Count == 0 || !work.IsRadial(fault.Node, withMotors: false))
             return new(fault.Ka(Complex.Abs(current)) + converters, SteadyStateCurrentRule.WithoutMotors);
-        if (!machines.Exists(one => one.SteadyStateFactor.HasValue))
+        if (!machines.Exists(one => Factor(one, work.Method.Case).HasValue))
             return new(fault.Ka(Complex.Abs(current)) + converters, SteadyStateCurrentRule.RadialFactorMissing);
-        return new(fault.Ka(ByFactors(work, fault, current)) + converters, machines.TrueForAll(one => one.SteadyStateFactor.HasValue)
+        return new(fault.Ka(ByFactors(work, fault, current)) + converters, machines.TrueForAll(one => Factor(one, work.Method.Case).HasValue)
             ? SteadyStateCurrentRule.RadialByFactor
             : SteadyStateCurrentRule.RadialFactorMissing);
     }
@@ -44,12 +44,17 @@ internal readonly record struct SteadyStateCurrent(double Ka, SteadyStateCurrent
         foreach (var share in work.Partial.WithoutMotors(fault))
         {
             var source = work.Circuit.Sources[share.Source];
-            if (work.Circuit.Network.Elements[source.Element] is not SynchronousMachine { SteadyStateFactor: { } factor })
+            var machine = (SynchronousMachine)work.Circuit.Network.Elements[source.Element];
+            if (share.Current == Complex.Zero || Factor(machine, work.Method.Case) is not { } factor)
                 continue;
             var transfer = work.Transfer(source.Node, fault.Node);
             current -= transfer * share.Current;
-            steady += (work.Method.Case == ShortCircuitCase.Maximum ? factor.Max : factor.Min ?? factor.Max) * share.Rated * transfer;
+            steady += factor * share.Rated * transfer;
         }
         return Complex.Abs(current) + steady;
     }
+
+    /// <summary>λ of the case; a machine that gives no λmin has none in the minimum case.</summary>
+    private static double? Factor(SynchronousMachine machine, ShortCircuitCase which) =>
+        which == ShortCircuitCase.Maximum ? machine.SteadyStateFactor?.Max : machine.SteadyStateFactor?.Min;
 }

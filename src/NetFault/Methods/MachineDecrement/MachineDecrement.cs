@@ -17,6 +17,7 @@ public sealed record MachineDecrement : FaultMethod
 
     private readonly double _prefaultVoltagePu = 1.0;
     private readonly XOverRRule _xOverRRule;
+    private readonly FaultInstants _instants = FaultInstants.All;
 
     /// <inheritdoc/>
     public override string Name => "Machine decrement";
@@ -30,7 +31,14 @@ public sealed record MachineDecrement : FaultMethod
     }
 
     /// <summary>The instants to calculate; each costs one factorisation. Default all three.</summary>
-    public FaultInstants Instants { get; init; } = FaultInstants.All;
+    /// <exception cref="ArgumentOutOfRangeException">Not a combination of instants.</exception>
+    public FaultInstants Instants
+    {
+        get => _instants;
+        init => _instants = Guard.OneOf(
+            value, FaultInstants.InitialOnly, FaultInstants.Transient, FaultInstants.SteadyState, FaultInstants.All);
+    }
+
 
     /// <summary>
     /// The rule by which X/R at the fault is found: <see cref="XOverRRule.ComplexImpedance"/>, the default, or
