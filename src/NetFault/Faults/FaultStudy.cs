@@ -16,6 +16,7 @@ public sealed class FaultStudy
     private readonly StudyNetworks _networks;
     private readonly StudyAssumptions _assumptions;
     private readonly StudyContext _context;
+    private readonly Lazy<IReadOnlyList<StudyNode>> _nodes;
 
     /// <summary>Prepares a study: builds the circuit, orders and factors its admittance matrix.</summary>
     /// <param name="network">The network.</param>
@@ -29,6 +30,7 @@ public sealed class FaultStudy
         _networks = new StudyNetworks(network, method);
         _assumptions = new StudyAssumptions(network, method);
         _context = new StudyContext(network, method, _networks, _assumptions);
+        _nodes = new(() => StudyNode.Of(_networks.Circuit));
         _ = _networks.At(FaultInstant.Initial);
     }
 
@@ -45,7 +47,7 @@ public sealed class FaultStudy
     /// The nodes of the circuit: the energised buses, those joined by closed couplers together. Rows and columns of
     /// <see cref="BusImpedanceMatrix"/> and <see cref="AdmittanceMatrix"/> are in this order.
     /// </summary>
-    public IReadOnlyList<StudyNode> Nodes => StudyNode.Of(_networks.Circuit);
+    public IReadOnlyList<StudyNode> Nodes => _nodes.Value;
 
     /// <summary>
     /// The short-circuit currents at every bus, in the order of the network's buses. De-energised buses are in it, with zero current.

@@ -39,7 +39,6 @@ public sealed record MachineDecrement : FaultMethod
             value, FaultInstants.InitialOnly, FaultInstants.Transient, FaultInstants.SteadyState, FaultInstants.All);
     }
 
-
     /// <summary>
     /// The rule by which X/R at the fault is found: <see cref="XOverRRule.ComplexImpedance"/>, the default, or
     /// <see cref="XOverRRule.SeparateNetworks"/>.
