@@ -145,10 +145,11 @@ internal sealed class IecOracle
         return parts;
     }
 
+    /// <summary>R/X at rated frequency; 0, no decay, where series capacitors make the network capacitive at the equivalent frequency.</summary>
     private double ROverX(string bus, double frequencyRatio, bool fictitious)
     {
         var z = Impedance(bus, new IecVariant(frequencyRatio, fictitious));
-        return z.Real / z.Imaginary * frequencyRatio;
+        return z.Imaginary > 0 ? z.Real / z.Imaginary * frequencyRatio : 0;
     }
 
     private Complex Impedance(string bus, IecVariant variant) =>

@@ -105,7 +105,7 @@ internal sealed class IecRandomNetworks
         OhmPerKm = new Impedance(ohm * Between(0.05, 1), ohm * Between(0.2, 1.5)), EndTemperatureC = _random.Next(2) == 0 ? null : Between(60, 250),
     });
 
-    /// <summary>The capacitor is small enough to leave the network inductive at the lowest equivalent frequency.</summary>
+    /// <summary>The capacitor is small enough to leave most buses inductive at the lowest equivalent frequency.</summary>
     private void AddCompensatedLine(Bus one, Bus other, double ohm)
     {
         var between = AddBus(one.NominalKv, certain: true);
