@@ -28,8 +28,15 @@ internal sealed class IecOracle
     /// <summary>8.1.2, method (c): the network at 20 Hz (24 Hz), machines with R_Gf.</summary>
     public double KappaC(string bus) => IecFormulas.Kappa(ROverX(bus, 0.4, fictitious: true));
 
-    /// <summary>8.1.2, method (b) before its factor 1.15.</summary>
-    public double KappaB(string bus) => IecFormulas.Kappa(ROverX(bus, 1, fictitious: true));
+    /// <summary>8.1.2, method (a): the smallest R/X of the branches and sources that are connected with the bus.</summary>
+    public double KappaA(string bus) => IecFormulas.Kappa(BranchRatios(bus).Min());
+
+    /// <summary>8.1.2, method (b): 1.15·κ up to 1.8 or 2.0; κ alone where all branches have R/X below 0.3.</summary>
+    public double KappaB(string bus)
+    {
+        var kappa = IecFormulas.Kappa(ROverX(bus, 1, fictitious: true));
+        return BranchRatios(bus).Max() < 0.3 ? kappa : Math.Min(1.15 * kappa, _elements.Kv(bus) > 1 ? 2.0 : 1.8);
+    }
 
     public double PeakKa(string bus) => KappaC(bus) * Math.Sqrt(2) * InitialKa(bus);
 
@@ -143,6 +150,16 @@ internal sealed class IecOracle
             parts.Add((nodes, sources.Where(one => nodes.Contains(one.Node)).ToList()));
         }
         return parts;
+    }
+
+    /// <summary>R/X of what is connected with a bus; star legs may have negative parts: without reactance they give none, without resistance 0.</summary>
+    private List<double> BranchRatios(string bus)
+    {
+        var variant = new IecVariant(Fictitious: true);
+        var island = IecDenseNetwork.Flood([_dense.Node(bus)], _dense.Branches(variant), -1);
+        return _dense.Branches(variant).Where(one => island.Contains(one.From)).Select(one => one.Ohm)
+            .Concat(_dense.Sources(variant).Where(one => island.Contains(one.Node)).Select(one => one.Ohm))
+            .Where(ohm => ohm.Imaginary > 0).Select(ohm => Math.Max(0, ohm.Real / ohm.Imaginary)).ToList();
     }
 
     /// <summary>R/X at rated frequency; 0, no decay, where series capacitors make the network capacitive at the equivalent frequency.</summary>
