@@ -3,7 +3,9 @@ using NetFault.Tests.Support;
 
 namespace NetFault.Tests.ByIec60909;
 
-/// <summary>Oracle: <see cref="IecOracle"/>, a second implementation of IEC 60909-0:2016 in ohm over dense inverses, on generated networks.</summary>
+/// <summary>
+/// Oracle: <see cref="IecOracle"/>, a second implementation of IEC 60909-0:2016 in ohm over dense inverses, on generated networks.
+/// </summary>
 public class GeneratedNetworkTests
 {
     private static readonly double[] Delays = [0.02, 0.035, 0.05, 0.1, 0.18, 0.3];
@@ -43,8 +45,8 @@ public class GeneratedNetworkTests
         }, iter: 60);
 
     /// <summary>
-    /// Drives do not contribute to Ib (6.11). At one bus this is exact; at every bus a drive with less than 1/1000 of the voltage change may
-    /// be left in.
+    /// Drives do not contribute to Ib (6.11). At one bus this is exact; at every bus a drive with less than 1/1000 of the voltage change
+    /// may be left in.
     /// </summary>
     [Fact]
     public void Converter_fed_drives_are_taken_out_of_breaking_currents() =>
@@ -78,7 +80,8 @@ public class GeneratedNetworkTests
             {
                 if (fault.Iec60909!.SteadyStateCurrentRule == SteadyStateCurrentRule.WithoutMotors)
                     return;
-                var expected = oracle.RadialSteadyKa(fault.BusId, one => which == ShortCircuitCase.Maximum ? 2.5 + one.RatedMva / 100 : 0.4);
+                var expected = oracle.RadialSteadyKa(
+                    fault.BusId, one => which == ShortCircuitCase.Maximum ? 2.5 + one.RatedMva / 100 : 0.4);
                 AssertClose(fault.SteadyStateKa!.Value, expected, $"Ik {way} {fault.BusId}");
             });
         }, iter: 60);
@@ -154,7 +157,8 @@ public class GeneratedNetworkTests
                 new Bus { Id = $"M{i}", NominalKv = 10 },
                 new Transformer
                 {
-                    Id = $"T{i}", Hv = $"B{i}", Lv = $"M{i}", RatedMva = 25, RatedHvKv = 110, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 11,
+                    Id = $"T{i}", Hv = $"B{i}", Lv = $"M{i}", RatedMva = 25, RatedHvKv = 110, RatedLvKv = 10.5,
+                    ShortCircuitVoltagePercent = 11,
                     ResistivePercent = 0.6,
                 },
                 IecCases.Motor($"M{i}") with { Count = 5 });

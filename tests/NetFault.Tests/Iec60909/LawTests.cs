@@ -15,7 +15,7 @@ public class LawTests
             foreach (var rule in new[] { XOverRRule.SmallestRatio, XOverRRule.ComplexImpedance, XOverRRule.EquivalentFrequency })
             {
                 foreach (var fault in Energised(network, new Iec60909 { XOverRRule = rule }))
-                    fault.PeakKa.Should().BeInRange(1.02 * Math.Sqrt(2) * fault.InitialSymmetricalKa, 2 * Math.Sqrt(2) * fault.InitialSymmetricalKa);
+                    (fault.PeakKa / Math.Sqrt(2) / fault.InitialSymmetricalKa).Should().BeInRange(1.02, 2);
             }
         }, iter: 40);
 
@@ -26,7 +26,8 @@ public class LawTests
             foreach (var fault in Energised(IecRandomNetworks.Make(seed, buses, equalRatios: true), new Iec60909()))
             {
                 foreach (var delay in new[] { 0.02, 0.05, 0.1, 0.25 })
-                    fault.Iec60909!.BreakingKa(delay).Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12), $"{fault.BusId} {delay} s");
+                    fault.Iec60909!.BreakingKa(delay).Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12),
+                        $"{fault.BusId} {delay} s");
             }
         }, iter: 40);
 
@@ -57,11 +58,13 @@ public class LawTests
             network = network.With(
             [
                 .. network.SeriesCapacitors.Select(one => one with { VoltageLimited = true }),
-                .. network.NetworkFeeders.Select(one => one with { ShortCircuitMva = Weaker(one.ShortCircuitMva), ShortCircuitKa = Weaker(one.ShortCircuitKa) }),
+                .. network.NetworkFeeders.Select(one =>
+                    one with { ShortCircuitMva = Weaker(one.ShortCircuitMva), ShortCircuitKa = Weaker(one.ShortCircuitKa) }),
             ]);
             var minimum = Energised(network, new Iec60909 { Case = ShortCircuitCase.Minimum }).ToDictionary(fault => fault.BusId);
             foreach (var fault in Energised(network, new Iec60909()))
-                minimum[fault.BusId].InitialSymmetricalKa.Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12), fault.BusId);
+                minimum[fault.BusId].InitialSymmetricalKa.Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12),
+                    fault.BusId);
         }, iter: 40);
 
     [Fact]

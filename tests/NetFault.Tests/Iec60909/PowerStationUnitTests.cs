@@ -118,7 +118,8 @@ public class PowerStationUnitTests
     public void A_machine_cut_off_from_its_unit_transformer_has_K_G(bool byItsBus)
     {
         var unit = Unit(onLoad: true);
-        var cutOff = byItsBus ? unit.With(Bus("H", 110) with { InService = false }) : unit.With(unit.Transformers[0] with { InService = false });
+        var cutOff = byItsBus ? unit.With(Bus("H", 110) with { InService = false })
+            : unit.With(unit.Transformers[0] with { InService = false });
         ShouldBeClose(cutOff.At("G").ImpedanceOhm!.Value, 1.1 / (1 + Xd * SinPhi) * ZgRated);
     }
 
@@ -156,7 +157,8 @@ public class PowerStationUnitTests
         Bus("A", 6),
         new Transformer
         {
-            Id = "TA", Hv = "G", Lv = "A", RatedMva = 12, RatedHvKv = 21, RatedLvKv = 6.3, ShortCircuitVoltagePercent = 7, ResistivePercent = 0.5,
+            Id = "TA", Hv = "G", Lv = "A", RatedMva = 12, RatedHvKv = 21, RatedLvKv = 6.3, ShortCircuitVoltagePercent = 7,
+            ResistivePercent = 0.5,
         });
 
     private static Complex FeederOhm(double c) => Polar(c * 110 / (Sqrt3 * 20), 0.1);
