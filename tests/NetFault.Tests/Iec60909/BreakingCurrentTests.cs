@@ -84,7 +84,8 @@ public class BreakingCurrentTests
     [Fact]
     public void Q_between_the_curves_is_interpolated_and_the_curves_end_at_1()
     {
-        var share = Of(Bus("A", 10), Feeder("A", 12), Motor("A") with { RatedKw = 4000, PolePairs = 2 }).At("A").Iec60909!.Machines.Single();
+        var share = Of(Bus("A", 10), Feeder("A", 12),
+            Motor("A") with { RatedKw = 4000, PolePairs = 2 }).At("A").Iec60909!.Machines.Single();
         var at005 = 0.79 + 0.12 * Math.Log(2);
         share.Q(0.02).Should().Be(1);
         share.Q(0.035).ShouldBe((1 + at005) / 2);
@@ -122,6 +123,25 @@ public class BreakingCurrentTests
         var fault = network.At("B", ShortCircuitCase.Minimum);
         fault.Iec60909!.BreakingCurrentRule.Should().Be(BreakingCurrentRule.Radial);
         fault.Iec60909.BreakingKa(0.1).ShouldBe(without.At("B", ShortCircuitCase.Minimum).Iec60909!.BreakingKa(0.1));
+    }
+
+    /// <summary>10.1.2.1: single-fed, Ib = μ·I″k, whatever the taps of the two transformers in parallel on the way.</summary>
+    [Theory]
+    [InlineData(115, 121)]
+    [InlineData(121, 115)]
+    public void A_single_fed_bus_behind_parallel_transformers_of_unequal_taps_has_mu_times_its_initial_current(
+        double firstKv, double secondKv)
+    {
+        var transformer = new Transformer
+        {
+            Id = "T1", Hv = "H", Lv = "A", RatedMva = 30, RatedHvKv = firstKv, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 4,
+            ResistivePercent = 0.3,
+        };
+        var fault = Of(Bus("H", 110), Bus("A", 10), Generator("A"), transformer,
+            transformer with { Id = "T2", RatedHvKv = secondKv }).At("H");
+        fault.Iec60909!.BreakingCurrentRule.Should().Be(BreakingCurrentRule.Radial);
+        var mu = IecFormulas.Mu(fault.Iec60909.Machines.Single().RatioToRated, 0.1);
+        fault.Iec60909.BreakingKa(0.1).ShouldBe(mu * fault.InitialSymmetricalKa);
     }
 
     [Theory]

@@ -4,8 +4,8 @@ using static NetFault.Tests.Support.IecCases;
 namespace NetFault.Tests.ByIec60909;
 
 /// <summary>
-/// Oracle: IEC 60909-0:2016, 6.8 (doubly fed generators), 6.9 and 7.2.1 (full-size converters: I″k = c·Un/(√3·Zk) + (1/Zk)·Σ Zkj·IskPFj), and
-/// series capacitors, evaluated by hand.
+/// Oracle: IEC 60909-0:2016, 6.8 (doubly fed generators), 6.9 and 7.2.1 (full-size converters:
+/// I″k = c·Un/(√3·Zk) + (1/Zk)·Σ Zkj·IskPFj), and series capacitors, evaluated by hand.
 /// </summary>
 public class ConverterSourceTests
 {
@@ -36,7 +36,8 @@ public class ConverterSourceTests
     [Fact]
     public void At_a_bus_on_another_way_the_share_is_Zkj_over_Zk()
     {
-        var network = Of(Bus("A", 10), Bus("B", 10), Bus("C", 10), Feeder("A", 12), Line("A", "B", 0.3, 0.4), Line("A", "C", 0.1, 0.2), Park);
+        var network = Of(Bus("A", 10), Bus("B", 10), Bus("C", 10), Feeder("A", 12), Line("A", "B", 0.3, 0.4), Line("A", "C", 0.1, 0.2),
+            Park);
         var zk = Strong + new Complex(0.1, 0.2);
         network.At("C").Iec60909!.ConverterPartKa.ShouldBe(Strong.Magnitude / zk.Magnitude * 0.7);
     }
@@ -46,7 +47,8 @@ public class ConverterSourceTests
     {
         var network = Of(Bus("A", 10), Bus("B", 0.4), Feeder("A", 12), Park with { SourceCurrentKa = 2.5 }, new Transformer
         {
-            Id = "T", Hv = "A", Lv = "B", RatedMva = 2, RatedHvKv = 10.5, RatedLvKv = 0.42, ShortCircuitVoltagePercent = 6, ResistivePercent = 1,
+            Id = "T", Hv = "A", Lv = "B", RatedMva = 2, RatedHvKv = 10.5, RatedLvKv = 0.42, ShortCircuitVoltagePercent = 6,
+            ResistivePercent = 1,
         });
         network.At("A").Iec60909!.ConverterPartKa.ShouldBe(2.5 * 0.42 / 10.5);
         network.At("B").Iec60909!.ConverterPartKa.ShouldBe(2.5);
@@ -56,12 +58,15 @@ public class ConverterSourceTests
     [Fact]
     public void A_full_converters_steady_state_current_is_its_own()
     {
-        var network = Of(Bus("A", 10), Bus("B", 10), Feeder("A", 12), Line("A", "B", 0.3, 0.4), Park with { SteadyStateKa = new MaxMin(0.6, 0.2) });
+        var network = Of(Bus("A", 10), Bus("B", 10), Feeder("A", 12), Line("A", "B", 0.3, 0.4),
+            Park with { SteadyStateKa = new MaxMin(0.6, 0.2) });
         network.At("B").SteadyStateKa!.Value.ShouldBe(Ka(1.1, 10, Strong + Cable) + 0.6);
         network.At("B").InitialSymmetricalKa.ShouldBe(Ka(1.1, 10, Strong + Cable) + 0.7);
     }
 
-    /// <summary>7.1.2: in the minimum case the contributions of wind and photovoltaic power stations shall be neglected (from memory).</summary>
+    /// <summary>
+    /// 7.1.2: in the minimum case the contributions of wind and photovoltaic power stations shall be neglected (from memory).
+    /// </summary>
     [Fact]
     public void Wind_and_photovoltaic_stations_are_neglected_in_the_minimum_initial_current()
     {

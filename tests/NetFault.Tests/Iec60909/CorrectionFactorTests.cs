@@ -8,7 +8,8 @@ public class CorrectionFactorTests
 {
     private static readonly Transformer TwoWindings = new()
     {
-        Id = "T", Hv = "H", Lv = "L", RatedMva = 25, RatedHvKv = 115, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 12, ResistivePercent = 0.5,
+        Id = "T", Hv = "H", Lv = "L", RatedMva = 25, RatedHvKv = 115, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 12,
+        ResistivePercent = 0.5,
     };
 
     [Theory]
@@ -17,7 +18,8 @@ public class CorrectionFactorTests
     [InlineData(0.69, 6.0, 1.05)]
     public void K_T_takes_cmax_of_the_low_voltage_side_by_6_3_3(double lowKv, double? tolerance, double cMax)
     {
-        var network = Of(Bus("H", 110), Bus("L", lowKv, tolerance), Feeder("H", 20, minKa: 15), TwoWindings with { RatedLvKv = lowKv * 1.05 });
+        var network = Of(Bus("H", 110), Bus("L", lowKv, tolerance), Feeder("H", 20, minKa: 15),
+            TwoWindings with { RatedLvKv = lowKv * 1.05 });
         var xT = Math.Sqrt(0.12 * 0.12 - 0.005 * 0.005);
         var kT = 0.95 * cMax / (1 + 0.6 * xT);
         foreach (var (which, cHigh, ka) in new[] { (ShortCircuitCase.Maximum, 1.10, 20.0), (ShortCircuitCase.Minimum, 1.00, 15.0) })
@@ -34,11 +36,14 @@ public class CorrectionFactorTests
     {
         var network = Of(Bus("H", 110), Bus("L", 10), Feeder("H", 20), TwoWindings with { ResistivePercent = null, LoadLossKw = 150 });
         double r = 0.150 / 25, x = Math.Sqrt(0.12 * 0.12 - r * r), toLow = 10.5 / 115;
-        var expected = Polar(1.1 * 110 / (Sqrt3 * 20), 0.1) * toLow * toLow + 0.95 * 1.1 / (1 + 0.6 * x) * new Complex(r, x) * (10.5 * 10.5 / 25);
+        var expected = Polar(1.1 * 110 / (Sqrt3 * 20), 0.1) * toLow * toLow + 0.95 * 1.1 / (1 + 0.6 * x) * new Complex(r, x)
+            * (10.5 * 10.5 / 25);
         ShouldBeClose(network.At("L").ImpedanceOhm!.Value, expected);
     }
 
-    /// <summary>6.3.3: each pair has its own K_T with its own x, before the star is made; each pair is on the smaller of its two ratings.</summary>
+    /// <summary>
+    /// 6.3.3: each pair has its own K_T with its own x, before the star is made; each pair is on the smaller of its two ratings.
+    /// </summary>
     [Fact]
     public void K_T_of_three_windings_is_by_pairs_before_the_star()
     {

@@ -4,7 +4,9 @@ using static NetFault.Tests.Support.IecCases;
 
 namespace NetFault.Tests.ByIec60909;
 
-/// <summary>Oracle: IEC 60909-0:2016, clause 9: i_dc = √2·I″k·e^(−2π·f·t·R/X), R/X by the equivalent frequency of its table, by hand.</summary>
+/// <summary>
+/// Oracle: IEC 60909-0:2016, clause 9: i_dc = √2·I″k·e^(−2π·f·t·R/X), R/X by the equivalent frequency of its table, by hand.
+/// </summary>
 public class DcComponentTests
 {
     [Theory]

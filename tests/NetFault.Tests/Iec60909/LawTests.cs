@@ -15,7 +15,7 @@ public class LawTests
             foreach (var rule in new[] { XOverRRule.SmallestRatio, XOverRRule.ComplexImpedance, XOverRRule.EquivalentFrequency })
             {
                 foreach (var fault in Energised(network, new Iec60909 { XOverRRule = rule }))
-                    fault.PeakKa.Should().BeInRange(1.02 * Math.Sqrt(2) * fault.InitialSymmetricalKa, 2 * Math.Sqrt(2) * fault.InitialSymmetricalKa);
+                    (fault.PeakKa / Math.Sqrt(2) / fault.InitialSymmetricalKa).Should().BeInRange(1.02, 2);
             }
         }, iter: 40);
 
@@ -26,7 +26,8 @@ public class LawTests
             foreach (var fault in Energised(IecRandomNetworks.Make(seed, buses, equalRatios: true), new Iec60909()))
             {
                 foreach (var delay in new[] { 0.02, 0.05, 0.1, 0.25 })
-                    fault.Iec60909!.BreakingKa(delay).Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12), $"{fault.BusId} {delay} s");
+                    fault.Iec60909!.BreakingKa(delay).Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12),
+                        $"{fault.BusId} {delay} s");
             }
         }, iter: 40);
 
@@ -45,14 +46,25 @@ public class LawTests
             }
         }, iter: 30);
 
+    /// <summary>
+    /// For feeders whose minimum is below their maximum by more than c changes between voltages (table 1: 1.22 to 1.10), and without series
+    /// capacitors: c in ZQ would else move a resonance.
+    /// </summary>
     [Fact]
     public void No_minimum_initial_current_exceeds_the_maximum_one() =>
         RandomNetworks.Cases(40).Sample((seed, buses) =>
         {
             var network = IecRandomNetworks.Make(seed, buses, equalRatios: false);
+            network = network.With(
+            [
+                .. network.SeriesCapacitors.Select(one => one with { VoltageLimited = true }),
+                .. network.NetworkFeeders.Select(one =>
+                    one with { ShortCircuitMva = Weaker(one.ShortCircuitMva), ShortCircuitKa = Weaker(one.ShortCircuitKa) }),
+            ]);
             var minimum = Energised(network, new Iec60909 { Case = ShortCircuitCase.Minimum }).ToDictionary(fault => fault.BusId);
             foreach (var fault in Energised(network, new Iec60909()))
-                minimum[fault.BusId].InitialSymmetricalKa.Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12), fault.BusId);
+                minimum[fault.BusId].InitialSymmetricalKa.Should().BeLessThanOrEqualTo(fault.InitialSymmetricalKa * (1 + 1e-12),
+                    fault.BusId);
         }, iter: 40);
 
     [Fact]
@@ -114,6 +126,8 @@ public class LawTests
             builder.BaseMva *= 7.3;
             AssertSame(network, builder.Build());
         }, iter: 20);
+
+    private static MaxMin? Weaker(MaxMin? value) => value is { } known ? new MaxMin(known.Max, 0.8 * known.Max) : null;
 
     private static IEnumerable<BusFault> Energised(Network network, Iec60909 method) =>
         new FaultStudy(network, method).EveryBus().Where(fault => fault.IsEnergised);

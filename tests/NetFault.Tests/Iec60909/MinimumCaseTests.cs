@@ -3,7 +3,9 @@ using static NetFault.Tests.Support.IecCases;
 
 namespace NetFault.Tests.ByIec60909;
 
-/// <summary>Oracle: IEC 60909-0:2016, 7.1.2 (conditions of the minimum case) and 6.4 (resistance at the end temperature), by hand.</summary>
+/// <summary>
+/// Oracle: IEC 60909-0:2016, 7.1.2 (conditions of the minimum case) and 6.4 (resistance at the end temperature), by hand.
+/// </summary>
 public class MinimumCaseTests
 {
     [Theory]
@@ -12,7 +14,8 @@ public class MinimumCaseTests
     [InlineData(null, 1.24)]
     public void Lines_have_their_resistance_at_the_end_temperature_in_the_minimum_case_alone(double? celsius, double factor)
     {
-        var network = Of(Bus("A", 10), Bus("B", 10), Feeder("A", 12, minKa: 8), Line("A", "B", 0.3, 0.1) with { EndTemperatureC = celsius });
+        var network = Of(Bus("A", 10), Bus("B", 10), Feeder("A", 12, minKa: 8),
+            Line("A", "B", 0.3, 0.1) with { EndTemperatureC = celsius });
         var warm = Polar(1.0 * 10 / (Sqrt3 * 8), 0.1) + new Complex(0.3 * factor, 0.1);
         network.At("B", ShortCircuitCase.Minimum).InitialSymmetricalKa.ShouldBe(Ka(1.0, 10, warm));
         network.At("B").InitialSymmetricalKa.ShouldBe(Ka(1.1, 10, Polar(1.1 * 10 / (Sqrt3 * 12), 0.1) + new Complex(0.3, 0.1)));

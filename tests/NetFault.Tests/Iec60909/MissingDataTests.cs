@@ -7,7 +7,8 @@ public class MissingDataTests
 {
     private static readonly Transformer UnitTransformer = new()
     {
-        Id = "T", Hv = "H", Lv = "A", RatedMva = 30, RatedHvKv = 115, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 10, ResistivePercent = 0.5,
+        Id = "T", Hv = "H", Lv = "A", RatedMva = 30, RatedHvKv = 115, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 10,
+        ResistivePercent = 0.5,
         OnLoadTapChanger = true,
     };
 
@@ -85,7 +86,8 @@ public class MissingDataTests
         var off = Generator("A") with { Id = "off", InService = false, RatedPowerFactor = null };
         Of(Bus("A", 10), Feeder("A", 12), off).At("A").InitialSymmetricalKa.ShouldBe(12);
         var unit = Machine with { InService = false, RatedPowerFactor = null };
-        Of(Bus("H", 110), Bus("A", 10), Feeder("H", 12), unit, UnitTransformer with { OnLoadTapChanger = null }).At("H").InitialSymmetricalKa.ShouldBe(12);
+        Of(Bus("H", 110), Bus("A", 10), Feeder("H", 12), unit,
+            UnitTransformer with { OnLoadTapChanger = null }).At("H").InitialSymmetricalKa.ShouldBe(12);
     }
 
     /// <summary>A bus out of service takes with it what is connected there.</summary>

@@ -76,7 +76,9 @@ public class MotorTests
         network.At("A").InitialSymmetricalKa.Should().BeGreaterThan(12.1);
     }
 
-    /// <summary>Where motors are left out, they are left out of all currents: κ and i_dc are those of the network without them too.</summary>
+    /// <summary>
+    /// Where motors are left out, they are left out of all currents: κ and i_dc are those of the network without them too.
+    /// </summary>
     [Fact]
     public void Motors_that_are_left_out_change_neither_the_peak_nor_the_direct_current()
     {

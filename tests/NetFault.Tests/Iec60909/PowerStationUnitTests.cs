@@ -111,6 +111,28 @@ public class PowerStationUnitTests
         fault.Iec60909.BreakingKa(0.1).ShouldBe((grid + mu * 1.1 * 21 / Sqrt3 / zg).Magnitude);
     }
 
+    /// <summary>6.6.1: with its unit transformer switched off, the machine is one connected directly, with K_G.</summary>
+    [Theory]
+    [InlineData(true)]
+    [InlineData(false)]
+    public void A_machine_cut_off_from_its_unit_transformer_has_K_G(bool byItsBus)
+    {
+        var unit = Unit(onLoad: true);
+        var cutOff = byItsBus ? unit.With(Bus("H", 110) with { InService = false })
+            : unit.With(unit.Transformers[0] with { InService = false });
+        ShouldBeClose(cutOff.At("G").ImpedanceOhm!.Value, 1.1 / (1 + Xd * SinPhi) * ZgRated);
+    }
+
+    [Fact]
+    public void Auxiliaries_with_a_second_way_to_the_grid_leave_the_terminals_inside_the_unit()
+    {
+        var network = WithAuxiliaries().With(Feeder("A", 5));
+        var xA = Math.Sqrt(0.07 * 0.07 - 0.005 * 0.005);
+        var way = 0.95 * 1.1 / (1 + 0.6 * xA) * new Complex(0.005, xA) * (21.0 * 21 / 12)
+            + Polar(1.1 * 6 / (Sqrt3 * 5), 0.1) * (21 / 6.3 * 21 / 6.3);
+        ShouldBeClose(network.At("G").ImpedanceOhm!.Value, Parallel(InsideOhm(1.1, 0), way));
+    }
+
     private static Complex InsideOhm(double c, double pG)
     {
         var kGs = 1.1 / (1 + Xd * SinPhi) / (1 + pG / 100);
@@ -135,7 +157,8 @@ public class PowerStationUnitTests
         Bus("A", 6),
         new Transformer
         {
-            Id = "TA", Hv = "G", Lv = "A", RatedMva = 12, RatedHvKv = 21, RatedLvKv = 6.3, ShortCircuitVoltagePercent = 7, ResistivePercent = 0.5,
+            Id = "TA", Hv = "G", Lv = "A", RatedMva = 12, RatedHvKv = 21, RatedLvKv = 6.3, ShortCircuitVoltagePercent = 7,
+            ResistivePercent = 0.5,
         });
 
     private static Complex FeederOhm(double c) => Polar(c * 110 / (Sqrt3 * 20), 0.1);

@@ -2,7 +2,9 @@ using static NetFault.Tests.Support.IecCases;
 
 namespace NetFault.Tests.ByIec60909;
 
-/// <summary>Oracle: IEC 60909-0:2016, clause 11: λ·IrG for machines that feed a fault by a way of their own, else I″k without motors.</summary>
+/// <summary>
+/// Oracle: IEC 60909-0:2016, clause 11: λ·IrG for machines that feed a fault by a way of their own, else I″k without motors.
+/// </summary>
 public class SteadyStateTests
 {
     private static readonly double RatedKa = 25 / Sqrt3 / 10.5;
@@ -35,7 +37,8 @@ public class SteadyStateTests
     {
         var network = Of(Bus("H", 110), Bus("A", 10), WithFactor, new Transformer
         {
-            Id = "T", Hv = "H", Lv = "A", RatedMva = 30, RatedHvKv = 115, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 10, ResistivePercent = 0.5,
+            Id = "T", Hv = "H", Lv = "A", RatedMva = 30, RatedHvKv = 115, RatedLvKv = 10.5, ShortCircuitVoltagePercent = 10,
+            ResistivePercent = 0.5,
         });
         network.At("H").SteadyStateKa!.Value.ShouldBe(3.2 * RatedKa * 10.5 / 115);
     }

@@ -3,7 +3,9 @@ using static NetFault.Tests.Support.IecCases;
 
 namespace NetFault.Tests.ByIec60909;
 
-/// <summary>Oracle: IEC 60909-0:2016, clause 12 and annex A: m by its formula, n by Simpson's rule over the current that annex A states.</summary>
+/// <summary>
+/// Oracle: IEC 60909-0:2016, clause 12 and annex A: m by its formula, n by Simpson's rule over the current that annex A states.
+/// </summary>
 public class ThermalTests
 {
     [Theory]

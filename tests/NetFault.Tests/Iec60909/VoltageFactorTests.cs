@@ -19,7 +19,8 @@ public class VoltageFactorTests
     [InlineData(400.0, null, 1.10, 1.00)]
     public void The_voltage_factor_is_that_of_table_1(double kv, double? tolerance, double max, double min)
     {
-        var network = Of(Bus("A", kv, tolerance), Bus("B", kv, tolerance), Feeder("A", 20, minKa: 12), Line("A", "B", 0, 0.03) with { EndTemperatureC = 20 });
+        var network = Of(Bus("A", kv, tolerance), Bus("B", kv, tolerance), Feeder("A", 20, minKa: 12),
+            Line("A", "B", 0, 0.03) with { EndTemperatureC = 20 });
         foreach (var (which, c, feederKa) in new[] { (ShortCircuitCase.Maximum, max, 20.0), (ShortCircuitCase.Minimum, min, 12.0) })
         {
             var fault = network.At("B", which);

@@ -18,7 +18,8 @@ internal static class IecCases
     public static NetworkFeeder Feeder(string bus, double ka, double rOverX = 0.1, double? minKa = null) =>
         new() { Id = "Q" + bus, Bus = bus, ShortCircuitKa = new MaxMin(ka, minKa), ROverX = rOverX };
 
-    public static Line Line(string from, string to, double r, double x) => new() { Id = from + to, From = from, To = to, Ohm = new Impedance(r, x) };
+    public static Line Line(string from, string to, double r, double x) =>
+        new() { Id = from + to, From = from, To = to, Ohm = new Impedance(r, x) };
 
     /// <summary>25 MVA, 10.5 kV, cos φ = 0.8, x″d = 0.14, Ra = 0.003 per unit.</summary>
     public static SynchronousMachine Generator(string bus) => new()

@@ -3,7 +3,9 @@ using MathNet.Numerics.LinearAlgebra;
 
 namespace NetFault.Tests.Support;
 
-/// <summary>Which network: frequency over the rated one, R_Gf or Ra, with asynchronous machines or not, the unit inside which the fault is.</summary>
+/// <summary>
+/// Which network: frequency over the rated one, R_Gf or Ra, with asynchronous machines or not, the unit inside which the fault is.
+/// </summary>
 internal sealed record IecVariant(double FrequencyRatio = 1, bool Fictitious = false, bool Motors = true, string? InsideMachine = null);
 
 /// <summary>A branch in ohm at rated frequency on its from side; its to end is an ideal ratio away.</summary>
@@ -39,7 +41,8 @@ internal sealed class IecDenseNetwork
             Join(one.From, one.To);
         var plain = new IecVariant();
         Live = Flood(
-            Sources(plain).Where(one => one.Element is NetworkFeeder or SynchronousMachine).Select(one => one.Node).ToHashSet(), Branches(plain), -1);
+            Sources(plain).Where(one => one.Element is NetworkFeeder or SynchronousMachine).Select(one => one.Node).ToHashSet(),
+                Branches(plain), -1);
     }
 
     /// <summary>Nodes that a feeder or synchronous machine reaches.</summary>
@@ -88,10 +91,12 @@ internal sealed class IecDenseNetwork
 
     /// <summary>Z of the live part of a network: row and column by node.</summary>
     public Func<int, int, Complex> Invert(IecVariant variant) => Invert(
-        Branches(variant).Where(one => Live.Contains(one.From)), Sources(variant).Where(one => Live.Contains(one.Node)), variant.FrequencyRatio);
+        Branches(variant).Where(one => Live.Contains(one.From)), Sources(variant).Where(one => Live.Contains(one.Node)),
+            variant.FrequencyRatio);
 
     /// <summary>Z of some branches and sources, all connected.</summary>
-    public static Func<int, int, Complex> Invert(IEnumerable<IecBranch> someBranches, IEnumerable<IecSource> someSources, double frequencyRatio)
+    public static Func<int, int, Complex> Invert(
+        IEnumerable<IecBranch> someBranches, IEnumerable<IecSource> someSources, double frequencyRatio)
     {
         List<IecBranch> branches = [.. someBranches];
         List<IecSource> sources = [.. someSources];

@@ -17,7 +17,9 @@ internal sealed class IecElements
     public double CMax(string bus) => Bus(bus) is { NominalKv: <= 1, LowVoltageTolerancePercent: 6 } ? 1.05 : 1.10;
 
     /// <summary>Table 1, c of the case.</summary>
-    public double C(string bus) => _maximum ? CMax(bus) : Bus(bus).NominalKv > 1 ? 1.00 : Bus(bus).LowVoltageTolerancePercent == 6 ? 0.95 : 0.90;
+    public double C(string bus) => _maximum ? CMax(bus)
+        : Bus(bus).NominalKv > 1 ? 1.00
+        : Bus(bus).LowVoltageTolerancePercent == 6 ? 0.95 : 0.90;
 
     /// <summary>Equation for ZQ: c·Un/(√3·I″kQ) = c·Un²/S″kQ.</summary>
     public Complex Feeder(NetworkFeeder feeder)
@@ -31,7 +33,9 @@ internal sealed class IecElements
     /// <summary>6.4: R at 20 °C in the maximum case, times 1 + 0.004·(θe − 20) in the minimum case.</summary>
     public Complex Line(Line line)
     {
-        var one = line.Ohm is { } ohm ? new Complex(ohm.R, ohm.X) : new Complex(line.OhmPerKm!.Value.R, line.OhmPerKm.Value.X) * line.LengthKm!.Value;
+        var one = line.Ohm is { } ohm
+            ? new Complex(ohm.R, ohm.X)
+            : new Complex(line.OhmPerKm!.Value.R, line.OhmPerKm.Value.X) * line.LengthKm!.Value;
         var warmer = _maximum ? 1 : 1 + 0.004 * ((line.EndTemperatureC ?? 80) - 20);
         return new Complex(one.Real * warmer, one.Imaginary) / line.Parallel;
     }
@@ -76,7 +80,8 @@ internal sealed class IecElements
     public Complex Motor(AsynchronousMotor motor)
     {
         var kv = motor.RatedKv ?? Kv(motor.Bus);
-        var ratio = motor.ROverX ?? (motor.XOverR is { } inverse ? 1 / inverse : kv <= 1 ? 0.42 : motor.RatedKw / 1000 / motor.PolePairs!.Value >= 1 ? 0.10 : 0.15);
+        var ratio = motor.ROverX ?? (motor.XOverR is { } inverse ? 1 / inverse : kv <= 1 ? 0.42
+            : motor.RatedKw / 1000 / motor.PolePairs!.Value >= 1 ? 0.10 : 0.15);
         return Polar(kv * kv / RatedMva(motor) / motor.LockedRotorCurrentRatio, ratio);
     }
 
@@ -89,7 +94,8 @@ internal sealed class IecElements
 
     /// <summary>6.8: Z_WD = √2·κ_WD·UrTHV/(√3·i_WDmax); κ_WD 1.7 and R/X 0.1 where not given.</summary>
     public Complex DoublyFed(DoublyFedGenerator one) =>
-        Polar(Math.Sqrt(2) * (one.PeakFactor ?? 1.7) * (one.RatedKv ?? Kv(one.Bus)) / (Math.Sqrt(3) * one.HighestInstantaneousKa), one.ROverX ?? 0.1);
+        Polar(Math.Sqrt(2) * (one.PeakFactor ?? 1.7) * (one.RatedKv ?? Kv(one.Bus)) / (Math.Sqrt(3) * one.HighestInstantaneousKa),
+            one.ROverX ?? 0.1);
 
     /// <summary>Rated current in kA of a machine or of the whole group; null for what is none.</summary>
     public double? RatedKa(ShuntElement element) => element switch
@@ -104,10 +110,12 @@ internal sealed class IecElements
 
     private double MachineFactor(SynchronousMachine machine, bool inside)
     {
-        var unit = _network.Transformers.FirstOrDefault(one => one.InService && one.Id == machine.UnitTransformer);
+        var unit = _network.Transformers.FirstOrDefault(one =>
+            one.InService && one.Id == machine.UnitTransformer && Bus(one.Hv).InService && Bus(one.Lv).InService);
         var plain = 1 + machine.ReactancePu.Subtransient * SinPhi(machine);
         if (unit is null)
-            return Kv(machine.Bus) / ((machine.RatedKv ?? Kv(machine.Bus)) * (1 + (machine.VoltageRegulationPercent ?? 0) / 100)) * CMax(machine.Bus) / plain;
+            return Kv(machine.Bus) / ((machine.RatedKv ?? Kv(machine.Bus)) * (1 + (machine.VoltageRegulationPercent ?? 0) / 100))
+                * CMax(machine.Bus) / plain;
         return inside ? CMax(machine.Bus) / plain / Raised(machine, unit) : Unit(machine, unit);
     }
 
@@ -130,7 +138,8 @@ internal sealed class IecElements
 
     private static double SinPhi(SynchronousMachine machine) => Math.Sin(Math.Acos(machine.RatedPowerFactor!.Value));
 
-    private static double RatedMva(AsynchronousMotor motor) => motor.Count * motor.RatedKw / 1000 / motor.RatedPowerFactor / motor.Efficiency;
+    private static double RatedMva(AsynchronousMotor motor) =>
+        motor.Count * motor.RatedKw / 1000 / motor.RatedPowerFactor / motor.Efficiency;
 
     private static Complex Percent(double uk, double ur) => new(ur / 100, Math.Sqrt(uk * uk - ur * ur) / 100);
 

@@ -1,8 +1,8 @@
 namespace NetFault.Tests.Support;
 
 /// <summary>
-/// The curves, tables and factors of IEC 60909-0:2016, written down for the tests from the standard (its text and coefficients from memory),
-/// one by one, without the library.
+/// The curves, tables and factors of IEC 60909-0:2016, written down for the tests from the standard (its text and coefficients from
+/// memory), one by one, without the library.
 /// </summary>
 internal static class IecFormulas
 {
@@ -24,7 +24,9 @@ internal static class IecFormulas
         return BetweenCurves(delay, t002, t005, t010, t025);
     }
 
-    /// <summary>10.1.2, q by the four equations, m in MW a pole pair, each curve ending at 1 (and at 0, where the logarithm falls below).</summary>
+    /// <summary>
+    /// 10.1.2, q by the four equations, m in MW a pole pair, each curve ending at 1 (and at 0, where the logarithm falls below).
+    /// </summary>
     public static double Q(double m, double delay) => BetweenCurves(
         delay, Limited(1.03 + 0.12 * Math.Log(m)), Limited(0.79 + 0.12 * Math.Log(m)), Limited(0.57 + 0.12 * Math.Log(m)),
         Limited(0.26 + 0.10 * Math.Log(m)));

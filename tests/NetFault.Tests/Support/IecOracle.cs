@@ -28,14 +28,22 @@ internal sealed class IecOracle
     /// <summary>8.1.2, method (c): the network at 20 Hz (24 Hz), machines with R_Gf.</summary>
     public double KappaC(string bus) => IecFormulas.Kappa(ROverX(bus, 0.4, fictitious: true));
 
-    /// <summary>8.1.2, method (b) before its factor 1.15.</summary>
-    public double KappaB(string bus) => IecFormulas.Kappa(ROverX(bus, 1, fictitious: true));
+    /// <summary>8.1.2, method (a): the smallest R/X of the branches and sources that are connected with the bus.</summary>
+    public double KappaA(string bus) => IecFormulas.Kappa(BranchRatios(bus).Min());
+
+    /// <summary>8.1.2, method (b): 1.15·κ up to 1.8 or 2.0; κ alone where all branches have R/X below 0.3.</summary>
+    public double KappaB(string bus)
+    {
+        var kappa = IecFormulas.Kappa(ROverX(bus, 1, fictitious: true));
+        return BranchRatios(bus).Max() < 0.3 ? kappa : Math.Min(1.15 * kappa, _elements.Kv(bus) > 1 ? 2.0 : 1.8);
+    }
 
     public double PeakKa(string bus) => KappaC(bus) * Math.Sqrt(2) * InitialKa(bus);
 
     /// <summary>Clause 9.</summary>
     public double DcKa(string bus, double seconds) => Math.Sqrt(2) * InitialKa(bus) * Math.Exp(
-        -2 * Math.PI * _network.FrequencyHz * seconds * ROverX(bus, IecFormulas.FcOverF(_network.FrequencyHz * seconds), fictitious: false));
+        -2 * Math.PI * _network.FrequencyHz * seconds
+            * ROverX(bus, IecFormulas.FcOverF(_network.FrequencyHz * seconds), fictitious: false));
 
     /// <summary>11.2, meshed: I″k without asynchronous motors.</summary>
     public double SteadyWithoutMotorsKa(string bus) => DrivingKv(bus) / Impedance(bus, new IecVariant(Motors: false)).Magnitude;
@@ -45,7 +53,8 @@ internal sealed class IecOracle
 
     /// <summary>Whether any machine feeds the fault with more than twice its rated current, or any drive at all.</summary>
     public bool IsNearMachines(string bus) =>
-        Shares(bus).Any(one => one.Source.Element is ConverterFedDrive || one.Current.Magnitude / _elements.RatedKa(one.Source.Element) > 2);
+        Shares(bus).Any(one =>
+            one.Source.Element is ConverterFedDrive || one.Current.Magnitude / _elements.RatedKa(one.Source.Element) > 2);
 
     /// <summary>No part that is left when the node is taken out holds more than one source.</summary>
     public bool IsRadial(string bus) => Parts(bus, new IecVariant()).All(part => part.Sources.Count <= 1);
@@ -68,7 +77,9 @@ internal sealed class IecOracle
         return held.Magnitude + sum;
     }
 
-    /// <summary>Equation for Ib in meshed networks, as phasors; products ΔU″·I″ are the same on both sides of an ideal transformer.</summary>
+    /// <summary>
+    /// Equation for Ib in meshed networks, as phasors; products ΔU″·I″ are the same on both sides of an ideal transformer.
+    /// </summary>
     public double MeshedBreakingKa(string bus, double delay)
     {
         var e = DrivingKv(bus);
@@ -145,10 +156,26 @@ internal sealed class IecOracle
         return parts;
     }
 
+    /// <summary>
+    /// R/X of what is connected with a bus; star legs may have negative parts: without reactance they give none, without resistance
+    /// 0.
+    /// </summary>
+    private List<double> BranchRatios(string bus)
+    {
+        var variant = new IecVariant(Fictitious: true);
+        var island = IecDenseNetwork.Flood([_dense.Node(bus)], _dense.Branches(variant), -1);
+        return _dense.Branches(variant).Where(one => island.Contains(one.From)).Select(one => one.Ohm)
+            .Concat(_dense.Sources(variant).Where(one => island.Contains(one.Node)).Select(one => one.Ohm))
+            .Where(ohm => ohm.Imaginary > 0).Select(ohm => Math.Max(0, ohm.Real / ohm.Imaginary)).ToList();
+    }
+
+    /// <summary>
+    /// R/X at rated frequency; 0, no decay, where series capacitors make the network capacitive at the equivalent frequency.
+    /// </summary>
     private double ROverX(string bus, double frequencyRatio, bool fictitious)
     {
         var z = Impedance(bus, new IecVariant(frequencyRatio, fictitious));
-        return z.Real / z.Imaginary * frequencyRatio;
+        return z.Imaginary > 0 ? z.Real / z.Imaginary * frequencyRatio : 0;
     }
 
     private Complex Impedance(string bus, IecVariant variant) =>
@@ -160,7 +187,8 @@ internal sealed class IecOracle
     /// <summary>c·Un/√3, or c·UrG/√3 at the terminals of a unit's machine.</summary>
     private double DrivingKv(string bus)
     {
-        var kv = Inside(bus) is { } id && _network.Find<SynchronousMachine>(id) is var machine && _dense.Node(machine.Bus) == _dense.Node(bus)
+        var kv = Inside(bus) is { } id && _network.Find<SynchronousMachine>(id) is var machine
+            && _dense.Node(machine.Bus) == _dense.Node(bus)
             ? machine.RatedKv ?? _elements.Kv(bus)
             : _elements.Kv(bus);
         return _elements.C(bus) * kv / Math.Sqrt(3);
@@ -177,13 +205,15 @@ internal sealed class IecOracle
         var variant = new IecVariant();
         var branches = _dense.Branches(variant);
         var holders = _dense.Sources(variant).Where(one => one.Element is NetworkFeeder or SynchronousMachine).ToList();
-        foreach (var machine in holders.Select(one => one.Element).OfType<SynchronousMachine>().Where(one => one.UnitTransformer is not null))
+        foreach (var machine in holders.Select(one => one.Element).OfType<SynchronousMachine>().Where(one =>
+            one.UnitTransformer is not null))
         {
             if (branches.FirstOrDefault(one => one.Element is Transformer && one.Element.Id == machine.UnitTransformer) is not { } unit)
                 continue;
             var terminals = _dense.Node(machine.Bus);
             var reached = IecDenseNetwork.Flood([terminals], branches, -1, unit.Element);
-            if (_dense.Node(bus) == terminals || (reached.Contains(_dense.Node(bus)) && holders.Count(one => reached.Contains(one.Node)) == 1))
+            if (_dense.Node(bus) == terminals || (reached.Contains(_dense.Node(bus))
+                && holders.Count(one => reached.Contains(one.Node)) == 1))
                 return machine.Id;
         }
         return null;

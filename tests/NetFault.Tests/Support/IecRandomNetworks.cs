@@ -1,7 +1,8 @@
 namespace NetFault.Tests.Support;
 
 /// <summary>
-/// Invented networks with all that IEC 60909-0 asks of the data, made from a seed: power station units with auxiliaries, generators, motors,
+/// Invented networks with all that IEC 60909-0 asks of the data, made from a seed: power station units with auxiliaries, generators,
+/// motors,
 /// drives, doubly fed generators, series capacitors, low-voltage buses, couplers, islands.
 /// </summary>
 internal sealed class IecRandomNetworks
@@ -29,7 +30,8 @@ internal sealed class IecRandomNetworks
     /// <summary>The network of a seed.</summary>
     /// <param name="seed">The seed.</param>
     /// <param name="buses">Buses of the grid; units bring their own in addition.</param>
-    /// <param name="equalRatios">Whether all transformers between two levels have the same ratio, so that loops carry no current of their own.</param>
+    /// <param name="equalRatios">Whether all transformers between two levels have the same ratio, so that loops carry no current of
+    /// their own.</param>
     /// <param name="drives">Whether converter-fed drives may be among the sources.</param>
     public static Network Make(int seed, int buses, bool equalRatios, bool drives = true) =>
         new IecRandomNetworks(seed, equalRatios, drives).Build(buses);
@@ -81,7 +83,8 @@ internal sealed class IecRandomNetworks
         switch (_random.Next(7))
         {
             case 0:
-                _builder.Add(new BusCoupler { Id = Id("K"), From = one.Id, To = other.Id, Closed = _random.Next(3) > 0, InService = InService() });
+                _builder.Add(new BusCoupler { Id = Id("K"), From = one.Id, To = other.Id, Closed = _random.Next(3) > 0,
+                    InService = InService() });
                 break;
             case 1:
                 _builder.Add(new SeriesReactor
@@ -102,18 +105,21 @@ internal sealed class IecRandomNetworks
     private void AddLine(Bus one, Bus other, double ohm) => _builder.Add(new Line
     {
         Id = Id("L"), From = one.Id, To = other.Id, LengthKm = Between(0.5, 2), Parallel = 1 + _random.Next(3), InService = InService(),
-        OhmPerKm = new Impedance(ohm * Between(0.05, 1), ohm * Between(0.2, 1.5)), EndTemperatureC = _random.Next(2) == 0 ? null : Between(60, 250),
+        OhmPerKm = new Impedance(ohm * Between(0.05, 1), ohm * Between(0.2, 1.5)), EndTemperatureC = _random.Next(2) == 0 ? null
+        : Between(60, 250),
     });
 
-    /// <summary>The capacitor is small enough to leave the network inductive at the lowest equivalent frequency.</summary>
+    /// <summary>The capacitor is small enough to leave most buses inductive at the lowest equivalent frequency.</summary>
     private void AddCompensatedLine(Bus one, Bus other, double ohm)
     {
         var between = AddBus(one.NominalKv, certain: true);
         _builder.Add(
-            new Line { Id = Id("L"), From = one.Id, To = between.Id, Ohm = new Impedance(ohm * Between(0.05, 0.2), ohm * Between(0.5, 1.5)) },
+            new Line { Id = Id("L"), From = one.Id, To = between.Id,
+                Ohm = new Impedance(ohm * Between(0.05, 0.2), ohm * Between(0.5, 1.5)) },
             new SeriesCapacitor
             {
-                Id = Id("C"), From = between.Id, To = other.Id, ReactanceOhm = ohm * Between(2e-4, 1e-3), VoltageLimited = _random.Next(2) == 0,
+                Id = Id("C"), From = between.Id, To = other.Id, ReactanceOhm = ohm * Between(2e-4, 1e-3),
+                VoltageLimited = _random.Next(2) == 0,
             });
     }
 
@@ -181,9 +187,12 @@ internal sealed class IecRandomNetworks
 
     private void AddMachine(Bus bus, string? unitTransformer) => _builder.Add(new SynchronousMachine
     {
-        Id = Id("G"), Bus = bus.Id, RatedMva = Between(1, 180), RatedKv = bus.NominalKv * Between(0.95, 1.05), UnitTransformer = unitTransformer,
-        InService = InService(), RatedPowerFactor = Between(0.75, 1), VoltageRegulationPercent = _random.Next(2) == 0 ? null : Between(2, 8),
-        ReactancePu = new MachineReactances(Between(0.1, 0.25), Between(0.25, 0.4), Between(1, 2.2)), ArmatureResistancePu = Between(0.002, 0.02),
+        Id = Id("G"), Bus = bus.Id, RatedMva = Between(1, 180), RatedKv = bus.NominalKv * Between(0.95, 1.05),
+        UnitTransformer = unitTransformer,
+        InService = InService(), RatedPowerFactor = Between(0.75, 1), VoltageRegulationPercent = _random.Next(2) == 0 ? null
+        : Between(2, 8),
+        ReactancePu = new MachineReactances(Between(0.1, 0.25), Between(0.25, 0.4), Between(1, 2.2)),
+        ArmatureResistancePu = Between(0.002, 0.02),
     });
 
     private void AddSource(Bus bus)
