@@ -2,8 +2,7 @@ namespace NetFault.Tests.Support;
 
 /// <summary>
 /// Invented networks with all that IEC 60909-0 asks of the data, made from a seed: power station units with auxiliaries, generators,
-/// motors,
-/// drives, doubly fed generators, series capacitors, low-voltage buses, couplers, islands.
+/// motors, drives, doubly fed generators, series capacitors, low-voltage buses, couplers, islands.
 /// </summary>
 internal sealed class IecRandomNetworks
 {
@@ -170,7 +169,7 @@ internal sealed class IecRandomNetworks
     private void AddUnit()
     {
         var hv = Any();
-        if (hv.NominalKv < 30)
+        if (hv.NominalKv < 30 || !hv.InService)
             return;
         var terminals = AddBus(_random.Next(2) == 0 ? 11 : 6, certain: true);
         var transformer = AddTransformer(hv, terminals);
