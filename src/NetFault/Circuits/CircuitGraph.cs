@@ -63,6 +63,36 @@ internal sealed class CircuitGraph
         return level;
     }
 
+    /// <summary>Whether every branch agrees with the levels, so that it does not matter by which way one goes.</summary>
+    public bool Agrees(double[] level)
+    {
+        foreach (var branch in _circuit.Branches)
+        {
+            double from = level[branch.From] * branch.FromRatio, to = level[branch.To] * branch.ToRatio;
+            if (Math.Abs(from - to) > 1e-12 * Math.Abs(from))
+                return false;
+        }
+        return true;
+    }
+
+    /// <summary>The nodes that one reaches without passing another.</summary>
+    public HashSet<int> ReachedWithout(int passed, int from)
+    {
+        var reached = new HashSet<int> { from };
+        var open = new Stack<int>(reached);
+        while (open.Count > 0)
+        {
+            var node = open.Pop();
+            for (var end = _start[node]; end < _start[node + 1]; end++)
+            {
+                var other = Neighbour(node, end);
+                if (other != passed && reached.Add(other))
+                    open.Push(other);
+            }
+        }
+        return reached;
+    }
+
     private void Spread(int node, double[] level, Queue<int> queue)
     {
         for (var end = _start[node]; end < _start[node + 1]; end++)

@@ -52,7 +52,7 @@ internal sealed class BreakingCurrent
             var lost = 1.0 - Kept(share, delaySeconds);
             current -= lost * share.Current * (meshed
                 ? new Complex(0.0, share.Impedance.Imaginary) * share.Current / _fault.DrivingVoltagePu
-                : _work.Transfer(_work.Circuit.Sources[share.Source].Node, _fault.Node));
+                : _work.Transfer(_fault, share, _fault.MotorsLeftOut ? Iec60909.WithoutMotors : Iec60909.Initial));
         }
         return _fault.Ka(Complex.Abs(current)) + _fault.ConverterPartKa;
     }

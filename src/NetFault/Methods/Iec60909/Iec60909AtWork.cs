@@ -7,6 +7,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
 {
     private readonly Lazy<CircuitGraph> _graph;
     private readonly Lazy<double[]> _levels;
+    private readonly Lazy<bool> _levelsAgree;
     private readonly Lazy<bool[]> _radial;
     private readonly Lazy<bool[]> _radialWithoutMotors;
     private readonly Lazy<SmallestRatios> _smallest;
@@ -22,6 +23,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
         Sources = new Iec60909Sources(Circuit.Network, units, method.Case);
         _graph = new(() => new CircuitGraph(Circuit));
         _levels = new(() => _graph.Value.Levels());
+        _levelsAgree = new(() => _graph.Value.Agrees(_levels.Value));
         _radial = new(() => RadialNodes.Of(Circuit, _graph.Value, source => Feeds(source, Iec60909.Initial)));
         _radialWithoutMotors = new(() => RadialNodes.Of(Circuit, _graph.Value, source => Feeds(source, Iec60909.WithoutMotors)));
         _smallest = new(() => new SmallestRatios(Circuit, Sources));
@@ -78,8 +80,34 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
         .GroupBy(source => _islands.Value[source.Node], source => (SynchronousMachine)Circuit.Network.Elements[source.Element])
         .ToDictionary(group => group.Key, group => group.ToList());
 
-    /// <summary>What a current at one node is at another, per unit, through the ratios between.</summary>
-    public double Transfer(int from, int to) => _levels.Value[from] / _levels.Value[to];
+    /// <summary>
+    /// What a machine's current is at a radially fed fault: over the current at the machine, per unit. Where all ratios agree that is the ratio
+    /// between; where transformers with unequal taps are parallel it is found from the branches at the fault.
+    /// </summary>
+    public Complex Transfer(Iec60909Currents fault, in PartialCurrent share, NetworkVariant variant)
+    {
+        var source = Circuit.Sources[share.Source].Node;
+        if (_levelsAgree.Value || source == fault.Node || Inside.Of(fault.Node) is not null)
+            return _levels.Value[source] / _levels.Value[fault.Node];
+        var solved = Networks.Of(variant);
+        var column = solved.Column(fault.Node, out _);
+        var part = _graph.Value.ReachedWithout(fault.Node, source);
+        var current = Complex.Zero;
+        for (var end = _graph.Value.Start(fault.Node); end < _graph.Value.End(fault.Node); end++)
+        {
+            if (part.Contains(_graph.Value.Neighbour(fault.Node, end)))
+                current += IntoNode(fault.Node, _graph.Value.Branch(end), column, solved.Values);
+        }
+        return current / (column[source] / share.Impedance);
+    }
+
+    /// <summary>The current that a branch brings to a node with a fault of one per unit.</summary>
+    private Complex IntoNode(int node, int index, Complex[] column, AdmittanceValues values)
+    {
+        var branch = Circuit.Branches[index];
+        var through = values.Branches[index] * (branch.FromRatio * column[branch.From] - branch.ToRatio * column[branch.To]);
+        return branch.From == node ? branch.FromRatio * through : -branch.ToRatio * through;
+    }
 
     /// <summary>Zkk in a network that is not among the method's standing ones, with the fault's own impedance.</summary>
     public Complex Seen(NetworkVariant variant, in SeenImpedances seen)

@@ -47,9 +47,9 @@ internal readonly record struct SteadyStateCurrent(double Ka, SteadyStateCurrent
             var machine = (SynchronousMachine)work.Circuit.Network.Elements[source.Element];
             if (share.Current == Complex.Zero || Factor(machine, work.Method.Case) is not { } factor)
                 continue;
-            var transfer = work.Transfer(source.Node, fault.Node);
+            var transfer = work.Transfer(fault, share, Iec60909.WithoutMotors);
             current -= transfer * share.Current;
-            steady += factor * share.Rated * transfer;
+            steady += factor * share.Rated * Complex.Abs(transfer);
         }
         return Complex.Abs(current) + steady;
     }
