@@ -80,8 +80,9 @@ public sealed class BusFault
     public AcComponentRule AcComponentRule => _currents?.AcComponentRule ?? AcComponentRule.HeldAtInitial;
 
     /// <summary>
-    /// The peak short-circuit current ip, an instantaneous value in kA: the exact maximum over time for a fault at voltage zero, with the
-    /// AC component held at I″k and the DC component by <see cref="DcDecayRule"/>; 2√2·I″k where that is undamped.
+    /// The peak short-circuit current ip, an instantaneous value in kA. By <see cref="MachineDecrement"/> the exact maximum over time for a
+    /// fault at voltage zero, with the AC component held at I″k and the DC component by <see cref="DcDecayRule"/>, 2√2·I″k where that is
+    /// undamped; by <see cref="NetFault.Iec60909"/> κ·√2·I″k.
     /// </summary>
     public double PeakKa => _currents?.PeakKa ?? 0.0;
 

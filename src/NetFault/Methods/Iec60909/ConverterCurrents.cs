@@ -16,8 +16,8 @@ internal sealed class ConverterCurrents
     {
         _networks = networks;
         var maximum = which == ShortCircuitCase.Maximum;
-        _initial = new(() => Sum(Iec60909.Initial, source => maximum ? source.SourceCurrentKa : Least(source)));
-        _steady = new(() => Sum(Iec60909.WithoutMotors, source => maximum ? source.SteadyStateKa?.Max ?? source.SourceCurrentKa : Least(source)));
+        _initial = new(() => Sum(Iec60909.Initial, source => source is FullConverterSource one ? maximum ? one.SourceCurrentKa : Least(one.SteadyStateKa) : 0.0));
+        _steady = new(() => Sum(Iec60909.WithoutMotors, source => maximum ? Most(source) : Least(SteadyState(source))));
     }
 
     /// <summary>Σ |Zkj|·IskPFj per unit at a node.</summary>
@@ -36,18 +36,30 @@ internal sealed class ConverterCurrents
     }
 
     /// <summary>In the minimum case only what is there at the least counts.</summary>
-    private static double Least(FullConverterSource source) => source.SteadyStateKa?.Min ?? 0.0;
+    private static double Least(MaxMin? steadyState) => steadyState?.Min ?? 0.0;
 
-    private double[]? Sum(NetworkVariant variant, Func<FullConverterSource, double> currentKa)
+    private static double Most(NetworkElement source) =>
+        SteadyState(source)?.Max ?? (source is FullConverterSource converter ? converter.SourceCurrentKa : 0.0);
+
+    /// <summary>The steady-state current of a source that gives one: full-size converters and doubly fed generators.</summary>
+    private static MaxMin? SteadyState(NetworkElement source) => source switch
+    {
+        FullConverterSource converter => converter.SteadyStateKa,
+        DoublyFedGenerator generator => generator.SteadyStateKa,
+        _ => null,
+    };
+
+    private double[]? Sum(NetworkVariant variant, Func<NetworkElement, double> currentKa)
     {
         var network = _networks.Circuit.Network;
         var perNode = new Dictionary<int, double>();
         foreach (var source in _networks.Circuit.Sources)
         {
-            if (network.Elements[source.Element] is not FullConverterSource converter)
+            var current = currentKa(network.Elements[source.Element]);
+            if (current <= 0.0)
                 continue;
             var bus = network.Buses[network.Topology.TerminalBus(source.Element, 0)];
-            var current = currentKa(converter) / PerUnit.BaseKa(bus.NominalKv, network.BaseMva);
+            current /= PerUnit.BaseKa(bus.NominalKv, network.BaseMva);
             perNode[source.Node] = (perNode.TryGetValue(source.Node, out var sum) ? sum : 0.0) + current;
         }
         return perNode.Count == 0 ? null : Sum(_networks.Of(variant), perNode);

@@ -32,7 +32,10 @@ public sealed class Iec60909Result
     /// <summary>What sources behind full-size converters add to the initial current in kA; it is in <see cref="BusFault.InitialSymmetricalKa"/>.</summary>
     public double ConverterPartKa => _currents.ConverterPartKa;
 
-    /// <summary>The machines that feed this fault with more than twice their rated current; only these have a decrement.</summary>
+    /// <summary>
+    /// The machines that feed this fault with more than twice their rated current, which alone have a decrement, and converter-fed drives, which
+    /// do not contribute to Ib.
+    /// </summary>
     public IReadOnlyList<MachineShare> Machines => _currents.Breaking.Machines();
 
     /// <summary>The symmetrical breaking current Ib in kA (clause 10).</summary>

@@ -80,6 +80,8 @@ internal sealed class Iec60909Sources
     {
         if (element is FullConverterSource converter)
             ConverterCurrents.Log(converter, _case, log);
+        if (element is DoublyFedGenerator { SteadyStateKa: null } && _case == ShortCircuitCase.Maximum)
+            log?.Add(element, "steady_state_ka", "left out of Ik: no steady-state current is given");
         if (_case == ShortCircuitCase.Minimum)
             return null;
         return element switch

@@ -24,11 +24,11 @@ internal sealed class PowerStationUnits
             if (machine.UnitTransformer is not { } id || !IsInService(network, machine))
                 continue;
             var transformer = network.Find<Transformer>(id);
-            if (!IsInService(network, transformer))
+            if (!IsInService(network, transformer) || TerminalWinding(network, machine, transformer) is not { } winding)
                 continue;
             if (_byTransformer.TryGetValue(id, out var other))
                 throw MethodDataException.SharedUnitTransformer(network, machine, other.Machine);
-            var unit = Of(network, machine, transformer, which);
+            var unit = Of(network, machine, transformer, winding, which);
             _byTransformer.Add(id, unit);
             _byMachine.Add(machine.Id, unit);
         }
@@ -46,12 +46,25 @@ internal sealed class PowerStationUnits
     private static bool IsInService(Network network, NetworkElement element) =>
         element.InService && element.Terminals.All(bus => network.Find<Bus>(bus!).InService);
 
-    private static PowerStationUnit Of(Network network, SynchronousMachine machine, Transformer transformer, ShortCircuitCase which)
+    /// <summary>
+    /// The winding at the machine's terminals, behind a closed generator breaker too: 0 for HV, 1 for LV. Null where the breaker is open: then
+    /// machine and transformer are no unit.
+    /// </summary>
+    private static int? TerminalWinding(Network network, SynchronousMachine machine, Transformer transformer)
+    {
+        int Node(string bus) => network.Topology.NodeOfBus[network.Topology.FindBus(bus)];
+        if (Node(transformer.Lv) == Node(machine.Bus))
+            return 1;
+        return Node(transformer.Hv) == Node(machine.Bus) ? 0 : null;
+    }
+
+    private static PowerStationUnit Of(
+        Network network, SynchronousMachine machine, Transformer transformer, int winding, ShortCircuitCase which)
     {
         var terminals = network.Find<Bus>(machine.Bus);
-        var atHv = transformer.Lv == machine.Bus;
-        var highSide = network.Find<Bus>(atHv ? transformer.Hv : transformer.Lv);
-        var ratio = atHv ? transformer.RatedHvKv / transformer.RatedLvKv : transformer.RatedLvKv / transformer.RatedHvKv;
+        var atLv = winding == 1;
+        var highSide = network.Find<Bus>(atLv ? transformer.Hv : transformer.Lv);
+        var ratio = atLv ? transformer.RatedHvKv / transformer.RatedLvKv : transformer.RatedLvKv / transformer.RatedHvKv;
         var xT = TransformerCircuit.RelativeReactance(transformer);
         double xd = machine.ReactancePu.Subtransient, sinPhi = SinPhi.Of(network, machine), ratedKv = machine.RatedKv ?? terminals.NominalKv;
         double cMax = VoltageFactor.Max(highSide), cMaxInside = VoltageFactor.Max(terminals);

@@ -181,8 +181,24 @@ internal sealed class ElementCheck
     {
         if (!_draft.Declares("transformers", id))
             Say(key, Problems.UnknownTransformer(id, Nearest(id, _draft.IdsOf("transformers"))));
-        else if (_draft.HasBus(bus) && _draft.Find("transformers", id) is Transformer transformer && transformer.Hv != bus && transformer.Lv != bus)
+        else if (_draft.HasBus(bus) && _draft.Find("transformers", id) is Transformer transformer && !IsAt(transformer, bus))
             Say(key, Problems.UnitTransformerElsewhere(id, bus));
+    }
+
+    /// <summary>Whether a winding is at a bus, or behind one coupler from it: a generator breaker.</summary>
+    private bool IsAt(Transformer transformer, string bus)
+    {
+        if (transformer.Hv == bus || transformer.Lv == bus)
+            return true;
+        foreach (var coupler in _draft.Elements.OfType<BusCoupler>())
+        {
+            if (coupler.From != bus && coupler.To != bus)
+                continue;
+            var other = coupler.From == bus ? coupler.To : coupler.From;
+            if (transformer.Hv == other || transformer.Lv == other)
+                return true;
+        }
+        return false;
     }
 
     public void DifferentBuses(string oneKey, string one, string otherKey, string other)

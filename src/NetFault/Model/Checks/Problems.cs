@@ -79,7 +79,7 @@ internal static class Problems
 
     public static Problem UnitTransformerElsewhere(string transformer, string bus) =>
         new("NF303", Error, $"transformer \"{transformer}\" is not connected to the machine's bus \"{bus}\"",
-            "name the transformer whose winding is at the machine's terminals");
+            "name the transformer whose winding is at the machine's terminals, or behind its breaker in bus_couplers");
 
     public static Problem SameBus(string bus) =>
         new("NF304", Error, $"both ends are at bus \"{bus}\"");
