@@ -65,6 +65,57 @@ public sealed class FlowReviewTests
         study.FlowsAt("A").Voltage("B").LineToLineKv.Should().BeApproximately(0.0, 1e-9, "B is the faulted node");
     }
 
+    /// <summary>Nothing feeds the low-voltage bus but the transformer from the faulted bus: during a bolted fault there its voltage is 0.</summary>
+    [Theory]
+    [InlineData(ShortCircuitCase.Maximum, 6.0)]
+    [InlineData(ShortCircuitCase.Minimum, 6.0)]
+    [InlineData(ShortCircuitCase.Minimum, null)]
+    public void A_bus_that_is_fed_from_the_faulted_bus_alone_has_no_voltage(ShortCircuitCase which, double? tolerance)
+    {
+        var network = Build(
+            Bus("MV", 10), Bus("LV", 0.4, tolerance), Feeder("MV", 200),
+            new Transformer
+            {
+                Id = "T", Hv = "MV", Lv = "LV", RatedMva = 1, RatedHvKv = 10, RatedLvKv = 0.4, ShortCircuitVoltagePercent = 6, XOverR = 5,
+            });
+        var voltage = new FaultStudy(network, new Iec60909 { Case = which }).FlowsAt("MV").Voltage("LV");
+        voltage.LineToLineKv.Should().BeApproximately(0.0, 1e-9);
+    }
+
+    /// <summary>What is in service but de-energised carries 0; asking for it is no mistake in its id.</summary>
+    [Fact]
+    public void A_line_in_service_in_a_de_energised_part_carries_nothing()
+    {
+        var network = Build(Bus("A", 10), Bus("B", 10), Bus("C", 10), Feeder("A", 100), Line("L", "B", "C", 0.1, 0.2));
+        var flows = new FaultStudy(network, new MachineDecrement()).FlowsAt("A");
+        FluentActions.Invoking(() => flows.Branch("L")).Should().NotThrow();
+    }
+
+    /// <summary>Two branches have the id 1: which one is meant has to be said, not guessed.</summary>
+    [Fact]
+    public void An_id_that_two_sections_share_is_not_answered_for_one_of_them()
+    {
+        var network = Build(
+            Bus("A", 110), Bus("B", 110), Bus("C", 10), Feeder("A", 1000), Line("1", "A", "B", 0.1, 0.2),
+            new Transformer { Id = "1", Hv = "B", Lv = "C", RatedMva = 20, RatedHvKv = 110, RatedLvKv = 10, ShortCircuitVoltagePercent = 10, XOverR = 20 });
+        var flows = new FaultStudy(network, new MachineDecrement()).FlowsAt("C");
+        FluentActions.Invoking(() => flows.Branch("1")).Should().Throw<ArgumentException>();
+    }
+
+    /// <summary>
+    /// design section 6: an element out of service is gone, and so is one at a bus out of service (docs/method.md). The machine then has no unit
+    /// transformer and carries K_G, as with the transformer itself out of service.
+    /// </summary>
+    [Fact]
+    public void A_unit_transformer_at_a_bus_out_of_service_is_as_good_as_out_of_service()
+    {
+        var network = Unit().With(Feeder("AUXILIARY", 100));
+        var withoutTransformer = network.With(network.Find<Transformer>("UT") with { InService = false });
+        var withoutGrid = network.With(network.Find<Bus>("GRID") with { InService = false });
+        var expected = new FaultStudy(withoutTransformer, new Iec60909()).At("TERMINALS").InitialSymmetricalKa;
+        new FaultStudy(withoutGrid, new Iec60909()).At("TERMINALS").InitialSymmetricalKa.Should().BeApproximately(expected, 1e-9 * expected);
+    }
+
     private static Network Unit() => Build(
         Bus("GRID", 110), Bus("TERMINALS", 10), Bus("AUXILIARY", 10), Feeder("GRID", 3000), Line("AUX", "TERMINALS", "AUXILIARY", 0.01, 0.1),
         Generator("G", "TERMINALS", 50) with { UnitTransformer = "UT", RatedKv = 10.5 },

@@ -28,7 +28,7 @@ public sealed class ResultReviewTests
         var study = new FaultStudy(
             Build(Bus("A", 10), Bus("B", 10), Feeder("A", 100.0 / feederOhm, 0.0), Line("L", "A", "B", 0.0, lineOhm)), new MachineDecrement());
         var exact = 10.0 / Math.Sqrt(3.0) / (feederOhm + lineOhm);
-        var fault = study.EveryBus()[1];
+        var fault = study.At("B");
         (Math.Abs(fault.InitialSymmetricalKa / exact - 1.0) < 1e-9 || fault.SolutionResidual > 1e-9).Should().BeTrue(
             $"the current is {fault.InitialSymmetricalKa / exact - 1.0:0.0e0} off and the residual says {fault.SolutionResidual:0.0e0}");
     }
