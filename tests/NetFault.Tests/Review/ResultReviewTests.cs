@@ -80,6 +80,22 @@ public sealed class ResultReviewTests
     public void An_id_of_characters_that_cannot_be_seen_is_refused() =>
         FluentActions.Invoking(() => Build(Bus("A", 10), Bus("A\u200B", 10), Feeder("A", 100))).Should().Throw<InvalidNetworkException>();
 
+    /// <summary>A motor that is left out is out of the peak and the DC component too: as with the motor out of service.</summary>
+    [Fact]
+    public void A_small_motor_that_is_left_out_does_not_damp_the_peak()
+    {
+        var motor = new AsynchronousMotor
+        {
+            Id = "M", Bus = "A", RatedKw = 150, RatedPowerFactor = 0.88, Efficiency = 0.95, LockedRotorCurrentRatio = 12, PolePairs = 2,
+        };
+        var network = Build(Bus("A", 0.4), Feeder("A", 20, 0.05), motor);
+        var leftOut = new FaultStudy(network, new Iec60909 { LeaveOutSmallMotors = true }).At("A");
+        var absent = new FaultStudy(network.With(motor with { InService = false }), new Iec60909()).At("A");
+        leftOut.Iec60909!.MotorsLeftOut.Should().BeTrue();
+        leftOut.PeakKa.Should().BeApproximately(absent.PeakKa, 1e-9);
+        leftOut.DcComponentKa(0.05).Should().BeApproximately(absent.DcComponentKa(0.05), 1e-9);
+    }
+
     /// <summary>IEC 60909-0, 8.1.2 (b): the margin is left out only while R/X stays below 0.3 in all branches; x = 0 makes it infinite.</summary>
     [Fact]
     public void A_branch_without_reactance_keeps_the_margin_of_method_b()
