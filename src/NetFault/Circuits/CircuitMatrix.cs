@@ -57,7 +57,7 @@ internal sealed class CircuitMatrix
         }
         catch (SingularMatrixException singular)
         {
-            throw new SingularNetworkException(BusesOf(singular.Node), singular);
+            throw new SingularNetworkException(BusesOf(singular.Node), Circuit.HasNegativeReactance, singular);
         }
     }
 
@@ -74,7 +74,7 @@ internal sealed class CircuitMatrix
         for (var i = 0; i < impedances.Length; i++)
         {
             if (Complex.Abs(impedances[i]) * largest[firstNode + i] < Resonance)
-                throw new SingularNetworkException(BusesOf(firstNode + i), null);
+                throw new SingularNetworkException(BusesOf(firstNode + i), hasNegativeReactance: true, null);
         }
     }
 

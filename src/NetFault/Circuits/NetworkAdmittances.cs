@@ -25,10 +25,10 @@ internal static class NetworkAdmittances
     public const double AssumedShare = 1.0 / 200.0;
 
     /// <summary>The admittance of each branch.</summary>
-    public static Complex[] OfBranches(Circuit circuit, NetworkVariant variant)
+    public static Complex[] OfBranches(Circuit circuit, Complex[] branchImpedances, NetworkVariant variant)
     {
         var part = variant.Part;
-        var impedances = AtFrequency(circuit, variant.FrequencyRatio);
+        var impedances = AtFrequency(circuit, branchImpedances, variant.FrequencyRatio);
         var admittances = new Complex[circuit.Branches.Length];
         for (var i = 0; i < admittances.Length; i++)
         {
@@ -46,13 +46,13 @@ internal static class NetworkAdmittances
     }
 
     /// <summary>The branch impedances with their reactances at another frequency.</summary>
-    private static Complex[] AtFrequency(Circuit circuit, double ratio)
+    private static Complex[] AtFrequency(Circuit circuit, Complex[] branchImpedances, double ratio)
     {
         if (ratio.Equals(1.0))
-            return circuit.BranchImpedances;
-        var impedances = new Complex[circuit.BranchImpedances.Length];
+            return branchImpedances;
+        var impedances = new Complex[branchImpedances.Length];
         for (var i = 0; i < impedances.Length; i++)
-            impedances[i] = AtFrequency(circuit.BranchImpedances[i], circuit.Branches[i].Kind, ratio);
+            impedances[i] = AtFrequency(branchImpedances[i], circuit.Branches[i].Kind, ratio);
         return impedances;
     }
 

@@ -62,7 +62,10 @@ public sealed class BusFault
     /// <summary>The impedance of the fault itself in ohm; 0 for a bolted fault.</summary>
     public Complex FaultImpedanceOhm { get; }
 
-    /// <summary>X/R at the fault by <see cref="XOverRRule"/>; null where there is none, and <see cref="XOverRStatus"/> says why.</summary>
+    /// <summary>
+    /// X/R at the fault by <see cref="XOverRRule"/>, by which the peak is found; by IEC 60909-0 machines have their fictitious resistance in it;
+    /// null where there is none, and <see cref="XOverRStatus"/> says why.
+    /// </summary>
     public double? XOverR => Ratio.XOverR;
 
     /// <summary>Whether X/R is known, and if not, why.</summary>
@@ -71,10 +74,8 @@ public sealed class BusFault
     /// <summary>The rule by which X/R was found.</summary>
     public XOverRRule XOverRRule => _context.Method.RatioRule;
 
-    /// <summary>How the DC component, and with it the peak, is taken to decay.</summary>
-    public DcDecayRule DcDecayRule => IsEnergised
-        ? XOverR.HasValue ? DcDecayRule.ByXOverR : DcDecayRule.Undamped
-        : DcDecayRule.NoCurrent;
+    /// <summary>How the DC component is taken to decay.</summary>
+    public DcDecayRule DcDecayRule => _currents?.DcDecayRule ?? DcDecayRule.NoCurrent;
 
     /// <summary>How the AC component is taken over time.</summary>
     public AcComponentRule AcComponentRule => _currents?.AcComponentRule ?? AcComponentRule.HeldAtInitial;
@@ -86,7 +87,10 @@ public sealed class BusFault
     /// </summary>
     public double PeakKa => _currents?.PeakKa ?? 0.0;
 
-    /// <summary>The largest residual of the solutions behind this result: 0 for exact ones, about 1e-15 to 1e-12 for good ones.</summary>
+    /// <summary>
+    /// How good the solutions behind this result are: the largest residual of the network's equations, or what rounding of the admittances
+    /// alone may cost where that is more; about 1e-15 to 1e-12 for good ones. A tiny impedance beside a very large one costs digits.
+    /// </summary>
     public double SolutionResidual => _currents?.Residual ?? 0.0;
 
     /// <summary>What this result rests on that the network does not say: the assumed values of its connected part of the network.</summary>
@@ -98,11 +102,15 @@ public sealed class BusFault
     /// </summary>
     public Iec60909Result? Iec60909 => _currents?.Standard;
 
+    /// <summary>Whether this is a result of a study.</summary>
+    internal bool IsOf(StudyContext context) => ReferenceEquals(_context, context);
+
     private ReactanceRatio Ratio => _currents?.Ratio ?? new ReactanceRatio(null, XOverRStatus.DeEnergised);
 
     /// <summary>
-    /// The DC component of the phase with the largest one, i_dc(t) = √2·I″k·e^(−ω·t/(X/R)) in kA, an instantaneous value; undamped where
-    /// there is no X/R.
+    /// The DC component i_dc(t) of the phase with the largest one, in kA, an instantaneous value: √2·I″k·e^(−ω·t/(X/R)), undamped where there
+    /// is no X/R. By IEC 60909-0 the X/R is that of the equivalent frequency for the time, and what full-size converters add has no DC
+    /// component.
     /// </summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
@@ -112,7 +120,10 @@ public sealed class BusFault
         return _currents?.DcComponentKa(seconds) ?? 0.0;
     }
 
-    /// <summary>The RMS value of the AC component in kA: I″k at all times, as <see cref="AcComponentRule"/> says.</summary>
+    /// <summary>
+    /// The RMS value of the AC component in kA, as <see cref="AcComponentRule"/> says: I″k at all times, or by IEC 60909-0 the breaking
+    /// current Ib of this minimum time delay.
+    /// </summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
     public double SymmetricalRmsKa(double seconds)

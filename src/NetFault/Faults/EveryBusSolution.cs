@@ -35,11 +35,20 @@ internal sealed class EveryBusSolution
         SideBySide(wanted.Count, i =>
         {
             impedances[i] = _networks.Of(wanted[i]).DrivingPoints;
-            _progress?.Report(new StudyProgress(Interlocked.Increment(ref _done), wanted.Count + 1, wanted[i].Name));
+            Report(wanted[i].Name, wanted.Count + 1);
         });
         var results = Results(wanted, impedances);
-        _progress?.Report(new StudyProgress(wanted.Count + 1, wanted.Count + 1, "currents"));
+        Report("currents", wanted.Count + 1);
         return Array.AsReadOnly(results);
+    }
+
+    /// <summary>Counts and tells in one step, so that the counts come in order.</summary>
+    private void Report(string step, int total)
+    {
+        if (_progress is null)
+            return;
+        lock (_progress)
+            _progress.Report(new StudyProgress(++_done, total, step));
     }
 
     /// <summary>Runs the steps on the cores there are; a step's exception comes out as it is, not gathered in another.</summary>

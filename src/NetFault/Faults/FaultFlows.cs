@@ -9,10 +9,13 @@ namespace NetFault;
 /// </summary>
 public sealed class FaultFlows
 {
+    private readonly Lazy<Dictionary<string, BusVoltage>> _voltages;
+
     internal FaultFlows(string busId, FaultInstant instant)
     {
         BusId = busId;
         Instant = instant;
+        _voltages = new(() => Voltages.ToDictionary(one => one.BusId, StringComparer.Ordinal));
     }
 
     /// <summary>The bus with the fault.</summary>
@@ -27,38 +30,54 @@ public sealed class FaultFlows
     /// <summary>The voltage of every bus, in the order of the network.</summary>
     public IReadOnlyList<BusVoltage> Voltages { get; internal init; } = [];
 
-    /// <summary>The currents of every branch that is in service: transformers, lines, reactors.</summary>
+    /// <summary>The currents of every branch in service: transformers, lines, reactors, capacitors that are not bridged.</summary>
     public IReadOnlyList<BranchFlow> Branches { get; internal init; } = [];
 
-    /// <summary>The current of every feeder, machine and motor that is in service.</summary>
+    /// <summary>The current of every feeder, machine, motor and converter in service.</summary>
     public IReadOnlyList<SourceFlow> Sources { get; internal init; } = [];
 
-    /// <summary>The current through every closed coupler that is in service.</summary>
+    /// <summary>The current through every closed coupler and every bridged series capacitor in service.</summary>
     public IReadOnlyList<CouplerFlow> Couplers { get; internal init; } = [];
 
-    /// <summary>Normwise relative backward error of the solution: about 1e-16 for a good one.</summary>
+    /// <summary>How good the solution is, as <see cref="BusFault.SolutionResidual"/> says; about 1e-16 for a good one.</summary>
     public double SolutionResidual { get; internal init; }
 
     /// <summary>The voltage of a bus.</summary>
     /// <exception cref="UnknownIdException">There is no such bus.</exception>
-    public BusVoltage Voltage(string busId) => Find("buses", busId, Voltages, one => one.BusId);
+    public BusVoltage Voltage(string busId) => _voltages.Value.TryGetValue(Guard.NotNull(busId), out var voltage)
+        ? voltage
+        : throw new UnknownIdException("buses", busId, _voltages.Value.Keys);
 
     /// <summary>The flow of a branch, by its id; where sections share the id, name the section too.</summary>
     /// <exception cref="UnknownIdException">There is no such branch in service.</exception>
+    /// <exception cref="ArgumentException">Branches of several sections have the id.</exception>
     public BranchFlow Branch(string id, string? section = null) =>
-        Find(section ?? "branches in service", id, Branches.Where(one => section is null || one.Section == section), one => one.Id);
+        Find("branches in service", id, section, Branches, one => (one.Section, one.Id));
 
     /// <summary>The flow of a source, by its id; where sections share the id, name the section too.</summary>
     /// <exception cref="UnknownIdException">There is no such source in service.</exception>
+    /// <exception cref="ArgumentException">Sources of several sections have the id.</exception>
     public SourceFlow Source(string id, string? section = null) =>
-        Find(section ?? "sources in service", id, Sources.Where(one => section is null || one.Section == section), one => one.Id);
+        Find("sources in service", id, section, Sources, one => (one.Section, one.Id));
 
-    /// <summary>The flow of a closed coupler, by its id.</summary>
+    /// <summary>The flow of a closed coupler or a bridged series capacitor, by its id; where both share it, name the section too.</summary>
     /// <exception cref="UnknownIdException">There is no such coupler closed and in service.</exception>
-    public CouplerFlow Coupler(string id) => Find("closed couplers", id, Couplers, one => one.Id);
+    /// <exception cref="ArgumentException">A coupler and a capacitor have the id.</exception>
+    public CouplerFlow Coupler(string id, string? section = null) =>
+        Find("closed couplers", id, section, Couplers, one => (one.Section, one.Id));
 
-    private static T Find<T>(string kind, string id, IEnumerable<T> among, Func<T, string> idOf) where T : class =>
-        among.FirstOrDefault(one => idOf(one) == Guard.NotNull(id)) ?? throw new UnknownIdException(kind, id, among.Select(idOf));
+    private static T Find<T>(string kind, string id, string? section, IReadOnlyList<T> among, Func<T, (string Section, string Id)> address)
+    {
+        Guard.NotNull(id);
+        var found = among.Where(one => address(one).Id == id && (section is null || address(one).Section == section)).ToList();
+        return found.Count switch
+        {
+            1 => found[0],
+            0 => throw new UnknownIdException(section ?? kind, id, among.Select(one => address(one).Id)),
+            _ => throw new ArgumentException(
+                $"\"{id}\" stands in {string.Join(" and ", found.Select(one => address(one).Section))}: name the section too", nameof(id)),
+        };
+    }
 }
 
 /// <summary>The voltage of a bus during a fault.</summary>
@@ -92,12 +111,12 @@ public sealed record BranchEnd(string BusId, Complex IntoBranchKa);
 /// <param name="IntoBusKa">The current from the source into the bus in kA.</param>
 public sealed record SourceFlow(string Section, string Id, string BusId, Complex IntoBusKa);
 
-/// <summary>The current through a closed coupler.</summary>
-/// <param name="Id">The coupler's id.</param>
+/// <summary>The current through a closed coupler, or through a series capacitor that its voltage-limiting device bridges.</summary>
+/// <param name="Section">Its section: <c>bus_couplers</c> or <c>series_capacitors</c>.</param>
+/// <param name="Id">Its id.</param>
 /// <param name="FromBusId">Its from bus.</param>
 /// <param name="ToBusId">Its to bus.</param>
 /// <param name="FromToKa">
-/// The current from the from bus to the to bus in kA; null where closed couplers make a ring, in which it divides by impedances that are
-/// not known.
+/// The current from the from bus to the to bus in kA; null where joints make a ring, in which it divides by impedances that are not known.
 /// </param>
-public sealed record CouplerFlow(string Id, string FromBusId, string ToBusId, Complex? FromToKa);
+public sealed record CouplerFlow(string Section, string Id, string FromBusId, string ToBusId, Complex? FromToKa);

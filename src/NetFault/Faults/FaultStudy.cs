@@ -23,6 +23,7 @@ public sealed class FaultStudy
     /// <param name="method">The method, such as <see cref="MachineDecrement"/>.</param>
     /// <exception cref="ArgumentNullException">An argument is null.</exception>
     /// <exception cref="SingularNetworkException">The network's equations have no solution.</exception>
+    /// <exception cref="MethodDataException">The network lacks data that the method needs.</exception>
     public FaultStudy(Network network, FaultMethod method)
     {
         Network = Guard.NotNull(network);
@@ -77,11 +78,14 @@ public sealed class FaultStudy
     /// <param name="instant">Which instant's network; the initial one by default.</param>
     /// <param name="faultImpedanceOhm">Impedance of the fault itself in ohm; 0, a bolted fault, by default. Its parts must not be negative.</param>
     /// <exception cref="UnknownIdException">There is no such bus; the exception names the nearest ids.</exception>
-    /// <exception cref="ArgumentOutOfRangeException">A part of the fault impedance is negative or not finite.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">
+    /// A part of the fault impedance is negative or not finite; or the method knows no such instant, as IEC 60909-0 no transient one.
+    /// </exception>
     public FaultFlows FlowsAt(string busId, FaultInstant instant = FaultInstant.Initial, Complex faultImpedanceOhm = default)
     {
         var bus = BusIndex(busId);
-        return new FlowSolution(_context, _networks.Circuit, _networks.At(instant), instant).Solve(bus, Passive(faultImpedanceOhm));
+        Guard.OneOf(instant, FaultInstant.Initial, FaultInstant.Transient, FaultInstant.SteadyState);
+        return new FlowSolution(_context, _networks.Circuit, instant).Solve(bus, Passive(faultImpedanceOhm));
     }
 
     /// <summary>
@@ -89,13 +93,19 @@ public sealed class FaultStudy
     /// networks; <see cref="EveryBus"/> never needs it.
     /// </summary>
     /// <param name="instant">Which instant's network; the initial one by default.</param>
-    public Matrix<Complex> BusImpedanceMatrix(FaultInstant instant = FaultInstant.Initial) =>
-        StudyMatrices.Impedance(_networks.Circuit, _networks.At(instant));
+    /// <param name="cancellationToken">Stops the work between columns.</param>
+    /// <exception cref="InvalidOperationException">There are more than 20,000 nodes, which would take over 6 GB.</exception>
+    /// <exception cref="OperationCanceledException">The work was stopped.</exception>
+    public Matrix<Complex> BusImpedanceMatrix(FaultInstant instant = FaultInstant.Initial, CancellationToken cancellationToken = default) =>
+        StudyMatrices.Impedance(_networks.Circuit, _networks.At(instant), cancellationToken);
 
     /// <summary>The bus admittance matrix per unit, sparse, one row for each of <see cref="Nodes"/>; complex symmetric.</summary>
     /// <param name="instant">Which instant's network; the initial one by default.</param>
     public Matrix<Complex> AdmittanceMatrix(FaultInstant instant = FaultInstant.Initial) =>
         StudyMatrices.Admittance(_networks.Matrix, _networks.At(instant));
+
+    /// <summary>What the study's results share.</summary>
+    internal StudyContext Context => _context;
 
     private int BusIndex(string busId)
     {

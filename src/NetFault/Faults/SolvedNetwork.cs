@@ -8,10 +8,14 @@ internal sealed class SolvedNetwork
 {
     private readonly CircuitMatrix _matrix;
     private readonly LdlFactor _factor;
+
+    /// <summary>At another frequency than the rated one a resonance only means that there is no R/X to be had.</summary>
+    private readonly bool _refusesResonance;
     private readonly Lazy<DrivingPointImpedances> _drivingPoints;
 
-    private SolvedNetwork(CircuitMatrix matrix, AdmittanceValues values)
+    private SolvedNetwork(CircuitMatrix matrix, AdmittanceValues values, bool refusesResonance)
     {
+        _refusesResonance = refusesResonance;
         _matrix = matrix;
         Values = values;
         _factor = matrix.Factor(values);
@@ -29,18 +33,24 @@ internal sealed class SolvedNetwork
 
     /// <summary>Factors a network of a method.</summary>
     public static SolvedNetwork Of(CircuitMatrix matrix, FaultMethod method, NetworkVariant variant) =>
-        new(matrix, AdmittanceValues.Of(matrix, method.SourceImpedances(matrix.Circuit, variant, log: null), variant));
+        new(matrix, AdmittanceValues.Of(matrix, method.SourceImpedances(matrix.Circuit, variant, log: null), variant), variant.FrequencyRatio.Equals(1.0));
+
+    /// <summary>Factors a network with these impedances.</summary>
+    public static SolvedNetwork Of(CircuitMatrix matrix, Complex?[] sources, Complex[] branches, NetworkVariant variant) =>
+        new(matrix, AdmittanceValues.Of(matrix, sources, branches, variant), variant.FrequencyRatio.Equals(1.0));
 
     /// <summary>Column k of Zbus: the voltages of all nodes for a unit current into node k.</summary>
     /// <param name="node">k.</param>
-    /// <param name="residual">Normwise backward error of the column.</param>
+    /// <param name="residual">Normwise backward error of the column, or what rounding of Ykk alone may cost where that is more.</param>
     public Complex[] Column(int node, out double residual)
     {
         var column = new Complex[_matrix.Circuit.NodeCount];
         column[node] = Complex.One;
         residual = _matrix.Guarded(() => _factor.SolveRefined(
             Values.Diagonal, Values.OffDiagonal, column, new SolveScratch(_factor.Order)));
-        _matrix.RefuseResonance(Values, column.AsSpan(node, 1), node);
+        if (_refusesResonance)
+            _matrix.RefuseResonance(Values, column.AsSpan(node, 1), node);
+        residual = Math.Max(residual, 2.2e-16 * Complex.Abs(Values.Diagonal[node]) * Complex.Abs(column[node]));
         return column;
     }
 
@@ -50,12 +60,15 @@ internal sealed class SolvedNetwork
     private DrivingPointImpedances FindDrivingPoints() => _matrix.Guarded(() =>
     {
         var impedances = SelectedInverse.CheckedDiagonalOf(_factor, Values.Diagonal, Values.OffDiagonal, out var health);
-        _matrix.RefuseResonance(Values, impedances);
-        return new DrivingPointImpedances(impedances, health.WorstResidual);
+        if (_refusesResonance)
+            _matrix.RefuseResonance(Values, impedances);
+        return new DrivingPointImpedances(impedances, Math.Max(health.WorstResidual, health.WorstRounding));
     });
 }
 
 /// <summary>The driving-point impedances Zkk of all nodes.</summary>
 /// <param name="Impedances">Zkk by node, per unit.</param>
-/// <param name="WorstResidual">The largest |Σj Ykj·Zjk − 1| over the nodes: 0 for an exact solution.</param>
+/// <param name="WorstResidual">
+/// The largest |Σj Ykj·Zjk − 1| over the nodes, or what rounding of the admittances alone may cost where that is more.
+/// </param>
 internal sealed record DrivingPointImpedances(Complex[] Impedances, double WorstResidual);

@@ -6,12 +6,17 @@ namespace NetFault;
 /// <summary>The matrices of a study as Math.NET ones, for those who go on calculating with them.</summary>
 internal static class StudyMatrices
 {
+    /// <summary>Most nodes of a dense matrix.</summary>
+    private const int LargestDense = 20_000;
+
     /// <summary>Zbus, column by column.</summary>
-    public static Matrix<Complex> Impedance(Circuit circuit, SolvedNetwork network)
+    public static Matrix<Complex> Impedance(Circuit circuit, SolvedNetwork network, CancellationToken cancellation)
     {
         var order = circuit.NodeCount;
+        if (order > LargestDense)
+            throw new InvalidOperationException($"a dense matrix of {order} nodes takes {16e-9 * order * order:0} GB; EveryBus gives Zkk of every bus without it");
         var matrix = Matrix<Complex>.Build.Dense(order, order);
-        Parallel.For(0, order, node => matrix.SetColumn(node, network.Column(node, out _)));
+        Parallel.For(0, order, new ParallelOptions { CancellationToken = cancellation }, node => matrix.SetColumn(node, network.Column(node, out _)));
         return matrix;
     }
 

@@ -20,6 +20,9 @@ internal abstract class FaultCurrents
     /// <summary>X/R at the fault.</summary>
     public abstract ReactanceRatio Ratio { get; }
 
+    /// <summary>How the DC component decays.</summary>
+    public virtual DcDecayRule DcDecayRule => Ratio.XOverR.HasValue ? DcDecayRule.ByXOverR : DcDecayRule.Undamped;
+
     /// <summary>How the AC component is taken over time.</summary>
     public abstract AcComponentRule AcComponentRule { get; }
 
@@ -44,4 +47,7 @@ internal abstract class CurrentsOfMethod
 {
     /// <summary>The currents of a fault at a bus, from the impedances seen there in the method's networks.</summary>
     public abstract FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen);
+
+    /// <summary>What the flows of a fault at a bus are found from.</summary>
+    public abstract FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant);
 }

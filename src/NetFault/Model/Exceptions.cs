@@ -6,7 +6,7 @@ public sealed class InvalidNetworkException : Exception
     internal InvalidNetworkException(IReadOnlyList<Diagnostic> diagnostics)
         : base(DiagnosticText.Render("The network is not valid.", diagnostics))
     {
-        Diagnostics = diagnostics;
+        Diagnostics = diagnostics.ToList().AsReadOnly();
     }
 
     /// <summary>Every problem, warnings included.</summary>
@@ -26,7 +26,7 @@ public sealed class UnknownIdException : ArgumentException
     {
         Section = section;
         Id = id;
-        NearestIds = nearest;
+        NearestIds = nearest.ToList().AsReadOnly();
     }
 
     /// <summary>The section that was searched, such as <c>buses</c>.</summary>
@@ -43,17 +43,21 @@ public sealed class UnknownIdException : ArgumentException
 }
 
 /// <summary>
-/// The network's equations have no solution, or an infinite current for one: reactances of opposite sign cancel to working precision.
+/// The network's equations have no solution, or an infinite current for one: reactances of opposite sign cancel to working precision, or
+/// impedances differ by more than that.
 /// </summary>
 public sealed class SingularNetworkException : Exception
 {
-    internal SingularNetworkException(IReadOnlyList<string> busIds, Exception? inner)
+    internal SingularNetworkException(IReadOnlyList<string> busIds, bool hasNegativeReactance, Exception? inner)
         : base(
-            $"The network has no solution: at bus {string.Join(" = ", busIds.Select(id => $"\"{id}\""))} the admittances cancel to working "
-            + "precision. Look for negative reactances (series compensation, equivalent legs) that are equal and opposite to others there.",
+            $"The network has no solution at bus {string.Join(" = ", busIds.Select(id => $"\"{id}\""))}: "
+            + (hasNegativeReactance
+                ? "the admittances there cancel to working precision. Look for negative reactances (series compensation, equivalent legs) that are "
+                    + "equal and opposite to others."
+                : "impedances there differ by more than working precision holds. Look for values in wrong units."),
             inner)
     {
-        BusIds = busIds;
+        BusIds = busIds.ToList().AsReadOnly();
     }
 
     /// <summary>The bus, or the buses joined by closed couplers, at which the solution broke down.</summary>

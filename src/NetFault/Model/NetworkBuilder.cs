@@ -32,14 +32,18 @@ public sealed class NetworkBuilder
     /// <exception cref="ArgumentNullException">An element is null.</exception>
     public NetworkBuilder Set(params NetworkElement[] elements)
     {
+        var places = new Dictionary<(string Section, string? Id), int>();
+        for (var i = _elements.Count - 1; i >= 0; i--)
+            places[(_elements[i].Section, _elements[i].Id)] = i;
         foreach (var element in Guard.NotNull(elements))
         {
-            Guard.NotNull(element, nameof(elements));
-            var at = _elements.FindIndex(one => one.Id == element.Id && one.Section == element.Section);
-            if (at < 0)
-                _elements.Add(element);
-            else
+            if (places.TryGetValue((Guard.NotNull(element, nameof(elements)).Section, element.Id), out var at))
+            {
                 _elements[at] = element;
+                continue;
+            }
+            places.Add((element.Section, element.Id), _elements.Count);
+            _elements.Add(element);
         }
         return this;
     }
@@ -52,7 +56,9 @@ public sealed class NetworkBuilder
         var found = new List<Diagnostic>();
         foreach (var element in _elements)
         {
-            if (!draft.Add(element))
+            if (element.Id is null)
+                found.Add(Problems.BlankId(element.Section).At(element.Section, null, null));
+            else if (!draft.Add(element))
                 found.Add(Problems.DuplicateId(element.Section, element.Id).At(element.Section, element.Id, null));
         }
         var network = Complete(draft, found, reportedKeys: null);

@@ -10,12 +10,14 @@ internal static class CsvReport
 
     public static void Write(TextWriter writer, FaultStudy study, IReadOnlyList<BusFault> faults, ReportOptions options)
     {
+        var columns = ReportColumn.Of(study.Method, options).Where(column => column.Name.Length > 0).ToList();
+        // All values first: a report that cannot be finished is not begun.
+        var rows = faults.Select(fault => columns.Select(column => Cell(column.Value(fault))).ToArray()).ToList();
         if (options.CsvComments)
             WriteComments(writer, study);
-        var columns = ReportColumn.Of(study.Method, options).Where(column => column.Name.Length > 0).ToList();
         WriteRow(writer, columns.Select(column => column.Name));
-        foreach (var fault in faults)
-            WriteRow(writer, columns.Select(column => Cell(column.Value(fault))));
+        foreach (var row in rows)
+            WriteRow(writer, row);
     }
 
     private static void WriteComments(TextWriter writer, FaultStudy study)
@@ -39,7 +41,7 @@ internal static class CsvReport
     private static string Cell(object? value) => value switch
     {
         null => string.Empty,
-        double number => number.ToString("R", CultureInfo.InvariantCulture),
+        double number => RoundTrip.Text(number),
         bool truth => truth ? "true" : "false",
         _ => Convert.ToString(value, CultureInfo.InvariantCulture) ?? string.Empty,
     };

@@ -11,6 +11,9 @@ internal static class JsonReport
 
     public static void Write(Stream stream, FaultStudy study, IReadOnlyList<BusFault> faults, ReportOptions options)
     {
+        var columns = ReportColumn.Of(study.Method, options).Where(column => column.Name.Length > 0).ToList();
+        // All values first: a report that cannot be finished is not begun.
+        var rows = faults.Select(fault => columns.Select(column => column.Value(fault)).ToArray()).ToList();
         using var json = new Utf8JsonWriter(stream, Layout);
         json.WriteStartObject();
         json.WriteString("title", study.Network.Title);
@@ -20,7 +23,7 @@ internal static class JsonReport
         json.WriteString("caution", ReportTexts.Caution);
         WriteAssumptions(json, study);
         WriteWarnings(json, study.Network);
-        WriteFaults(json, study, faults, options);
+        WriteRows(json, columns, rows);
         json.WriteEndObject();
     }
 
@@ -58,15 +61,14 @@ internal static class JsonReport
         json.WriteEndArray();
     }
 
-    private static void WriteFaults(Utf8JsonWriter json, FaultStudy study, IReadOnlyList<BusFault> faults, ReportOptions options)
+    private static void WriteRows(Utf8JsonWriter json, IReadOnlyList<ReportColumn> columns, List<object?[]> rows)
     {
-        var columns = ReportColumn.Of(study.Method, options).Where(column => column.Name.Length > 0).ToList();
         json.WriteStartArray("buses");
-        foreach (var fault in faults)
+        foreach (var row in rows)
         {
             json.WriteStartObject();
-            foreach (var column in columns)
-                WriteValue(json, column.Name, column.Value(fault));
+            for (var i = 0; i < row.Length; i++)
+                WriteValue(json, columns[i].Name, row[i]);
             json.WriteEndObject();
         }
         json.WriteEndArray();

@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Numerics;
 using MathNet.Numerics.LinearAlgebra;
 
@@ -30,12 +29,15 @@ public static class MatrixMarket
         writer.Write($"%%MatrixMarket matrix {(sparse ? "coordinate" : "array")} complex symmetric\n");
         writer.Write($"% {ReportTexts.Caution}\n");
         foreach (var node in nodes ?? [])
-            writer.Write($"% row {node.Index + 1}: {node.ToString().Replace('\n', ' ').Replace('\r', ' ')}\n");
+            writer.Write($"% row {node.Index + 1}: {Shortened(node.ToString())}\n");
         if (sparse)
             WriteCoordinates(writer, matrix);
         else
             WriteArray(writer, matrix);
     }
+
+    /// <summary>The format knows no lines beyond 1024 characters.</summary>
+    private static string Shortened(string buses) => buses.Length <= 1000 ? buses : buses.Substring(0, 996) + " ...";
 
     private static void WriteCoordinates(TextWriter writer, Matrix<Complex> matrix)
     {
@@ -56,5 +58,5 @@ public static class MatrixMarket
     }
 
     private static string Text(Complex value) =>
-        value.Real.ToString("R", CultureInfo.InvariantCulture) + " " + value.Imaginary.ToString("R", CultureInfo.InvariantCulture);
+        RoundTrip.Text(value.Real) + " " + RoundTrip.Text(value.Imaginary);
 }

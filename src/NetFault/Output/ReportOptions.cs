@@ -8,14 +8,14 @@ public sealed record ReportOptions
 
     /// <summary>
     /// The times after the beginning of the fault, in seconds, at which DC component and asymmetrical RMS are given: commonly those of contact
-    /// parting. Default 0.05 s and 0.1 s.
+    /// parting. One that is given twice counts once. Default 0.05 s and 0.1 s.
     /// </summary>
     /// <exception cref="ArgumentOutOfRangeException">A time is negative or not finite.</exception>
     public IReadOnlyList<double> InstantsSeconds
     {
         get => _instantsSeconds;
         init => _instantsSeconds = Array.AsReadOnly(
-            Guard.NotNull(value, nameof(InstantsSeconds)).Select(one => Guard.NotNegative(one, nameof(InstantsSeconds))).ToArray());
+            Guard.NotNull(value, nameof(InstantsSeconds)).Select(one => Guard.NotNegative(one, nameof(InstantsSeconds))).Distinct().ToArray());
     }
 
     /// <summary>

@@ -6,8 +6,12 @@ namespace NetFault.Sparse;
 /// <param name="WorstResidual">max over k of |Σ_j A_kj·Z_jk − 1|.</param>
 /// <param name="WorstNode">Its node, in original numbering; −1 for a matrix without rows.</param>
 /// <param name="Suspects">Nodes whose residual is more than rounding explains.</param>
+/// <param name="WorstRounding">
+/// max over k of ε·Σ_j |A_kj·Z_jk|: how far rounding in the entries of A alone may move Z_kk, relative. Large where a small entry is lost beside a
+/// large one on the diagonal, which no residual shows.
+/// </param>
 /// <param name="Repaired">Nodes that were solved anew by refinement before this check.</param>
-internal sealed record InverseHealth(double WorstResidual, int WorstNode, int[] Suspects, int Repaired = 0)
+internal sealed record InverseHealth(double WorstResidual, int WorstNode, int[] Suspects, double WorstRounding, int Repaired = 0)
 {
     /// <summary>Residuals below this are good whatever the sum's terms are.</summary>
     private const double Threshold = 1e-11;
@@ -50,10 +54,12 @@ internal sealed record InverseHealth(double WorstResidual, int WorstNode, int[] 
     {
         double worst = -1;
         int worstNode = -1;
+        double largest = 0;
         List<int> suspects = [];
         for (int k = 0; k < sum.Length; k++)
         {
             double residual = Complex.Abs(sum[k]);
+            largest = Math.Max(largest, size[k]);
             if (!(residual <= worst))
             {
                 worst = double.IsNaN(residual) ? double.PositiveInfinity : residual;
@@ -66,6 +72,6 @@ internal sealed record InverseHealth(double WorstResidual, int WorstNode, int[] 
             }
         }
 
-        return new InverseHealth(Math.Max(worst, 0), worstNode, [.. suspects]);
+        return new InverseHealth(Math.Max(worst, 0), worstNode, [.. suspects], 2.2e-16 * largest);
     }
 }

@@ -99,9 +99,11 @@ public class NetworkBuilderTests
         ("NF203", "source_current_ka", new FullConverterSource { Id = "F", Bus = "A", SourceCurrentKa = -1 }),
         ("NF301", "bus", Feeder with { Bus = "a" }),
         ("NF301", "to", Cable with { To = "BB" }),
+        ("NF221", "bus", Feeder with { Bus = null! }),
+        ("NF221", "from", Cable with { From = null! }),
         ("NF301", "mv", Three with { Mv = "X" }),
         ("NF302", "unit_transformer", Machine with { UnitTransformer = "TT" }),
-        ("NF303", "unit_transformer", Machine with { Bus = "B" }),
+        ("NF303", "unit_transformer", Machine with { Bus = "Far" }),
         ("NF304", "to", Coupler with { To = "A" }),
         ("NF304", "lv", Unit with { Lv = "H", RatedLvKv = 110 }),
         ("NF304", "mv", Three with { Mv = "H", RatedKv = new(110, 110, null) }),
@@ -155,7 +157,8 @@ public class NetworkBuilderTests
     {
         var catalogue = File.ReadAllText(TestFiles.Repository("src/NetFault/Model/Checks/Problems.cs"));
         var ids = Regex.Matches(catalogue, "new\\(\"(NF[0-9]{3})\"").Select(one => one.Groups[1].Value);
-        ids.Except(Rules.Select(rule => rule.Id)).Should().BeEquivalentTo("NF218", "NF306", "NF307", "NF308", "NF405", "NF406");
+        ids.Except(Rules.Select(rule => rule.Id)).Should().BeEquivalentTo(
+            "NF218", "NF306", "NF307", "NF308", "NF309", "NF405", "NF406");
     }
 
     [Fact]
@@ -169,7 +172,9 @@ public class NetworkBuilderTests
     }
 
     private static NetworkBuilder Sound() =>
-        new NetworkBuilder { FrequencyHz = 50 }.Add(A, B, H, Feeder, Machine, Motor, Unit, Three, Cable, Reactor, Coupler);
+        new NetworkBuilder { FrequencyHz = 50 }.Add(
+            A, B, H, Feeder, Machine, Motor, Unit, Three, Cable, Reactor, Coupler,
+            new Bus { Id = "Far", NominalKv = 11 }, Cable with { Id = "to Far", From = "B", To = "Far" });
 
     private static IReadOnlyList<Diagnostic> Problems(Action<NetworkBuilder> change)
     {

@@ -55,15 +55,11 @@ public sealed class FlowReviewTests
             new Iec60909 { LeaveOutSmallMotors = true }),
         "A");
 
-    /// <summary>Buses behind a closed coupler are one node: one voltage, one short-circuit current.</summary>
+    /// <summary>Buses behind a closed coupler are one node with one voltage factor: two tolerances there are refused.</summary>
     [Fact]
-    public void Buses_joined_by_a_coupler_have_one_fault_current_whatever_their_tolerance()
-    {
-        var network = Build(Bus("A", 0.4, 6), Bus("B", 0.4, 10), Feeder("A", 20), Coupler("C", "A", "B"));
-        var study = new FaultStudy(network, new Iec60909());
-        study.At("A").InitialSymmetricalKa.Should().BeApproximately(study.At("B").InitialSymmetricalKa, 1e-9);
-        study.FlowsAt("A").Voltage("B").LineToLineKv.Should().BeApproximately(0.0, 1e-9, "B is the faulted node");
-    }
+    public void Buses_of_unequal_tolerance_are_not_joined_by_a_closed_coupler() =>
+        FluentActions.Invoking(() => Build(Bus("A", 0.4, 6), Bus("B", 0.4, 10), Feeder("A", 20), Coupler("C", "A", "B")))
+            .Should().Throw<InvalidNetworkException>().Which.Diagnostics.Should().ContainSingle(one => one.Id == "NF309");
 
     /// <summary>Nothing feeds the low-voltage bus but the transformer from the faulted bus: during a bolted fault there its voltage is 0.</summary>
     [Theory]

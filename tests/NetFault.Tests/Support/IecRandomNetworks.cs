@@ -9,6 +9,7 @@ internal sealed class IecRandomNetworks
     private static readonly double[] Levels = [220, 110, 33, 11, 6, 0.4];
 
     private readonly Random _random;
+    private readonly double? _tolerance;    // one for all, for couplers may join any two
     private readonly NetworkBuilder _builder;
     private readonly List<Bus> _buses = [];
     private readonly Dictionary<double, double> _ratedShare = [];
@@ -19,6 +20,7 @@ internal sealed class IecRandomNetworks
     private IecRandomNetworks(int seed, bool equalRatios, bool drives)
     {
         _random = new Random(seed);
+        _tolerance = _random.Next(3) switch { 0 => 6, 1 => 10, _ => null };
         _equalRatios = equalRatios;
         _drives = drives;
         _builder = new NetworkBuilder { FrequencyHz = _random.Next(2) == 0 ? 50 : 60, BaseMva = 1 + _random.Next(200) };
@@ -60,7 +62,7 @@ internal sealed class IecRandomNetworks
         var bus = new Bus
         {
             Id = Id("B"), NominalKv = kv, InService = certain || _random.Next(40) > 0,
-            LowVoltageTolerancePercent = kv > 1 ? null : _random.Next(3) switch { 0 => 6, 1 => 10, _ => null },
+            LowVoltageTolerancePercent = kv > 1 ? null : _tolerance,
         };
         _builder.Add(bus);
         return bus;

@@ -9,15 +9,16 @@ namespace NetFault;
 internal sealed class ConverterCurrents
 {
     private readonly StudyNetworks _networks;
+    private readonly bool _maximum;
     private readonly Lazy<double[]?> _initial;
     private readonly Lazy<double[]?> _steady;
 
     public ConverterCurrents(StudyNetworks networks, ShortCircuitCase which)
     {
         _networks = networks;
-        var maximum = which == ShortCircuitCase.Maximum;
-        _initial = new(() => Sum(Iec60909.Initial, source => source is FullConverterSource one ? maximum ? one.SourceCurrentKa : Least(one.SteadyStateKa) : 0.0));
-        _steady = new(() => Sum(Iec60909.WithoutMotors, source => maximum ? Most(source) : Least(SteadyState(source))));
+        _maximum = which == ShortCircuitCase.Maximum;
+        _initial = new(() => Sum(Iec60909.Initial, FaultInstant.Initial));
+        _steady = new(() => Sum(Iec60909.WithoutMotors, FaultInstant.SteadyState));
     }
 
     /// <summary>Σ |Zkj|·IskPFj per unit at a node.</summary>
@@ -35,33 +36,37 @@ internal sealed class ConverterCurrents
             log?.Add(source, "steady_state_ka", "the source current is kept for the steady state");
     }
 
-    /// <summary>In the minimum case only what is there at the least counts.</summary>
-    private static double Least(MaxMin? steadyState) => steadyState?.Min ?? 0.0;
-
-    private static double Most(NetworkElement source) =>
-        SteadyState(source)?.Max ?? (source is FullConverterSource converter ? converter.SourceCurrentKa : 0.0);
-
-    /// <summary>The steady-state current of a source that gives one: full-size converters and doubly fed generators.</summary>
-    private static MaxMin? SteadyState(NetworkElement source) => source switch
-    {
-        FullConverterSource converter => converter.SteadyStateKa,
-        DoublyFedGenerator generator => generator.SteadyStateKa,
-        _ => null,
-    };
-
-    private double[]? Sum(NetworkVariant variant, Func<NetworkElement, double> currentKa)
+    /// <summary>The currents of their own that sources feed at an instant, per unit at their buses.</summary>
+    public IReadOnlyList<(int Source, double CurrentPu)> Injections(FaultInstant instant)
     {
         var network = _networks.Circuit.Network;
-        var perNode = new Dictionary<int, double>();
-        foreach (var source in _networks.Circuit.Sources)
+        var injections = new List<(int Source, double CurrentPu)>();
+        for (var i = 0; i < _networks.Circuit.Sources.Length; i++)
         {
-            var current = currentKa(network.Elements[source.Element]);
-            if (current <= 0.0)
-                continue;
-            var bus = network.Buses[network.Topology.TerminalBus(source.Element, 0)];
-            current /= PerUnit.BaseKa(bus.NominalKv, network.BaseMva);
-            perNode[source.Node] = (perNode.TryGetValue(source.Node, out var sum) ? sum : 0.0) + current;
+            var element = _networks.Circuit.Sources[i].Element;
+            var currentKa = CurrentKa(network.Elements[element], instant);
+            if (currentKa > 0.0)
+                injections.Add((i, currentKa / PerUnit.BaseKa(network.Buses[network.Topology.TerminalBus(element, 0)].NominalKv, network.BaseMva)));
         }
+        return injections;
+    }
+
+    /// <summary>In the minimum case only what is there at the least counts.</summary>
+    private double CurrentKa(NetworkElement source, FaultInstant instant) => (source, instant) switch
+    {
+        (FullConverterSource converter, FaultInstant.Initial) => _maximum ? converter.SourceCurrentKa : Least(converter.SteadyStateKa),
+        (FullConverterSource converter, _) => _maximum ? converter.SteadyStateKa?.Max ?? converter.SourceCurrentKa : Least(converter.SteadyStateKa),
+        (DoublyFedGenerator generator, FaultInstant.SteadyState) => _maximum ? generator.SteadyStateKa?.Max ?? 0.0 : Least(generator.SteadyStateKa),
+        _ => 0.0,
+    };
+
+    private static double Least(MaxMin? steadyState) => steadyState?.Min ?? 0.0;
+
+    private double[]? Sum(NetworkVariant variant, FaultInstant instant)
+    {
+        var perNode = Injections(instant)
+            .GroupBy(injection => _networks.Circuit.Sources[injection.Source].Node, injection => injection.CurrentPu)
+            .ToDictionary(group => group.Key, group => group.Sum());
         return perNode.Count == 0 ? null : Sum(_networks.Of(variant), perNode);
     }
 

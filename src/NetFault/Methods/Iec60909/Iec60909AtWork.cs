@@ -65,6 +65,18 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
         new Iec60909Currents(this, context, context.Network.Buses[bus], seen);
 
+    public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant)
+    {
+        var at = context.Network.Buses[bus];
+        var node = Circuit.NodeOfBus[bus];
+        var driving = Inside.DrivingVoltagePu(node, at, Method.Case) ?? Method.DrivingVoltagePu(at);
+        var variant = Method.NetworkAt(instant);
+        if (Method.LeaveOutSmallMotors && Motors.AreSmall(node, driving, driving / Complex.Abs(Seen(Iec60909.WithoutMotors, node))))
+            variant = Iec60909.WithoutMotors;
+        var network = Inside.Of(node)?.Solved(Method, variant) ?? Networks.Of(variant);
+        return new FlowBasis(network, driving, Converters.Injections(instant));
+    }
+
     /// <summary>Whether each source feeds a node by a way of its own.</summary>
     public bool IsRadial(int node, bool withMotors) => (withMotors ? _radial : _radialWithoutMotors).Value[node];
 
@@ -110,14 +122,10 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     }
 
     /// <summary>Zkk in a network that is not among the method's standing ones, with the fault's own impedance.</summary>
-    public Complex Seen(NetworkVariant variant, in SeenImpedances seen)
-    {
-        var network = Networks.Of(variant);
-        var z = seen.CoversEveryBus || network.HasDrivingPoints
-            ? network.DrivingPoints.Impedances[seen.Node]
-            : network.Column(seen.Node, out _)[seen.Node];
-        return Corrected(variant, seen.Node, z + variant.OfFault(seen.FaultPu));
-    }
+    public Complex Seen(NetworkVariant variant, in SeenImpedances seen) => Seen(variant, seen.Node) + variant.OfFault(seen.FaultPu);
+
+    private Complex Seen(NetworkVariant variant, int node) =>
+        Corrected(variant, node, Networks.Of(variant).DrivingPoints.Impedances[node]);
 
     /// <summary>An impedance with the factors for faults inside a power station unit, where the node is in one.</summary>
     public Complex Corrected(NetworkVariant variant, int node, Complex z) => Inside.Of(node) is { } unit ? unit.Corrected(variant, node, z) : z;

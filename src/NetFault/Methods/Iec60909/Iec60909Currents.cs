@@ -9,6 +9,10 @@ internal sealed class Iec60909Currents : FaultCurrents
     private readonly StudyContext _context;
     private readonly SeenImpedances _seen;
 
+    // Made when first asked for; two threads may make the same twice, and either is right.
+    private SteadyStateCurrent? _steadyState;
+    private BreakingCurrent? _breaking;
+
     public Iec60909Currents(Iec60909AtWork work, StudyContext context, Bus bus, in SeenImpedances seen)
     {
         _work = work;
@@ -65,6 +69,10 @@ internal sealed class Iec60909Currents : FaultCurrents
             MotorsLeftOut ? _work.Seen(WithoutMotors(network), _seen) : _work.Corrected(network, Node, _seen[2]), network.FrequencyRatio)
         : _work.Smallest.At(Node, withMotors: !MotorsLeftOut);
 
+    /// <summary>By the real resistances: those of κ are fictitious.</summary>
+    public override DcDecayRule DcDecayRule =>
+        ReactanceRatio.Of(ImpedancePu.Real, ImpedancePu.Imaginary).XOverR.HasValue ? DcDecayRule.ByXOverR : DcDecayRule.Undamped;
+
     public override AcComponentRule AcComponentRule => AcComponentRule.BreakingCurrent;
 
     public override double PeakKa => PerUnit.Sqrt2 * (Kappa * ImpedancePartKa + ConverterPartKa);
@@ -86,7 +94,7 @@ internal sealed class Iec60909Currents : FaultCurrents
     }
 
     /// <summary>Ik with the rule it came by.</summary>
-    public SteadyStateCurrent SteadyState => SteadyStateCurrent.Of(_work, this);
+    public SteadyStateCurrent SteadyState => _steadyState ??= SteadyStateCurrent.Of(_work, this);
 
     public override double DcComponentKa(double seconds)
     {
@@ -100,7 +108,7 @@ internal sealed class Iec60909Currents : FaultCurrents
         seconds < DecrementFactors.ShortestDelaySeconds ? InitialSymmetricalKa : Breaking.Ka(seconds);
 
     /// <summary>Ib with the rule it comes by.</summary>
-    public BreakingCurrent Breaking => BreakingCurrent.Of(_work, this);
+    public BreakingCurrent Breaking => _breaking ??= BreakingCurrent.Of(_work, this);
 
     private static NetworkVariant WithoutMotors(NetworkVariant variant) => variant with { Instant = FaultInstant.SteadyState };
 

@@ -84,6 +84,7 @@ internal sealed class InsideUnit
     private readonly Iec60909Sources _sources;
     private readonly int _branch;
     private readonly ConcurrentDictionary<NetworkVariant, Lazy<RankTwoUpdate>> _updates = new();
+    private readonly ConcurrentDictionary<NetworkVariant, Lazy<SolvedNetwork>> _solved = new();
 
     public InsideUnit(StudyNetworks networks, Iec60909Sources sources, PowerStationUnit unit, int branch, int source)
     {
@@ -112,6 +113,19 @@ internal sealed class InsideUnit
 
     /// <summary>What the factors for faults inside change about Zki.</summary>
     public Complex Change(NetworkVariant variant, int k, int i) => Update(variant).Change(k, i);
+
+    /// <summary>The whole network with the factors for faults inside.</summary>
+    public SolvedNetwork Solved(FaultMethod method, NetworkVariant variant) =>
+        _solved.GetOrAdd(variant, one => new Lazy<SolvedNetwork>(() => Solve(method, one))).Value;
+
+    private SolvedNetwork Solve(FaultMethod method, NetworkVariant variant)
+    {
+        var sources = method.SourceImpedances(_networks.Circuit, variant, log: null);
+        var branches = (Complex[])_networks.Circuit.BranchImpedances.Clone();
+        sources[Source] *= MachineRatio;
+        branches[_branch] *= Unit.TransformerInside / Unit.Factor;
+        return SolvedNetwork.Of(_networks.Matrix, sources, branches, variant);
+    }
 
     private RankTwoUpdate Update(NetworkVariant variant) =>
         _updates.GetOrAdd(variant, one => new Lazy<RankTwoUpdate>(() => Make(one))).Value;

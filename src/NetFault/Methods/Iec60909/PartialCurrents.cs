@@ -32,12 +32,14 @@ internal sealed class PartialCurrents
     private readonly Iec60909AtWork _work;
     private readonly Lazy<Machine[]> _machines;
     private readonly Lazy<EntryTable> _table;
+    private readonly Lazy<EntryTable> _tableWithoutMotors;
 
     public PartialCurrents(Iec60909AtWork work)
     {
         _work = work;
         _machines = new(FindMachines);
-        _table = new(() => new EntryTable(work.Circuit.NodeCount, FindEntries()));
+        _table = new(() => new EntryTable(work.Circuit.NodeCount, FindEntries(Iec60909.Initial)));
+        _tableWithoutMotors = new(() => new EntryTable(work.Circuit.NodeCount, FindEntries(Iec60909.WithoutMotors)));
     }
 
     /// <summary>The shares that count at a fault.</summary>
@@ -46,8 +48,8 @@ internal sealed class PartialCurrents
         if (_machines.Value.Length == 0)
             return [];
         var inside = _work.Inside.Of(fault.Node);
-        var shares = inside is null && fault.CoversEveryBus && !fault.MotorsLeftOut
-            ? _table.Value.At(fault.Node).Select(entry => Share(fault.DrivingVoltagePu / fault.ImpedancePu, _machines.Value[entry.Machine], entry.Impedance))
+        var shares = inside is null && fault.CoversEveryBus
+            ? (fault.MotorsLeftOut ? _tableWithoutMotors : _table).Value.At(fault.Node).Select(entry => Share(fault.DrivingVoltagePu / fault.ImpedancePu, _machines.Value[entry.Machine], entry.Impedance))
             : FromColumn(
                 fault, inside, fault.MotorsLeftOut ? Iec60909.WithoutMotors : Iec60909.Initial, fault.DrivingVoltagePu / fault.ImpedancePu);
         return shares.Where(share => share.Ratio > SmallestRatio || IsDrive(share.Source)).ToList();
@@ -104,9 +106,9 @@ internal sealed class PartialCurrents
 
     private NetworkElement Element(int source) => _work.Circuit.Network.Elements[_work.Circuit.Sources[source].Element];
 
-    private List<MachineEntry> FindEntries()
+    private List<MachineEntry> FindEntries(NetworkVariant variant)
     {
-        var solved = _work.Networks.Of(Iec60909.Initial);
+        var solved = _work.Networks.Of(variant);
         var columns = solved.PrunedColumns();
         var all = new List<MachineEntry>();
         Parallel.For(
@@ -115,6 +117,8 @@ internal sealed class PartialCurrents
             (i, _, local) =>
             {
                 var machine = _machines.Value[i];
+                if (variant.Instant != FaultInstant.Initial && Element(machine.Source) is not SynchronousMachine)
+                    return local;
                 columns.Find(machine.Node, LeastShare(machine), local.Found, local.Scratch);
                 foreach (var (node, value) in local.Found)
                     local.Own.Add(new MachineEntry(node, i, value));

@@ -33,12 +33,14 @@ internal sealed class SmallestRatios
     public bool AllBelow(int node, double limit, bool withMotors) =>
         (withMotors ? _withMotors : _withoutMotors)[_islandOfNode[node]].Largest < limit;
 
-    /// <summary>Legs and capacitors without positive reactance are no branches that a ratio could be read from.</summary>
+    /// <summary>
+    /// Legs and capacitors of negative reactance are no branches that a ratio could be read from; a branch without any has an infinite one.
+    /// </summary>
     private void Add(Dictionary<int, (double Smallest, double Largest)> ratios, int node, Complex? impedance)
     {
-        if (impedance is not { Imaginary: > 0.0 } z)
+        if (impedance is not { Imaginary: >= 0.0 } z)
             return;
-        var ratio = z.Real / z.Imaginary;
+        var ratio = z.Imaginary > 0.0 ? z.Real / z.Imaginary : double.PositiveInfinity;
         ratios[_islandOfNode[node]] = ratios.TryGetValue(_islandOfNode[node], out var known)
             ? (Math.Min(known.Smallest, ratio), Math.Max(known.Largest, ratio))
             : (ratio, ratio);

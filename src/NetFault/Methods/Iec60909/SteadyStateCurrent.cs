@@ -21,7 +21,7 @@ public enum SteadyStateCurrentRule
 /// <summary>The steady-state current at a fault.</summary>
 /// <param name="Ka">Ik in kA.</param>
 /// <param name="Rule">The rule.</param>
-internal readonly record struct SteadyStateCurrent(double Ka, SteadyStateCurrentRule Rule)
+internal sealed record SteadyStateCurrent(double Ka, SteadyStateCurrentRule Rule)
 {
     public static SteadyStateCurrent Of(Iec60909AtWork work, Iec60909Currents fault)
     {

@@ -128,5 +128,8 @@ public sealed record MachineDecrement : FaultMethod
     {
         public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
             new MachineDecrementCurrents(context, context.Network.Buses[bus], seen);
+
+        public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant) =>
+            new(context.Networks.At(instant), context.Method.DrivingVoltagePu(context.Network.Buses[bus]), []);
     }
 }

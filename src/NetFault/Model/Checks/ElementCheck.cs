@@ -171,8 +171,13 @@ internal sealed class ElementCheck
             Say(hvKey, Problems.WindingsSwapped(hvKv, lvKv));
     }
 
-    public void BusReference(string key, string bus)
+    public void BusReference(string key, string? bus)
     {
+        if (bus is null)
+        {
+            Say(key, Problems.NoReference());
+            return;
+        }
         if (!_draft.HasBus(bus) && _draft.BusIds.Count > 0)
             Say(key, Problems.UnknownBus(bus, Nearest(bus, _draft.BusIds)));
     }
@@ -221,6 +226,16 @@ internal sealed class ElementCheck
     {
         _comparisons -= (long)known.Count * id.Length * id.Length;
         return _comparisons < 0 ? null : NearestNames.Suggestion(id, known);
+    }
+
+    /// <summary>Buses that a closed coupler makes one node have one voltage factor c.</summary>
+    public void SameTolerance(string from, string to)
+    {
+        if (_draft.FindBus(from) is not { NominalKv: <= 1.0 } one || _draft.FindBus(to) is not { NominalKv: <= 1.0 } other)
+            return;
+        double oneTolerance = one.LowVoltageTolerancePercent ?? 10.0, otherTolerance = other.LowVoltageTolerancePercent ?? 10.0;
+        if (!oneTolerance.Equals(otherTolerance))
+            Say(null, Problems.UnequalTolerances(from, oneTolerance, to, otherTolerance));
     }
 
     private static bool OffByMoreThan(double factor, double one, double other) => one > factor * other || other > factor * one;

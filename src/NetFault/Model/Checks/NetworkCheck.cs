@@ -1,3 +1,5 @@
+using System.Globalization;
+
 namespace NetFault;
 
 /// <summary>The checks that a network passes before it is one, the same for a file and for a builder.</summary>
@@ -27,18 +29,22 @@ internal static class NetworkCheck
         return found;
     }
 
-    /// <summary>Whether an id can stand in one cell of a table: not too long, no line breaks, no control characters, no half characters.</summary>
+    /// <summary>Whether an id can stand in one cell of a table: not too long, and nothing in it that breaks the line or cannot be seen.</summary>
     private static bool IsLine(string id)
     {
         for (var i = 0; i < id.Length; i++)
         {
             if (char.IsHighSurrogate(id[i]) && i + 1 < id.Length && char.IsLowSurrogate(id[i + 1]))
                 i++;
-            else if (char.IsControl(id[i]) || char.IsSurrogate(id[i]) || id[i] is '\u2028' or '\u2029' or '\uFFFE' or '\uFFFF')
+            else if (!IsSeen(id[i]))
                 return false;
         }
-        return id.Length <= LongestId;
+        return id.Length <= LongestId && id.Trim().Length > 0;
     }
+
+    private static bool IsSeen(char one) => one == ' ' || CharUnicodeInfo.GetUnicodeCategory(one) is not (UnicodeCategory.Control
+        or UnicodeCategory.Format or UnicodeCategory.Surrogate or UnicodeCategory.OtherNotAssigned or UnicodeCategory.LineSeparator
+        or UnicodeCategory.ParagraphSeparator or UnicodeCategory.SpaceSeparator);
 
     /// <summary>The problems of the values that belong to the network as a whole.</summary>
     public static IEnumerable<Diagnostic> Header(NetworkDraft draft)

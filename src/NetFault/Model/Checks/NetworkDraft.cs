@@ -66,9 +66,9 @@ internal sealed class NetworkDraft
     /// <summary>The one string for an id of a bus that is here already: many elements name the same one.</summary>
     public string SameText(string busId) => _buses.ById.TryGetValue(busId, out var bus) && bus is not null ? bus.Id : busId;
 
-    public bool HasBus(string id) => _buses.ById.ContainsKey(id);
+    public bool HasBus(string? id) => id is not null && _buses.ById.ContainsKey(id);
 
-    public Bus? FindBus(string id) => _buses.ById.TryGetValue(id, out var bus) ? (Bus?)bus : null;
+    public Bus? FindBus(string? id) => id is not null && _buses.ById.TryGetValue(id, out var bus) ? (Bus?)bus : null;
 
     /// <summary>The element of a section with an id, or null. Changes nothing, so that a network may be asked from many threads.</summary>
     public NetworkElement? Find(string section, string id) =>

@@ -71,6 +71,13 @@ internal static class Problems
     public static Problem BadId(int longest) =>
         new("NF219", Error, $"an id has at most {Text(longest)} characters, and none that breaks the line or cannot be seen");
 
+    public static Problem NoReference() =>
+        new("NF221", Error, "names no bus", "give the id of a bus");
+
+    public static Problem UnequalTolerances(string from, double fromPercent, string to, double toPercent) =>
+        new("NF309", Error, $"closed, it makes one node of bus \"{Shown(from)}\" with a voltage tolerance of {Text(fromPercent)} percent and bus \"{Shown(to)}\" with {Text(toPercent)}",
+            "give both the same low_voltage_tolerance_percent");
+
     public static Problem UnknownBus(string id, string? nearest) =>
         new("NF301", Error, $"there is no bus \"{Shown(id)}\"", nearest ?? "add it to buses");
 

@@ -25,5 +25,7 @@ public sealed record BusCoupler : NetworkElement
         check.BusReference("to", To);
         check.DifferentBuses("from", From, "to", To);
         check.SameNominalVoltage(From, To, perUnit: false);
+        if (Closed && InService)
+            check.SameTolerance(From, To);
     }
 }

@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Text;
 
 namespace NetFault;
@@ -7,12 +6,7 @@ namespace NetFault;
 internal static class YamlScalar
 {
     /// <summary>The shortest text that reads back as the same number.</summary>
-    public static string Number(double value)
-    {
-        var text = value.ToString("R", CultureInfo.InvariantCulture);
-        // .NET Framework's shortest form is not always exact.
-        return double.Parse(text, CultureInfo.InvariantCulture).Equals(value) ? text : value.ToString("G17", CultureInfo.InvariantCulture);
-    }
+    public static string Number(double value) => RoundTrip.Text(value);
 
     /// <summary>A text, in quotes where it needs them.</summary>
     public static string Text(string text) => IsPlain(text) ? text : Quoted(text);
