@@ -104,6 +104,14 @@ public sealed class FaultStudy
     public Matrix<Complex> AdmittanceMatrix(FaultInstant instant = FaultInstant.Initial) =>
         StudyMatrices.Admittance(_networks.Matrix, _networks.At(instant));
 
+    /// <summary>
+    /// An estimate, from below, of the condition number of the admittance matrix in the 1-norm (Hager 1984, Higham 1988); its decimal logarithm
+    /// is about the number of digits that data or rounding errors may cost. Large where very small and very large impedances meet. Costs a
+    /// handful of solves.
+    /// </summary>
+    /// <param name="instant">Which instant's network; the initial one by default.</param>
+    public double ConditionEstimate(FaultInstant instant = FaultInstant.Initial) => _networks.At(instant).ConditionEstimate();
+
     /// <summary>What the study's results share.</summary>
     internal StudyContext Context => _context;
 

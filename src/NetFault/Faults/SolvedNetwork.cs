@@ -54,6 +54,9 @@ internal sealed class SolvedNetwork
         return column;
     }
 
+    /// <summary>An estimate of the condition number of Ybus in the 1-norm, from below.</summary>
+    public double ConditionEstimate() => Sparse.ConditionEstimate.Of(_factor, Values.Diagonal, Values.OffDiagonal);
+
     /// <summary>The columns of Zbus as far as their entries are large.</summary>
     public PrunedColumns PrunedColumns() => Sparse.PrunedColumns.Of(_factor, DrivingPoints.Impedances);
 

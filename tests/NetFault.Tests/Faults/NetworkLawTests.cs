@@ -122,6 +122,16 @@ public class NetworkLawTests
             }
         }, iter: 20);
 
+    [Fact]
+    public void The_condition_estimate_is_from_below_and_within_two_digits_of_a_dense_one() =>
+        RandomNetworks.Cases(40).Sample((seed, buses) =>
+        {
+            var study = new FaultStudy(RandomNetworks.Make(seed, buses), new MachineDecrement());
+            var y = Matrix.Build.DenseOfMatrix(study.AdmittanceMatrix());
+            var dense = y.L1Norm() * y.Inverse().L1Norm();
+            study.ConditionEstimate().Should().BeInRange(dense / 100, dense * (1 + 1e-9));
+        }, iter: 20);
+
     private static void AssertSame(Network one, Network other)
     {
         var method = new MachineDecrement { XOverRRule = XOverRRule.SeparateNetworks };
