@@ -58,6 +58,10 @@ internal sealed class BreakingCurrent
     }
 
     /// <summary>μ, or μ·q, or 0 for a converter-fed drive, which contributes to I″k and ip alone.</summary>
-    private double Kept(in PartialCurrent share, double delaySeconds) =>
-        _work.Partial.IsDrive(share.Source) ? 0.0 : MachineShare.Of(_work.Circuit, share).Kept(delaySeconds);
+    private double Kept(in PartialCurrent share, double delaySeconds) => _work.Circuit.Network.Elements[_work.Circuit.Sources[share.Source].Element] switch
+    {
+        ConverterFedDrive => 0.0,
+        SynchronousMachine => DecrementFactors.MuAt(share.Ratio, delaySeconds),
+        _ => MachineShare.Of(_work.Circuit, share).Kept(delaySeconds),
+    };
 }

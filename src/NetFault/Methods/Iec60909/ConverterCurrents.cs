@@ -21,11 +21,25 @@ internal sealed class ConverterCurrents
         _steady = new(() => Sum(Iec60909.WithoutMotors, FaultInstant.SteadyState));
     }
 
-    /// <summary>Σ |Zkj|·IskPFj per unit at a node.</summary>
-    public double Initial(int node) => _initial.Value?[node] ?? 0.0;
-
-    /// <summary>Σ |Zkj|·IkPFj per unit at a node, in the network without motors.</summary>
-    public double SteadyState(int node) => _steady.Value?[node] ?? 0.0;
+    /// <summary>Σ |Zkj|·Ij per unit at a node, with the currents of an instant, in the network of that instant or in that without motors.</summary>
+    /// <param name="node">k.</param>
+    /// <param name="instant">The instant.</param>
+    /// <param name="variant">The network.</param>
+    /// <param name="inside">The power station unit inside which the node lies, or null.</param>
+    public double At(int node, FaultInstant instant, NetworkVariant variant, InsideUnit? inside)
+    {
+        var table = (instant == FaultInstant.Initial ? _initial : _steady).Value;
+        if (table is null)
+            return 0.0;
+        if (inside is null && variant.Instant == instant)
+            return table[node];
+        var column = _networks.Of(variant).Column(node, out _);
+        return Injections(instant).Sum(injection =>
+        {
+            var at = _networks.Circuit.Sources[injection.Source].Node;
+            return Complex.Abs(column[at] + (inside?.Change(variant, node, at) ?? Complex.Zero)) * injection.CurrentPu;
+        });
+    }
 
     /// <summary>Notes what is assumed of a source because it does not say it.</summary>
     public static void Log(FullConverterSource source, ShortCircuitCase which, AssumptionLog? log)

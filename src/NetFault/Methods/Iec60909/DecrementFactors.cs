@@ -20,26 +20,36 @@ internal static class DecrementFactors
     /// </summary>
     /// <param name="currentRatio">I″kG/IrG, or I″kM/IrM.</param>
     /// <param name="delaySeconds">The minimum time delay, from 0.02 s.</param>
-    public static double MuAt(double currentRatio, double delaySeconds) =>
-        currentRatio <= 2.0 ? 1.0 : Math.Min(1.0, Interpolate(delaySeconds, row => Mu[row][0] + Mu[row][1] * Math.Exp(-Mu[row][2] * currentRatio)));
+    public static double MuAt(double currentRatio, double delaySeconds)
+    {
+        if (currentRatio <= 2.0)
+            return 1.0;
+        var (row, share) = Locate(delaySeconds);
+        var mu = MuCurve(row, currentRatio);
+        return Math.Min(1.0, share > 0.0 ? (1.0 - share) * mu + share * MuCurve(row + 1, currentRatio) : mu);
+    }
 
     /// <summary>q of an asynchronous motor at a minimum time delay; between the curves it is interpolated linearly.</summary>
     /// <param name="megawattsPerPolePair">Rated active power of one motor in MW over its pole pairs.</param>
     /// <param name="delaySeconds">The minimum time delay, from 0.02 s.</param>
     public static double QAt(double megawattsPerPolePair, double delaySeconds)
     {
-        var logarithm = Math.Log(megawattsPerPolePair);
-        return Interpolate(delaySeconds, row => Math.Max(0.0, Math.Min(1.0, Q[row][0] + Q[row][1] * logarithm)));
+        var (row, share) = Locate(delaySeconds);
+        var q = QCurve(row, megawattsPerPolePair);
+        return share > 0.0 ? (1.0 - share) * q + share * QCurve(row + 1, megawattsPerPolePair) : q;
     }
 
-    private static double Interpolate(double delaySeconds, Func<int, double> curve)
+    private static double MuCurve(int row, double currentRatio) => Mu[row][0] + Mu[row][1] * Math.Exp(-Mu[row][2] * currentRatio);
+
+    private static double QCurve(int row, double megawattsPerPolePair) =>
+        Math.Max(0.0, Math.Min(1.0, Q[row][0] + Q[row][1] * Math.Log(megawattsPerPolePair)));
+
+    /// <summary>The curve at or before a delay, and how far on towards the next.</summary>
+    private static (int Row, double Share) Locate(double delaySeconds)
     {
-        var next = Array.FindIndex(Delays, delay => delaySeconds < delay);
-        if (next < 0)
-            return curve(Delays.Length - 1);
-        if (next == 0)
-            return curve(0);
-        var share = (delaySeconds - Delays[next - 1]) / (Delays[next] - Delays[next - 1]);
-        return (1.0 - share) * curve(next - 1) + share * curve(next);
+        var row = Delays.Length - 1;
+        while (row > 0 && delaySeconds < Delays[row])
+            row--;
+        return row == Delays.Length - 1 ? (row, 0.0) : (row, Math.Max(0.0, (delaySeconds - Delays[row]) / (Delays[row + 1] - Delays[row])));
     }
 }

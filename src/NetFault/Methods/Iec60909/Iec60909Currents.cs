@@ -26,7 +26,9 @@ internal sealed class Iec60909Currents : FaultCurrents
             seen.Node, DrivingVoltagePu, DrivingVoltagePu / Complex.Abs(WithoutMotorsPu));
         ImpedancePu = MotorsLeftOut ? WithoutMotorsPu : withMotors;
         ImpedancePartKa = Ka(DrivingVoltagePu / Complex.Abs(ImpedancePu));
-        ConverterPartKa = Ka(work.Converters.Initial(seen.Node) / Complex.Abs(ImpedancePu));
+        var network = MotorsLeftOut ? Iec60909.WithoutMotors : Iec60909.Initial;
+        ConverterPartKa = Ka(
+            work.Converters.At(seen.Node, FaultInstant.Initial, network, work.Inside.Of(seen.Node)) / Complex.Abs(ImpedancePu));
     }
 
     /// <summary>The bus.</summary>

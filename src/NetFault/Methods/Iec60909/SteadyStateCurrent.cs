@@ -26,7 +26,8 @@ internal sealed record SteadyStateCurrent(double Ka, SteadyStateCurrentRule Rule
     public static SteadyStateCurrent Of(Iec60909AtWork work, Iec60909Currents fault)
     {
         var current = fault.DrivingVoltagePu / fault.WithoutMotorsPu;
-        var converters = fault.Ka(work.Converters.SteadyState(fault.Node) / Complex.Abs(fault.WithoutMotorsPu));
+        var converters = fault.Ka(work.Converters.At(
+            fault.Node, FaultInstant.SteadyState, Iec60909.WithoutMotors, work.Inside.Of(fault.Node)) / Complex.Abs(fault.WithoutMotorsPu));
         var machines = work.MachinesAround(fault.Node);
         if (machines.Count == 0 || !work.IsRadial(fault.Node, withMotors: false))
             return new(fault.Ka(Complex.Abs(current)) + converters, SteadyStateCurrentRule.WithoutMotors);
