@@ -64,8 +64,9 @@ public class FlowAgreementTests
             Add(coupler.FromBusId, -coupler.FromToKa!.Value);
             Add(coupler.ToBusId, coupler.FromToKa!.Value);
         }
+        // A branch current is an admittance times a difference of voltages: a small one through a small impedance carries their rounding.
         var largest = sizes.Values.Max();
         foreach (var bus in network.Buses)
-            sums[bus.Id].Magnitude.Should().BeLessThan(1e-9 * sizes[bus.Id] + 1e-12 * largest + 1e-300, bus.Id);
+            sums[bus.Id].Magnitude.Should().BeLessThan(1e-9 * sizes[bus.Id] + 1e-10 * largest + 1e-300, bus.Id);
     }
 }
