@@ -17,16 +17,7 @@ public class FaultFlowsTests
             var flows = study.FlowsAt(faulted, (FaultInstant)(seed % 3));
             if (flows.Couplers.Any(one => one.FromToKa is null))
                 return;
-            foreach (var bus in network.Buses)
-            {
-                var sum = -(bus.Id == faulted ? flows.FaultCurrentKa : 0);
-                sum += flows.Sources.Where(one => one.BusId == bus.Id).Aggregate(Complex.Zero, (s, one) => s + one.IntoBusKa);
-                sum -= flows.Branches.SelectMany(one => one.Ends).Where(one => one.BusId == bus.Id)
-                    .Aggregate(Complex.Zero, (s, one) => s + one.IntoBranchKa);
-                sum -= flows.Couplers.Where(one => one.FromBusId == bus.Id).Aggregate(Complex.Zero, (s, one) => s + one.FromToKa!.Value);
-                sum += flows.Couplers.Where(one => one.ToBusId == bus.Id).Aggregate(Complex.Zero, (s, one) => s + one.FromToKa!.Value);
-                sum.Magnitude.Should().BeLessThan(1e-9 * LargestAt(flows, bus.Id) + 1e-10 * Largest(flows), bus.Id);
-            }
+            Kirchhoff.AssertAtEveryBus(study, flows);
         }, iter: 60);
 
     [Fact]
@@ -108,15 +99,4 @@ public class FaultFlowsTests
         var branch = () => study.FlowsAt("A").Branch("AC");
         branch.Should().Throw<UnknownIdException>().Which.NearestIds.Should().Equal("AB");
     }
-
-    /// <summary>
-    /// A bus with couplers alone carries the rounding of its neighbours, and a small current through a small impedance that of the voltages.
-    /// </summary>
-    private static double Largest(FaultFlows flows) =>
-        flows.Branches.SelectMany(one => one.Ends).Select(one => one.IntoBranchKa.Magnitude).Append(flows.FaultCurrentKa.Magnitude).Append(1e-6).Max();
-
-    private static double LargestAt(FaultFlows flows, string bus) =>
-        flows.Branches.SelectMany(one => one.Ends).Where(one => one.BusId == bus).Select(one => one.IntoBranchKa.Magnitude)
-            .Concat(flows.Sources.Where(one => one.BusId == bus).Select(one => one.IntoBusKa.Magnitude))
-            .DefaultIfEmpty(0).Max();
 }
