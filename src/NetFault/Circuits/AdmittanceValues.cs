@@ -26,10 +26,6 @@ internal sealed class AdmittanceValues
     public Complex[] OffDiagonal { get; }
 
     /// <summary>The values of a network: the sources' impedances as they are in it, the branches' at rated frequency.</summary>
-    public static AdmittanceValues Of(CircuitMatrix matrix, Complex?[] sourceImpedances, NetworkVariant variant) =>
-        Of(matrix, sourceImpedances, matrix.Circuit.BranchImpedances, variant);
-
-    /// <summary>The same with other impedances of branches, at rated frequency, than the circuit's.</summary>
     public static AdmittanceValues Of(CircuitMatrix matrix, Complex?[] sourceImpedances, Complex[] branchImpedances, NetworkVariant variant)
     {
         var circuit = matrix.Circuit;

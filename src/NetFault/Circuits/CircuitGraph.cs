@@ -75,8 +75,10 @@ internal sealed class CircuitGraph
         return true;
     }
 
-    /// <summary>The nodes that one reaches without passing another.</summary>
-    public HashSet<int> ReachedWithout(int passed, int from)
+    /// <summary>The nodes that one reaches by the branches that may be passed.</summary>
+    /// <param name="from">Where to begin.</param>
+    /// <param name="passes">Whether a branch may be passed to a node.</param>
+    public HashSet<int> Reached(int from, Func<int, int, bool> passes)
     {
         var reached = new HashSet<int> { from };
         var open = new Stack<int>(reached);
@@ -86,7 +88,7 @@ internal sealed class CircuitGraph
             for (var end = _start[node]; end < _start[node + 1]; end++)
             {
                 var other = Neighbour(node, end);
-                if (other != passed && reached.Add(other))
+                if (passes(_branch[end], other) && reached.Add(other))
                     open.Push(other);
             }
         }

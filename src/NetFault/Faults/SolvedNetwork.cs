@@ -33,7 +33,7 @@ internal sealed class SolvedNetwork
 
     /// <summary>Factors a network of a method.</summary>
     public static SolvedNetwork Of(CircuitMatrix matrix, FaultMethod method, NetworkVariant variant) =>
-        new(matrix, AdmittanceValues.Of(matrix, method.SourceImpedances(matrix.Circuit, variant, log: null), variant), variant.FrequencyRatio.Equals(1.0));
+        Of(matrix, method.SourceImpedances(matrix.Circuit, variant, log: null), matrix.Circuit.BranchImpedances, variant);
 
     /// <summary>Factors a network with these impedances.</summary>
     public static SolvedNetwork Of(CircuitMatrix matrix, Complex?[] sources, Complex[] branches, NetworkVariant variant) =>

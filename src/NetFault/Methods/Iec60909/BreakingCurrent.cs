@@ -45,14 +45,14 @@ internal sealed class BreakingCurrent
     /// <summary>Ib in kA at a minimum time delay, with what full-size converters add.</summary>
     public double Ka(double delaySeconds)
     {
-        var current = _fault.DrivingVoltagePu / _fault.ImpedancePu;
+        var current = _fault.CurrentPu;
         var meshed = Rule == BreakingCurrentRule.Meshed;
         foreach (var share in _shares)
         {
             var lost = 1.0 - Kept(share, delaySeconds);
             current -= lost * share.Current * (meshed
                 ? new Complex(0.0, share.Impedance.Imaginary) * share.Current / _fault.DrivingVoltagePu
-                : _work.Transfer(_fault, share, _fault.MotorsLeftOut ? Iec60909.WithoutMotors : Iec60909.Initial));
+                : _work.Transfer(_fault, share, _fault.Network));
         }
         return _fault.Ka(Complex.Abs(current)) + _fault.ConverterPartKa;
     }

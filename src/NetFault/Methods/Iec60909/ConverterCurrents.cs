@@ -87,11 +87,11 @@ internal sealed class ConverterCurrents
     private double[] Sum(SolvedNetwork solved, Dictionary<int, double> perNode)
     {
         var total = new double[_networks.Circuit.NodeCount];
-        foreach (var (node, current) in perNode.Select(pair => (pair.Key, pair.Value)))
+        foreach (var pair in perNode)
         {
-            var column = solved.Column(node, out _);
+            var column = solved.Column(pair.Key, out _);
             for (var k = 0; k < total.Length; k++)
-                total[k] += Complex.Abs(column[k]) * current;
+                total[k] += Complex.Abs(column[k]) * pair.Value;
         }
         return total;
     }

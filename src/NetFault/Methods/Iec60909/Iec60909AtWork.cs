@@ -59,9 +59,6 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     /// <summary>The smallest R/X around each node, for method (a).</summary>
     public SmallestRatios Smallest => _smallest.Value;
 
-    /// <summary>Where motors may be left out.</summary>
-    public SmallMotors Motors => _motors.Value;
-
     public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
         new Iec60909Currents(this, context, context.Network.Buses[bus], seen);
 
@@ -69,13 +66,21 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     {
         var at = context.Network.Buses[bus];
         var node = Circuit.NodeOfBus[bus];
-        var driving = Inside.DrivingVoltagePu(node, at, Method.Case) ?? Method.DrivingVoltagePu(at);
+        var driving = DrivingVoltagePu(node, at);
         var variant = Method.NetworkAt(instant);
-        if (Method.LeaveOutSmallMotors && Motors.AreSmall(node, driving, driving / Complex.Abs(Seen(Iec60909.WithoutMotors, node))))
+        // The option first: without it nobody needs the network without motors here.
+        if (Method.LeaveOutSmallMotors && LeavesMotorsOut(node, driving, Seen(Iec60909.WithoutMotors, node)))
             variant = Iec60909.WithoutMotors;
         var network = Inside.Of(node)?.Solved(Method, variant) ?? Networks.Of(variant);
         return new FlowBasis(network, driving, Converters.Injections(instant));
     }
+
+    /// <summary>c at a bus, or c·UrG/Un at a machine's terminals inside a power station unit.</summary>
+    public double DrivingVoltagePu(int node, Bus bus) => Inside.DrivingVoltagePu(node, bus, Method.Case) ?? Method.DrivingVoltagePu(bus);
+
+    /// <summary>Whether the motors are left out as small for a fault that sees this impedance without them.</summary>
+    public bool LeavesMotorsOut(int node, double drivingVoltagePu, Complex withoutMotorsPu) =>
+        Method.LeaveOutSmallMotors && _motors.Value.AreSmall(node, drivingVoltagePu, drivingVoltagePu / Complex.Abs(withoutMotorsPu));
 
     /// <summary>Whether each source feeds a node by a way of its own.</summary>
     public bool IsRadial(int node, bool withMotors) => (withMotors ? _radial : _radialWithoutMotors).Value[node];
@@ -103,7 +108,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
             return _levels.Value[source] / _levels.Value[fault.Node];
         var solved = Networks.Of(variant);
         var column = solved.Column(fault.Node, out _);
-        var part = _graph.Value.ReachedWithout(fault.Node, source);
+        var part = _graph.Value.Reached(source, (_, node) => node != fault.Node);
         var current = Complex.Zero;
         for (var end = _graph.Value.Start(fault.Node); end < _graph.Value.End(fault.Node); end++)
         {

@@ -19,16 +19,14 @@ internal sealed class Iec60909Currents : FaultCurrents
         _context = context;
         _seen = seen;
         Bus = bus;
-        DrivingVoltagePu = work.Inside.DrivingVoltagePu(seen.Node, bus, work.Method.Case) ?? work.Method.DrivingVoltagePu(bus);
+        DrivingVoltagePu = work.DrivingVoltagePu(seen.Node, bus);
         WithoutMotorsPu = work.Corrected(Iec60909.WithoutMotors, seen.Node, seen[1]);
         var withMotors = work.Corrected(Iec60909.Initial, seen.Node, seen[0]);
-        MotorsLeftOut = work.Method.LeaveOutSmallMotors && work.Motors.AreSmall(
-            seen.Node, DrivingVoltagePu, DrivingVoltagePu / Complex.Abs(WithoutMotorsPu));
+        MotorsLeftOut = work.LeavesMotorsOut(seen.Node, DrivingVoltagePu, WithoutMotorsPu);
         ImpedancePu = MotorsLeftOut ? WithoutMotorsPu : withMotors;
         ImpedancePartKa = Ka(DrivingVoltagePu / Complex.Abs(ImpedancePu));
-        var network = MotorsLeftOut ? Iec60909.WithoutMotors : Iec60909.Initial;
         ConverterPartKa = Ka(
-            work.Converters.At(seen.Node, FaultInstant.Initial, network, work.Inside.Of(seen.Node)) / Complex.Abs(ImpedancePu));
+            work.Converters.At(seen.Node, FaultInstant.Initial, Network, work.Inside.Of(seen.Node)) / Complex.Abs(ImpedancePu));
     }
 
     /// <summary>The bus.</summary>
@@ -46,6 +44,12 @@ internal sealed class Iec60909Currents : FaultCurrents
     /// <summary>Whether the motors were left out here as small.</summary>
     public bool MotorsLeftOut { get; }
 
+    /// <summary>The network that the initial current is found in.</summary>
+    public NetworkVariant Network => MotorsLeftOut ? Iec60909.WithoutMotors : Iec60909.Initial;
+
+    /// <summary>The current through the impedance at the fault, per unit.</summary>
+    public Complex CurrentPu => DrivingVoltagePu / ImpedancePu;
+
     /// <summary>What flows through the impedance at the fault, in kA.</summary>
     public double ImpedancePartKa { get; }
 
@@ -54,9 +58,6 @@ internal sealed class Iec60909Currents : FaultCurrents
 
     /// <summary>Whether this is one of the results at every bus.</summary>
     public bool CoversEveryBus => _seen.CoversEveryBus;
-
-    /// <summary>The impedance of the fault itself per unit.</summary>
-    public Complex FaultPu => _seen.FaultPu;
 
     public override Complex ImpedancePu { get; }
 

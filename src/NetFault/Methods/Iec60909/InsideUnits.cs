@@ -60,17 +60,7 @@ internal sealed class InsideUnits
     /// </summary>
     private HashSet<int> NodesOf(int terminals, int unitBranch)
     {
-        var reached = new HashSet<int> { terminals };
-        var open = new Stack<int>(reached);
-        while (open.Count > 0)
-        {
-            var node = open.Pop();
-            for (var end = _graph.Value.Start(node); end < _graph.Value.End(node); end++)
-            {
-                if (_graph.Value.Branch(end) != unitBranch && reached.Add(_graph.Value.Neighbour(node, end)))
-                    open.Push(_graph.Value.Neighbour(node, end));
-            }
-        }
+        var reached = _graph.Value.Reached(terminals, (branch, _) => branch != unitBranch);
         var holders = _networks.Circuit.Sources.Count(source => reached.Contains(source.Node)
             && _networks.Circuit.Network.Elements[source.Element].Role == ElementRole.Source);
         return holders == 1 ? reached : [terminals];

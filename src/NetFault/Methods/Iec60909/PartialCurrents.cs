@@ -49,9 +49,8 @@ internal sealed class PartialCurrents
             return [];
         var inside = _work.Inside.Of(fault.Node);
         var shares = inside is null && fault.CoversEveryBus
-            ? (fault.MotorsLeftOut ? _tableWithoutMotors : _table).Value.At(fault.Node).Select(entry => Share(fault.DrivingVoltagePu / fault.ImpedancePu, _machines.Value[entry.Machine], entry.Impedance))
-            : FromColumn(
-                fault, inside, fault.MotorsLeftOut ? Iec60909.WithoutMotors : Iec60909.Initial, fault.DrivingVoltagePu / fault.ImpedancePu);
+            ? FromTable(fault)
+            : FromColumn(fault, inside, fault.Network, fault.CurrentPu);
         return shares.Where(share => share.Ratio > SmallestRatio || IsDrive(share.Source)).ToList();
     }
 
@@ -61,6 +60,10 @@ internal sealed class PartialCurrents
 
     /// <summary>Whether a source is a converter-fed drive.</summary>
     public bool IsDrive(int source) => Element(source) is ConverterFedDrive;
+
+    private IEnumerable<PartialCurrent> FromTable(Iec60909Currents fault) =>
+        (fault.MotorsLeftOut ? _tableWithoutMotors : _table).Value.At(fault.Node)
+            .Select(entry => Share(fault.CurrentPu, _machines.Value[entry.Machine], entry.Impedance));
 
     private IEnumerable<PartialCurrent> FromColumn(Iec60909Currents fault, InsideUnit? inside, NetworkVariant variant, Complex current)
     {
