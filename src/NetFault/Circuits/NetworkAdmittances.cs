@@ -28,7 +28,7 @@ internal static class NetworkAdmittances
     public static Complex[] OfBranches(Circuit circuit, Complex[] branchImpedances, NetworkVariant variant)
     {
         var part = variant.Part;
-        var impedances = AtFrequency(circuit, branchImpedances, variant.FrequencyRatio);
+        var impedances = AtFrequency(circuit, branchImpedances, variant);
         var admittances = new Complex[circuit.Branches.Length];
         for (var i = 0; i < admittances.Length; i++)
         {
@@ -45,14 +45,20 @@ internal static class NetworkAdmittances
         return admittances;
     }
 
-    /// <summary>The branch impedances with their reactances at another frequency.</summary>
-    private static Complex[] AtFrequency(Circuit circuit, Complex[] branchImpedances, double ratio)
+    /// <summary>The branch impedances with their reactances at the variant's frequency.</summary>
+    private static Complex[] AtFrequency(Circuit circuit, Complex[] branchImpedances, NetworkVariant variant)
     {
-        if (ratio.Equals(1.0))
-            return branchImpedances;
+        if (variant.ReactanceFactor is { } s)
+            return Each(circuit, branchImpedances, (z, kind) => kind == BranchKind.Capacitor ? z.Real - z.Imaginary / s : z.Real + z.Imaginary * s);
+        var ratio = variant.FrequencyRatio;
+        return ratio.Equals(1.0) ? branchImpedances : Each(circuit, branchImpedances, (z, kind) => AtFrequency(z, kind, ratio));
+    }
+
+    private static Complex[] Each(Circuit circuit, Complex[] branchImpedances, Func<Complex, BranchKind, Complex> change)
+    {
         var impedances = new Complex[branchImpedances.Length];
         for (var i = 0; i < impedances.Length; i++)
-            impedances[i] = AtFrequency(branchImpedances[i], circuit.Branches[i].Kind, ratio);
+            impedances[i] = change(branchImpedances[i], circuit.Branches[i].Kind);
         return impedances;
     }
 

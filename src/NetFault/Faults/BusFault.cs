@@ -81,9 +81,9 @@ public sealed class BusFault
     public AcComponentRule AcComponentRule => _currents?.AcComponentRule ?? AcComponentRule.HeldAtInitial;
 
     /// <summary>
-    /// The peak short-circuit current ip, an instantaneous value in kA. By <see cref="MachineDecrement"/> the exact maximum over time for a
-    /// fault at voltage zero, with the AC component held at I″k and the DC component by <see cref="DcDecayRule"/>, 2√2·I″k where that is
-    /// undamped; by <see cref="NetFault.Iec60909"/> κ·√2·I″k.
+    /// The peak short-circuit current ip, an instantaneous value in kA. By <see cref="MachineDecrement"/> with the DC component by X/R the exact
+    /// maximum over time for a fault at voltage zero, the AC component held at I″k, 2√2·I″k where the DC component is undamped; with the exact DC
+    /// component that of <see cref="WorstPeak"/>; by <see cref="NetFault.Iec60909"/> κ·√2·I″k.
     /// </summary>
     public double PeakKa => _currents?.PeakKa ?? 0.0;
 
@@ -108,12 +108,20 @@ public sealed class BusFault
     private ReactanceRatio Ratio => _currents?.Ratio ?? new ReactanceRatio(null, XOverRStatus.DeEnergised);
 
     /// <summary>
-    /// The DC component i_dc(t) of the phase with the largest one, in kA, an instantaneous value: √2·I″k·e^(−ω·t/(X/R)), undamped where there
-    /// is no X/R. By IEC 60909-0 the X/R is that of the equivalent frequency for the time, and what full-size converters add has no DC
-    /// component.
+    /// The largest instantaneous current over time and closing angle, with the components as <see cref="AcComponentRule"/> and
+    /// <see cref="DcDecayRule"/> say; null by a method that gives no waveform, as IEC 60909-0, and at a de-energised bus.
     /// </summary>
-    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
-    /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
+    public PeakCurrent? WorstPeak => _currents?.WorstPeak;
+
+    /// <summary>
+    /// The DC component i_dc(t) of the phase with the largest one, in kA, an instantaneous value: √2·I″k·e^(−ω·t/(X/R)), undamped where there
+    /// is no X/R; or, as <see cref="DcDecayRule"/> says, the exact one, at each time that of the closing angle which makes it largest. By IEC 60909-0
+    /// the X/R is that of the equivalent frequency for the time, and what full-size converters add has no DC component.
+    /// </summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; with the exact rule within the horizon.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
     public double DcComponentKa(double seconds)
     {
         Guard.NotNegative(seconds);
@@ -121,15 +129,48 @@ public sealed class BusFault
     }
 
     /// <summary>
-    /// The RMS value of the AC component in kA, as <see cref="AcComponentRule"/> says: I″k at all times, or by IEC 60909-0 the breaking
-    /// current Ib of this minimum time delay.
+    /// The RMS value of the AC component in kA, as <see cref="AcComponentRule"/> says: decaying with the machines, or held at I″k; by IEC
+    /// 60909-0 the breaking current Ib of this minimum time delay.
     /// </summary>
-    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
-    /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where the rule has one.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
     public double SymmetricalRmsKa(double seconds)
     {
         Guard.NotNegative(seconds);
         return _currents?.SymmetricalRmsKa(seconds) ?? 0.0;
+    }
+
+    /// <summary>
+    /// The instantaneous current in kA of the phase whose voltage is √2·U·sin(ωt + closing angle) when the fault begins; the two other phases are
+    /// those of 120 degrees less and more. The worst phase is the one whose angle is that of <see cref="WorstPeak"/>.
+    /// </summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where a rule has one.</param>
+    /// <param name="closingAngleDegrees">The closing angle in degrees; 0 is a voltage zero.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon; or the angle is not finite.</exception>
+    /// <exception cref="NotSupportedException">The method gives no waveform, as IEC 60909-0.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
+    public double InstantaneousKa(double seconds, double closingAngleDegrees)
+    {
+        Guard.NotNegative(seconds);
+        Guard.Finite(closingAngleDegrees);
+        if (_currents is null)
+            return 0.0;
+        return _currents.InstantaneousKa(seconds, closingAngleDegrees * Math.PI / 180.0) ?? throw new NotSupportedException(
+            $"{_context.Method.Name} gives no waveform; take MachineDecrement");
+    }
+
+    /// <summary>
+    /// A bound of the error of <see cref="SymmetricalRmsKa"/> and <see cref="DcComponentKa"/> at a time, relative to I″k: that of the quadrature,
+    /// found from the network's data before anything is solved (docs/current-over-time.md); 0 where closed formulas give both.
+    /// </summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where a rule has one.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon.</exception>
+    /// <exception cref="CurrentOverTimeException">The bound is above what the method accepts.</exception>
+    public double DecayErrorBound(double seconds)
+    {
+        Guard.NotNegative(seconds);
+        return _currents?.ErrorBoundAt(seconds) ?? 0.0;
     }
 
     /// <summary>The asymmetrical (total) RMS value √(Iac² + i_dc²) in kA.</summary>

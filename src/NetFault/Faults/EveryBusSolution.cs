@@ -1,5 +1,4 @@
 using System.Numerics;
-using System.Runtime.ExceptionServices;
 
 namespace NetFault;
 
@@ -14,16 +13,15 @@ internal sealed class EveryBusSolution
 
     private readonly StudyContext _context;
     private readonly StudyNetworks _networks;
-    private readonly IProgress<StudyProgress>? _progress;
+    private readonly StepCounter _steps;
     private readonly CancellationToken _cancellation;
-    private int _done;
 
     public EveryBusSolution(
         StudyContext context, StudyNetworks networks, IProgress<StudyProgress>? progress, CancellationToken cancellation)
     {
         _context = context;
         _networks = networks;
-        _progress = progress;
+        _steps = new StepCounter(progress, context.Method.Networks.Count + 1);
         _cancellation = cancellation;
     }
 
@@ -32,37 +30,14 @@ internal sealed class EveryBusSolution
     {
         var wanted = _context.Method.Networks;
         var impedances = new DrivingPointImpedances[wanted.Count];
-        SideBySide(wanted.Count, i =>
+        SideBySide.Run(wanted.Count, _cancellation, i =>
         {
             impedances[i] = _networks.Of(wanted[i]).DrivingPoints;
-            Report(wanted[i].Name, wanted.Count + 1);
+            _steps.Done(wanted[i].Name);
         });
         var results = Results(wanted, impedances);
-        Report("currents", wanted.Count + 1);
+        _steps.Done("currents");
         return Array.AsReadOnly(results);
-    }
-
-    /// <summary>Counts and tells in one step, so that the counts come in order.</summary>
-    private void Report(string step, int total)
-    {
-        if (_progress is null)
-            return;
-        lock (_progress)
-            _progress.Report(new StudyProgress(++_done, total, step));
-    }
-
-    /// <summary>Runs the steps on the cores there are; a step's exception comes out as it is, not gathered in another.</summary>
-    private void SideBySide(int count, Action<int> step)
-    {
-        _cancellation.ThrowIfCancellationRequested();
-        try
-        {
-            Parallel.For(0, count, new ParallelOptions { CancellationToken = _cancellation }, step);
-        }
-        catch (AggregateException gathered)
-        {
-            ExceptionDispatchInfo.Capture(gathered.InnerExceptions[0]).Throw();
-        }
     }
 
     private BusFault[] Results(IReadOnlyList<NetworkVariant> variants, DrivingPointImpedances[] impedances)

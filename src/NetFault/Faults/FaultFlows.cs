@@ -11,18 +11,22 @@ public sealed class FaultFlows
 {
     private readonly Lazy<Dictionary<string, BusVoltage>> _voltages;
 
-    internal FaultFlows(string busId, FaultInstant instant)
+    internal FaultFlows(string busId, FaultInstant? instant, double? seconds)
     {
         BusId = busId;
         Instant = instant;
+        Seconds = seconds;
         _voltages = new(() => Voltages.ToDictionary(one => one.BusId, StringComparer.Ordinal));
     }
 
     /// <summary>The bus with the fault.</summary>
     public string BusId { get; }
 
-    /// <summary>Which instant's network these belong to.</summary>
-    public FaultInstant Instant { get; }
+    /// <summary>Which instant's network these belong to; null where they are those of a time.</summary>
+    public FaultInstant? Instant { get; }
+
+    /// <summary>The time after the beginning of the fault to which these belong, in seconds; null where they are those of an instant.</summary>
+    public double? Seconds { get; }
 
     /// <summary>The current into the fault in kA; 0 where the bus is de-energised.</summary>
     public Complex FaultCurrentKa { get; internal init; }

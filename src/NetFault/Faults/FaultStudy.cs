@@ -85,7 +85,43 @@ public sealed class FaultStudy
     {
         var bus = BusIndex(busId);
         Guard.OneOf(instant, FaultInstant.Initial, FaultInstant.Transient, FaultInstant.SteadyState);
-        return new FlowSolution(_context, _networks.Circuit, instant).Solve(bus, Passive(faultImpedanceOhm));
+        return new FlowSolution(_context, _networks.Circuit, bus).AtInstant(instant, Passive(faultImpedanceOhm));
+    }
+
+    /// <summary>
+    /// The AC currents of every branch, source and coupler, and the voltage of every bus, at a time during a fault at one bus: what each
+    /// contributes when contacts part. By <see cref="MachineDecrement"/>, as its <see cref="MachineDecrement.AcComponentRule"/> says; each
+    /// node of the quadrature costs one factorisation and one solve.
+    /// </summary>
+    /// <param name="busId">The bus with the fault.</param>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative, within the method's horizon.</param>
+    /// <param name="faultImpedanceOhm">Impedance of the fault itself in ohm; 0, a bolted fault, by default. Its parts must not be negative.</param>
+    /// <exception cref="UnknownIdException">There is no such bus; the exception names the nearest ids.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">The time, or a part of the fault impedance, is out of its range.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
+    /// <exception cref="NotSupportedException">The method gives no branch currents over time, as IEC 60909-0.</exception>
+    public FaultFlows FlowsAtTime(string busId, double seconds, Complex faultImpedanceOhm = default)
+    {
+        var bus = BusIndex(busId);
+        Guard.NotNegative(seconds);
+        return new FlowSolution(_context, _networks.Circuit, bus).AtTime(seconds, Passive(faultImpedanceOhm));
+    }
+
+    /// <summary>
+    /// Solves now what the currents over time of every bus need, which otherwise the first call for one does: to watch it, to stop it, or to have
+    /// it refused at once. Nothing to do where the method's rules need no such solution.
+    /// </summary>
+    /// <param name="progress">Told of each step done; may be null.</param>
+    /// <param name="cancellationToken">Stops the work between steps.</param>
+    /// <exception cref="OperationCanceledException">The work was stopped; it can be taken up again.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
+    public void SolveOverTime(IProgress<StudyProgress>? progress = null, CancellationToken cancellationToken = default)
+    {
+        var parts = _context.Currents.PartsOverTime();
+        var total = parts.Sum(part => part.Rule.Nodes.Length);
+        var counter = new StepCounter(progress, total);
+        foreach (var part in parts)
+            part.EveryNode(() => counter.Done("node of the quadrature"), cancellationToken);
     }
 
     /// <summary>

@@ -37,7 +37,7 @@ internal sealed class SolvedNetwork
 
     /// <summary>Factors a network with these impedances.</summary>
     public static SolvedNetwork Of(CircuitMatrix matrix, Complex?[] sources, Complex[] branches, NetworkVariant variant) =>
-        new(matrix, AdmittanceValues.Of(matrix, sources, branches, variant), variant.FrequencyRatio.Equals(1.0));
+        new(matrix, AdmittanceValues.Of(matrix, sources, branches, variant), variant.FrequencyRatio.Equals(1.0) && !variant.IsAtNode);
 
     /// <summary>Column k of Zbus: the voltages of all nodes for a unit current into node k.</summary>
     /// <param name="node">k.</param>
@@ -53,6 +53,20 @@ internal sealed class SolvedNetwork
         residual = Math.Max(residual, 2.2e-16 * Complex.Abs(Values.Diagonal[node]) * Complex.Abs(column[node]));
         return column;
     }
+
+    /// <summary>The voltages of all nodes for currents into them, per unit.</summary>
+    public Complex[] Solve(Complex[] currents)
+    {
+        var voltages = (Complex[])currents.Clone();
+        _matrix.Guarded(() => _factor.SolveRefined(Values.Diagonal, Values.OffDiagonal, voltages, new SolveScratch(_factor.Order)));
+        return voltages;
+    }
+
+    /// <summary>
+    /// In a network of reactances alone, the negative eigenvalues of the matrix of the susceptances 1/x: by J. J. Sylvester's law of inertia as
+    /// many as negative pivots. Null where pivots had to be shifted, so that they do not tell.
+    /// </summary>
+    public int? NegativeSusceptances => _factor.ShiftedPivots > 0 ? null : _factor.InversePivot.Count(pivot => pivot.Imaginary < 0.0);
 
     /// <summary>An estimate of the condition number of Ybus in the 1-norm, from below.</summary>
     public double ConditionEstimate() => Sparse.ConditionEstimate.Of(_factor, Values.Diagonal, Values.OffDiagonal);

@@ -29,6 +29,7 @@ internal sealed class StudyAssumptions
         var circuit = CircuitBuilder.Build(_network, _method.BranchRules(_network), log);
         foreach (var variant in _method.Networks)
             _method.SourceImpedances(circuit, variant, log);
+        _method.LogOverTime(circuit, log);
         if (_method.RatioRule == XOverRRule.SeparateNetworks)
             LogShares(circuit, log);
         var entries = log.Entries.Distinct().ToList();

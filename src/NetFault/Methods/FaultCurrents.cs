@@ -35,6 +35,15 @@ internal abstract class FaultCurrents
     /// <summary>What the method gives beyond the quantities that all methods share, where it is IEC 60909-0.</summary>
     public virtual Iec60909Result? Standard => null;
 
+    /// <summary>The current of a phase in kA at a closing angle in radians; null where the method gives no waveform.</summary>
+    public virtual double? InstantaneousKa(double seconds, double closingAngle) => null;
+
+    /// <summary>The largest instantaneous current over time and closing angle; null where the method gives no waveform.</summary>
+    public virtual PeakCurrent? WorstPeak => null;
+
+    /// <summary>The bound of the error with which a time's currents were found, relative to I″k; 0 for closed formulas.</summary>
+    public virtual double ErrorBoundAt(double seconds) => 0.0;
+
     /// <summary>i_dc(t) in kA.</summary>
     public abstract double DcComponentKa(double seconds);
 
@@ -50,4 +59,11 @@ internal abstract class CurrentsOfMethod
 
     /// <summary>What the flows of a fault at a bus are found from.</summary>
     public abstract FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant);
+
+    /// <summary>What the flows of a fault at a bus at a time are summed from, one after the other.</summary>
+    public virtual IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds) => throw new NotSupportedException(
+        $"{context.Method.Name} gives no branch currents over time; ask for those of an instant, or take MachineDecrement");
+
+    /// <summary>What the currents over time of every bus are found from, beside the method's networks.</summary>
+    public virtual IReadOnlyList<DecayPart> PartsOverTime() => [];
 }

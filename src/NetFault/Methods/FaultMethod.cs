@@ -36,6 +36,11 @@ public abstract record FaultMethod
     /// <summary>The impedance of each source of a circuit in a network, per unit; null where it is not in it.</summary>
     internal abstract Complex?[] SourceImpedances(Circuit circuit, NetworkVariant variant, AssumptionLog? log);
 
+    /// <summary>Says what the currents over time rest on, beside what <see cref="SourceImpedances"/> says.</summary>
+    internal virtual void LogOverTime(Circuit circuit, AssumptionLog log)
+    {
+    }
+
     /// <summary>Sets the method to work on a study.</summary>
     internal abstract CurrentsOfMethod Begin(StudyNetworks networks);
 }

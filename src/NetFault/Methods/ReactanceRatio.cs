@@ -22,6 +22,11 @@ public enum DcDecayRule
     /// <summary>With the time constant (X/R)/ω.</summary>
     ByXOverR,
 
+    /// <summary>
+    /// As the network's inductances and resistances have it: the sum of all its time constants at the bus, the envelope of the worst closing angle.
+    /// </summary>
+    Exact,
+
     /// <summary>Not at all: the upper bound that is taken where there is no X/R.</summary>
     Undamped,
 
@@ -40,6 +45,18 @@ public enum AcComponentRule
     /// standard's curves begin.
     /// </summary>
     BreakingCurrent,
+
+    /// <summary>
+    /// By the decay of all machines of the network together, with the network's reactances at rated frequency: the textbook's way. At t = 0 it
+    /// is I″k.
+    /// </summary>
+    QuasiStatic,
+
+    /// <summary>
+    /// The same with the network's inductances in place of reactances: the AC component of the exact solution. At t = 0 it differs a little from
+    /// I″k, commonly by less than 1 percent.
+    /// </summary>
+    Exact,
 }
 
 /// <summary>X/R at a fault by a named rule.</summary>

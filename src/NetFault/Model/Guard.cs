@@ -15,6 +15,12 @@ internal static class Guard
             ? value
             : throw new ArgumentOutOfRangeException(name, value, "must be a finite number that is not negative");
 
+    /// <summary>The value, or an <see cref="ArgumentOutOfRangeException"/> where it is not finite.</summary>
+    public static double Finite(double value, [CallerArgumentExpression(nameof(value))] string name = "") =>
+        !double.IsNaN(value) && !double.IsInfinity(value)
+            ? value
+            : throw new ArgumentOutOfRangeException(name, value, "must be a finite number");
+
     /// <summary>The value, or an <see cref="ArgumentOutOfRangeException"/> where it is not above 0 or not finite.</summary>
     public static double Positive(double value, [CallerArgumentExpression(nameof(value))] string name = "") =>
         value > 0 && !double.IsInfinity(value)

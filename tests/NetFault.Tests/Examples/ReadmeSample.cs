@@ -14,7 +14,7 @@ internal static class ReadmeSample
 
         foreach (BusFault fault in study.EveryBus())
             Console.WriteLine($"{fault.BusId,-5}  I″k {fault.InitialSymmetricalKa,5:0.00} kA   ip {fault.PeakKa,5:0.0} kA"
-                + $"   X/R {fault.XOverR,4:0.0}   at 60 ms: DC {fault.DcComponentKa(0.06):0.00} kA, total {fault.AsymmetricalRmsKa(0.06):0.00} kA");
+                + $"   at 60 ms: AC {fault.SymmetricalRmsKa(0.06),5:0.00}, DC {fault.DcComponentKa(0.06):0.00}, total {fault.AsymmetricalRmsKa(0.06),5:0.00} kA");
 
         Console.WriteLine($"CB-G1 carries {study.FlowsAt("MAIN").Coupler("CB-G1").FromToKa?.Magnitude:0.00} kA to a fault at MAIN");
         var withoutG1 = new FaultStudy(network.WithCoupler("CB-G1", closed: false), study.Method);

@@ -18,7 +18,7 @@ internal static class Kirchhoff
             sums[bus] += current;
             sizes[bus] += current.Magnitude;
         }
-        var admittance = study.AdmittanceMatrix(flows.Instant).Diagonal().Select(Complex.Abs).DefaultIfEmpty().Max();
+        var admittance = study.AdmittanceMatrix(flows.Instant ?? FaultInstant.Initial).Diagonal().Select(Complex.Abs).DefaultIfEmpty().Max();
         foreach (var bus in study.Network.Buses)
         {
             var baseKa = study.Network.BaseMva / (Math.Sqrt(3) * bus.NominalKv);

@@ -5,7 +5,8 @@ namespace NetFault;
 /// <summary>
 /// The textbook's method: each machine behind its subtransient, transient or synchronous reactance, all sources at one pre-fault voltage,
 /// no load current. Feeders carry no voltage factor and do not decay. Asynchronous motors are in the network of the initial current only:
-/// their AC component dies out. The DC component decays with X/R at the fault; the AC component is held at I″k.
+/// their AC component dies out. Over time the AC component decays with the time constants of all machines together, and the DC component with X/R
+/// at the fault, or exactly: docs/current-over-time.md.
 /// </summary>
 public sealed record MachineDecrement : FaultMethod
 {
@@ -15,9 +16,16 @@ public sealed record MachineDecrement : FaultMethod
     internal static readonly NetworkVariant Reactances = new() { Name = "network of the reactances", Part = ImpedancePart.Reactance };
     internal static readonly NetworkVariant Resistances = new() { Name = "network of the resistances", Part = ImpedancePart.Resistance };
 
+    private const double ShortestHorizon = 0.016;
+    private const double LongestHorizon = 10.0;
+
     private readonly double _prefaultVoltagePu = 1.0;
     private readonly XOverRRule _xOverRRule;
     private readonly FaultInstants _instants = FaultInstants.All;
+    private readonly AcComponentRule _acComponentRule = AcComponentRule.QuasiStatic;
+    private readonly DcDecayRule _dcDecayRule = DcDecayRule.ByXOverR;
+    private readonly double _horizonSeconds = 1.0;
+    private readonly double _decayErrorLimit = 1e-6;
 
     /// <inheritdoc/>
     public override string Name => "Machine decrement";
@@ -48,6 +56,54 @@ public sealed record MachineDecrement : FaultMethod
     {
         get => _xOverRRule;
         init => _xOverRRule = Guard.OneOf(value, XOverRRule.ComplexImpedance, XOverRRule.SeparateNetworks);
+    }
+
+    /// <summary>
+    /// How the AC component is found over time: <see cref="AcComponentRule.QuasiStatic"/>, the default, <see cref="AcComponentRule.Exact"/>, or
+    /// <see cref="AcComponentRule.HeldAtInitial"/>, which credits no decay.
+    /// </summary>
+    /// <exception cref="ArgumentOutOfRangeException">A rule of another method.</exception>
+    public AcComponentRule AcComponentRule
+    {
+        get => _acComponentRule;
+        init => _acComponentRule = Guard.OneOf(value, AcComponentRule.QuasiStatic, AcComponentRule.Exact, AcComponentRule.HeldAtInitial);
+    }
+
+    /// <summary>
+    /// How the DC component is found over time: <see cref="DcDecayRule.ByXOverR"/>, the default, by <see cref="XOverRRule"/>; or
+    /// <see cref="DcDecayRule.Exact"/>, the sum of all time constants of the network at the bus.
+    /// </summary>
+    /// <exception cref="ArgumentOutOfRangeException">No rule that can be asked for.</exception>
+    public DcDecayRule DcDecayRule
+    {
+        get => _dcDecayRule;
+        init => _dcDecayRule = Guard.OneOf(value, DcDecayRule.ByXOverR, DcDecayRule.Exact);
+    }
+
+    /// <summary>
+    /// The latest time in seconds for which currents are asked, from 0.016 to 10 where the components decay by <see cref="AcComponentRule"/> or
+    /// <see cref="DcDecayRule"/> other than by formula. Default 1 s. A later time is an error.
+    /// </summary>
+    /// <exception cref="ArgumentOutOfRangeException">Not from 0.016 to 10.</exception>
+    public double HorizonSeconds
+    {
+        get => _horizonSeconds;
+        init => _horizonSeconds = value is >= ShortestHorizon and <= LongestHorizon
+            ? value
+            : throw new ArgumentOutOfRangeException(nameof(HorizonSeconds), value, "must be from 0.016 s, about one cycle, to 10 s");
+    }
+
+    /// <summary>
+    /// The largest error of currents over time that is accepted, relative to I″k, from 1e-7 to 1e-2. It is bounded from the network's data before
+    /// anything is solved, and a study whose bound is larger is refused. Fewer nodes, and so less time, serve a larger one. Default 1e-6.
+    /// </summary>
+    /// <exception cref="ArgumentOutOfRangeException">Not from 1e-7 to 1e-2.</exception>
+    public double DecayErrorLimit
+    {
+        get => _decayErrorLimit;
+        init => _decayErrorLimit = value is >= 1e-7 and <= 1e-2
+            ? value
+            : throw new ArgumentOutOfRangeException(nameof(DecayErrorLimit), value, "must be from 1e-7 to 1e-2");
     }
 
     internal override XOverRRule RatioRule => XOverRRule;
@@ -86,7 +142,13 @@ public sealed record MachineDecrement : FaultMethod
         return impedances;
     }
 
-    internal override CurrentsOfMethod Begin(StudyNetworks networks) => new AtWork();
+    internal override CurrentsOfMethod Begin(StudyNetworks networks) => new MachineDecrementAtWork(this, networks);
+
+    internal override void LogOverTime(Circuit circuit, AssumptionLog log)
+    {
+        if (AcComponentRule != AcComponentRule.HeldAtInitial || DcDecayRule == DcDecayRule.Exact)
+            OperationalSources.Of(circuit, log);
+    }
 
     private static Complex? Impedance(Network network, int element, FaultInstant instant, AssumptionLog? log)
     {
@@ -122,14 +184,5 @@ public sealed record MachineDecrement : FaultMethod
         var toBase = SynchronousMachineCircuit.RatedToBase(machine, kv, network.BaseMva, log);
         var resistance = SynchronousMachineCircuit.ArmatureResistancePu(machine, kv, network.FrequencyHz, log);
         return new Complex(resistance * toBase, reactance * toBase);
-    }
-
-    private sealed class AtWork : CurrentsOfMethod
-    {
-        public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
-            new MachineDecrementCurrents(context, context.Network.Buses[bus], seen);
-
-        public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant) =>
-            new(context.Networks.At(instant), context.Method.DrivingVoltagePu(context.Network.Buses[bus]), []);
     }
 }

@@ -1,0 +1,71 @@
+using System.Collections.Concurrent;
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>The AC and the DC component of one fault, per unit of the driving voltage: short sums over the samples of F = 1/(p·Zkk(p)).</summary>
+internal sealed class DecayOfFault
+{
+    private readonly DecaySolution _solution;
+    private readonly int _node;
+    private readonly Complex _faultPu;
+    private readonly ConcurrentDictionary<DecayPart, Complex[]>? _own;     // null among the results at every bus, which share theirs
+
+    /// <param name="solution">The study's quadratures.</param>
+    /// <param name="seen">The place of the fault and the fault's own impedance.</param>
+    public DecayOfFault(DecaySolution solution, in SeenImpedances seen)
+    {
+        _solution = solution;
+        _node = seen.Node;
+        _faultPu = seen.FaultPu;
+        _own = seen.CoversEveryBus ? null : new ConcurrentDictionary<DecayPart, Complex[]>();
+    }
+
+    /// <summary>The AC component's phasor.</summary>
+    /// <param name="angle">ω·t.</param>
+    public Complex Ac(double angle)
+    {
+        var part = _solution.PartAt(angle);
+        return Sum(part.WeightsAt(angle).Ac, part);
+    }
+
+    /// <summary>The DC component, in the rotating frame: e^(jωt) times it stands still.</summary>
+    /// <param name="angle">ω·t.</param>
+    public Complex Dc(double angle)
+    {
+        var part = _solution.PartAt(angle);
+        return Sum(part.WeightsAt(angle).Dc, part);
+    }
+
+    /// <summary>The bound of the error of a time, relative to I″k.</summary>
+    public NodeWeights WeightsAt(double angle) => _solution.PartAt(angle).WeightsAt(angle);
+
+    private Complex Sum(Complex[] weights, DecayPart part)
+    {
+        var sum = Complex.Zero;
+        if (_own is { } own)
+        {
+            var samples = own.GetOrAdd(part, Samples);
+            for (var q = 0; q < weights.Length; q++)
+                sum += weights[q] * samples[q];
+            return sum;
+        }
+        var nodes = part.Rule.Nodes;
+        var impedances = part.EveryNode();
+        for (var q = 0; q < weights.Length; q++)
+            sum += weights[q] / (nodes[q] * impedances[q][_node]);
+        return sum;
+    }
+
+    /// <summary>F at the nodes of the quadrature, for a fault that was solved alone.</summary>
+    private Complex[] Samples(DecayPart part)
+    {
+        var samples = part.ImpedancesOf(_node);
+        for (var q = 0; q < samples.Length; q++)
+        {
+            var node = part.Rule.Nodes[q];
+            samples[q] = 1.0 / (node * (samples[q] + _solution.VariantAt(node).OfFault(_faultPu)));
+        }
+        return samples;
+    }
+}

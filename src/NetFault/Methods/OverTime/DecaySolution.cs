@@ -1,0 +1,87 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// The quadratures of one study and what they need of its networks: for each window of time that is asked for, a rule that meets the error
+/// asked for, and at each of its nodes p the network factored and Zkk(p) of every bus taken. Made when first asked for; safe for many threads.
+/// </summary>
+internal sealed class DecaySolution
+{
+    private readonly StudyNetworks _networks;
+    private readonly bool _quasiStatic;
+    private readonly double _errorLimit;
+    private readonly double _horizonAngle;
+    private readonly OperationalSource?[] _sources;
+    private readonly Lazy<PoleRegion> _region;
+    private readonly DecayPart[] _parts;
+
+    /// <param name="networks">The study's networks.</param>
+    /// <param name="quasiStatic">Whether reactances are kept at rated frequency.</param>
+    /// <param name="horizonAngle">ω times the horizon.</param>
+    /// <param name="errorLimit">The largest bound of the error that is accepted.</param>
+    public DecaySolution(StudyNetworks networks, bool quasiStatic, double horizonAngle, double errorLimit)
+    {
+        _networks = networks;
+        _quasiStatic = quasiStatic;
+        _horizonAngle = horizonAngle;
+        _errorLimit = errorLimit;
+        _sources = OperationalSources.Of(networks.Circuit, log: null);
+        _region = new(() => new PoleRegion(NetworkPoles.LimitsOf(networks, _sources, quasiStatic), quasiStatic));
+        var windows = quasiStatic ? DecayWindow.QuasiStatic : DecayWindow.Exact;
+        _parts = windows.Select(window => new DecayPart(this, window)).ToArray();
+    }
+
+    /// <summary>The window's part for a time.</summary>
+    /// <param name="angle">ω·t, within the horizon.</param>
+    public DecayPart PartAt(double angle) => _parts.First(part => angle <= part.Window.LastAngle);
+
+    /// <summary>The parts that a horizon needs.</summary>
+    public IEnumerable<DecayPart> PartsOfHorizon => _parts.Where(part => part.Window.FirstAngle < _horizonAngle);
+
+    /// <summary>The network at a node of the quadrature.</summary>
+    public SolvedNetwork NetworkAt(Complex node)
+    {
+        var s = _quasiStatic ? Complex.ImaginaryOne : node + Complex.ImaginaryOne;
+        var impedances = Array.ConvertAll(_sources, source => source?.ImpedancePu(node, s));
+        return SolvedNetwork.Of(_networks.Matrix, impedances, _networks.Circuit.BranchImpedances, VariantAt(node));
+    }
+
+    /// <summary>The network's description at a node; the fault's impedance follows from it.</summary>
+    public NetworkVariant VariantAt(Complex node) => new()
+    {
+        Name = "network at a node of the quadrature",
+        ReactanceFactor = _quasiStatic ? null : node + Complex.ImaginaryOne,
+        IsAtNode = true,
+    };
+
+    /// <summary>The first rule of a window that meets the error asked for.</summary>
+    /// <exception cref="CurrentOverTimeException">None does.</exception>
+    public QuadratureRule RuleOf(DecayWindow window)
+    {
+        var best = double.PositiveInfinity;
+        QuadratureRule? last = null;
+        foreach (var table in window.Tables)
+        {
+            last = new QuadratureRule(table, _region.Value);
+            best = window.Probes(_horizonAngle).Max(angle => last.At(angle).Error);
+            if (best <= WantedError)
+                return last;
+        }
+        return best <= _errorLimit && last is not null ? last : throw TooLarge(best);
+    }
+
+    /// <summary>Refuses a time at which the bound is above what is accepted, which the times that were probed did not show.</summary>
+    public void RefuseAbove(double bound)
+    {
+        if (bound > _errorLimit)
+            throw TooLarge(bound);
+    }
+
+    /// <summary>Quasi-static decay is cheap to have nearly to rounding; the inductances' transients are held to what was asked for.</summary>
+    private double WantedError => _quasiStatic ? Math.Min(_errorLimit, 1e-9) : 0.7 * _errorLimit;
+
+    private CurrentOverTimeException TooLarge(double bound) => CurrentOverTimeException.Because(
+        FormattableString.Invariant($"the error bound is {bound:0.#e+0} of I″k, above the {_errorLimit:0.#e+0} that MachineDecrement.DecayErrorLimit accepts"),
+        "raise DecayErrorLimit; or look at the largest R/X and the shortest time constants of the network, which make it so large");
+}

@@ -1,0 +1,150 @@
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// Finds what bounds the poles of a network, and refuses networks whose poles nothing bounds. The argument of <see cref="PoleRegion"/> holds for
+/// impedances with R ≥ 0 and X &gt; 0; three-winding transformers are tested as one three-port, and negative reactances by the inertia of the
+/// network's matrices, which tells whether all currents that Kirchhoff's law allows see positive reactances together.
+/// </summary>
+internal sealed class NetworkPoles
+{
+    /// <summary>Machines whose shares and rates differ by less than this are alike to the region.</summary>
+    private const double SharesAlike = 0.02, RatesAlike = 1.0 / 16.0;
+
+    /// <summary>Room for the directions of impedances in a bound that is found from magnitudes.</summary>
+    private const double MotorMargin = 1.25;
+
+    private readonly StudyNetworks _networks;
+    private readonly Circuit _circuit;
+    private readonly OperationalSource[] _sources;
+    private readonly bool _quasiStatic;
+    private double _largestRatio;
+    private bool _hasNegative;
+
+    private NetworkPoles(StudyNetworks networks, IEnumerable<OperationalSource?> sources, bool quasiStatic)
+    {
+        _networks = networks;
+        _circuit = networks.Circuit;
+        _sources = sources.OfType<OperationalSource>().ToArray();
+        _quasiStatic = quasiStatic;
+    }
+
+    /// <summary>The limits of a network's poles.</summary>
+    /// <param name="networks">The study's networks.</param>
+    /// <param name="sources">Its operational sources.</param>
+    /// <param name="quasiStatic">Whether reactances are kept at rated frequency.</param>
+    /// <exception cref="CurrentOverTimeException">Nothing bounds them.</exception>
+    public static PoleLimits LimitsOf(StudyNetworks networks, OperationalSource?[] sources, bool quasiStatic)
+    {
+        var work = new NetworkPoles(networks, sources, quasiStatic);
+        work.ReadBranches();
+        foreach (var source in work._sources)
+            work.TakeRatio(source.ResistanceRatio);
+        if (work._hasNegative)
+            work._largestRatio = NegativeReactances.LargestRatio(networks, sources, work._largestRatio);
+        return new PoleLimits
+        {
+            LargestResistanceRatio = work._largestRatio,
+            Machines = work.DifferentMachines(),
+            MotorRates = work.DifferentMotorRates(),
+            LargestMotorResistanceRatio = work.Motors.Select(motor => motor.ResistanceRatio).DefaultIfEmpty().Max(),
+            MotorsSee = work.Motors.Any() ? MotorMargin * work.LargestVoltageOfMotors(sources) : 0.0,
+        };
+    }
+
+    private IEnumerable<OperationalSource> Motors => _sources.Where(source => source.MotorRate > 0.0);
+
+    private void ReadBranches()
+    {
+        for (var i = 0; i < _circuit.Branches.Length; i++)
+        {
+            switch (_circuit.Branches[i].Kind)
+            {
+                case BranchKind.Series:
+                    ReadSeries(i);
+                    break;
+                case BranchKind.StarFirst:
+                    ReadStar(i);
+                    break;
+                case BranchKind.Capacitor when _quasiStatic:
+                    _hasNegative = true;
+                    break;
+                case BranchKind.Capacitor:
+                    throw CurrentOverTimeException.Of(_circuit, [i],
+                        "a series capacitor oscillates with the network's inductances, so that AC and DC component are not the only ones",
+                        "take AcComponentRule.QuasiStatic and DcDecayRule.ByXOverR, or set voltage_limited where its protection bridges it");
+            }
+        }
+    }
+
+    private void ReadSeries(int branch)
+    {
+        var z = _circuit.BranchImpedances[branch];
+        if (z.Real < 0.0)
+            throw CurrentOverTimeException.Of(_circuit, [branch], "its resistance is negative: nothing bounds how its currents decay", Held);
+        if (z.Imaginary < 0.0)
+            _hasNegative = true;
+        else
+            TakeRatio(z.Real / z.Imaginary);
+    }
+
+    /// <summary>
+    /// The star as the impedance matrices R and X of its two independent currents: X must be positive definite, R not negative; its R/X then lie
+    /// between the eigenvalues of R against X.
+    /// </summary>
+    private void ReadStar(int first)
+    {
+        Complex a = _circuit.BranchImpedances[first], b = _circuit.BranchImpedances[first + 1], c = _circuit.BranchImpedances[first + 2];
+        double x11 = a.Imaginary + c.Imaginary, x22 = b.Imaginary + c.Imaginary, x12 = c.Imaginary;
+        double r11 = a.Real + c.Real, r22 = b.Real + c.Real, r12 = c.Real;
+        double determinant = x11 * x22 - x12 * x12, ofR = r11 * r22 - r12 * r12;
+        var rounding = 1e-12 * (r11 + r22) * (r11 + r22);
+        if (x11 <= 0.0 || determinant <= 0.0 || r11 < 0.0 || r22 < 0.0 || ofR < -rounding)
+            throw CurrentOverTimeException.Of(_circuit, [first], "the impedances of its pairs of windings are not those of a passive transformer", Held);
+        // Eigenvalues of R against X: λ²·det X − λ·t + det R = 0.
+        var t = r11 * x22 + r22 * x11 - 2.0 * r12 * x12;
+        var root = Math.Sqrt(Math.Max(0.0, t * t - 4.0 * determinant * ofR));
+        TakeRatio((t + root) / (2.0 * determinant));
+    }
+
+    private const string Held = "take AcComponentRule.HeldAtInitial and DcDecayRule.ByXOverR";
+
+    private void TakeRatio(double ratio) => _largestRatio = Math.Max(_largestRatio, ratio);
+
+    private List<OperationalSource> DifferentMachines() => _sources
+        .Where(source => source.TransientRate > 0.0 || source.SubtransientRate > 0.0)
+        .GroupBy(source => (
+            Math.Round(source.TransientShare / SharesAlike), Math.Round(source.SubtransientShare / SharesAlike),
+            Ring(source.TransientRate), Ring(source.SubtransientRate)))
+        .Select(group => group.First())
+        .ToList();
+
+    private List<double> DifferentMotorRates() =>
+        Motors.Select(motor => motor.MotorRate).GroupBy(Ring).Select(group => group.Max()).ToList();
+
+    private static double Ring(double rate) => rate > 0.0 ? Math.Round(Math.Log(rate) / RatesAlike) : double.NegativeInfinity;
+
+    /// <summary>
+    /// The largest impedance that the motors see together, over their own. Let them all draw their locked-rotor current, 1/|Z|, from the network
+    /// with the synchronous reactances: the voltage at them is that ratio (with A the impedances between motors and D their own, the norm of
+    /// D^(-1/2)·A·D^(-1/2) is not above the largest row of |A|·1/|Z|). A fault only brings it down.
+    /// </summary>
+    private double LargestVoltageOfMotors(OperationalSource?[] sources)
+    {
+        var currents = new Complex[_circuit.NodeCount];
+        for (var i = 0; i < sources.Length; i++)
+        {
+            if (sources[i] is { MotorRate: > 0.0 } motor)
+                currents[_circuit.Sources[i].Node] += 1.0 / Math.Sqrt(motor.Resistance * motor.Resistance + motor.Reactance * motor.Reactance);
+        }
+        var voltages = _networks.Of(MachineDecrement.SteadyState).Solve(currents);
+        var largest = 0.0;
+        for (var i = 0; i < voltages.Length; i++)
+        {
+            if (currents[i] != Complex.Zero)
+                largest = Math.Max(largest, Complex.Abs(voltages[i]));
+        }
+        return largest;
+    }
+}

@@ -1,0 +1,153 @@
+using System.Collections.Concurrent;
+using System.Numerics;
+
+namespace NetFault;
+
+/// <summary>
+/// Where the poles of a network's fault currents can lie, found from its data alone, as points of the regions' edges in units of ω. A pole is
+/// possible at p only where no open half-plane holds the impedances of all branches at p (else Σ z·|i|² = 0 has no solution but i = 0), so that
+/// an edge consists of the poles of one machine behind an external impedance w, of which only the direction is bounded: w = κ·e^(jθ) with
+/// tan θ ≥ 1/(largest R/X). The error of a quadrature is analytic between the edges, so it is largest on them.
+/// </summary>
+internal sealed class PoleRegion
+{
+    /// <summary>
+    /// Points of an edge for each e-fold of distance from the point about which the cluster lies: a rule of some 60 nodes has no more than about 5
+    /// extremes of its error in one. A small region has more, for it takes more points than nodes to hold a rule down everywhere.
+    /// </summary>
+    private const int FewestAnEFold = 10, MostAnEFold = 160, PointsANode = 2;
+
+    /// <summary>So many points at which errors are looked up come on one that weights are fitted to.</summary>
+    private const double ChecksAPoint = 2.4;
+
+    /// <summary>Poles that decay faster than this many times ω are not resolved: they are gone within 0.2 ms.</summary>
+    public const double LargestDcRate = 100.0;
+
+    private readonly PoleLimits _limits;
+    private readonly bool _quasiStatic;
+    private readonly ConcurrentDictionary<int, EdgePoints> _edges = new();
+
+    /// <param name="limits">What bounds the network's poles.</param>
+    /// <param name="quasiStatic">Whether reactances are kept at rated frequency.</param>
+    public PoleRegion(PoleLimits limits, bool quasiStatic)
+    {
+        _limits = limits;
+        _quasiStatic = quasiStatic;
+    }
+
+    /// <summary>Where poles of the AC component can lie, in enough points for a rule of so many nodes.</summary>
+    public PolePoints Ac(int nodes) => Enough(nodes, (edges, density) => edges.Ac(density));
+
+    /// <summary>Where poles of the DC component can lie; none where reactances are kept at rated frequency.</summary>
+    public PolePoints Dc(int nodes) => Enough(nodes, (edges, density) => edges.Dc(density));
+
+    private PolePoints Enough(int nodes, Func<EdgePoints, double, Complex[]> points)
+    {
+        for (var density = FewestAnEFold;; density *= 2)
+        {
+            var edges = _edges.GetOrAdd(density, Edges);
+            var fit = points(edges, density);
+            if (fit.Length <= 1 || fit.Length >= PointsANode * nodes || density >= MostAnEFold)
+                return new PolePoints(fit, points(edges, ChecksAPoint * density));
+        }
+    }
+
+    private EdgePoints Edges(int density)
+    {
+        var edges = new EdgePoints(_quasiStatic);
+        edges.Add(Complex.Zero);
+        if (!_quasiStatic)
+            AddNetworkAlone(edges, density);
+        var external = External(double.PositiveInfinity, density).ToList();
+        foreach (var machine in _limits.Machines)
+            AddMachine(edges, machine, external);
+        external = External(_limits.MotorsSee, density).ToList();
+        foreach (var rate in _limits.MotorRates)
+            AddMotor(edges, rate, external);
+        return edges;
+    }
+
+    /// <summary>Resistances and constant inductances alone have their poles at p = −j − λ, λ between the extremes of their R/X.</summary>
+    private void AddNetworkAlone(EdgePoints edges, int density)
+    {
+        edges.Add(-Complex.ImaginaryOne);
+        var last = Math.Min(_limits.LargestResistanceRatio, LargestDcRate);
+        if (last <= 0.0)
+            return;
+        foreach (var rate in Steps(1e-4 * last, last, density))
+            edges.Add(new Complex(-rate, -1.0));
+    }
+
+    /// <summary>
+    /// A machine behind w: s·(p + g1)(p + g2) + w·[(p + g1)(p + g2) − y1·g1·(p + g2) − y2·g2·(p + g1)] = 0, w = x·s + μ.
+    /// </summary>
+    private static void AddMachine(EdgePoints edges, OperationalSource machine, List<Complex> external)
+    {
+        double g1 = machine.TransientRate, g2 = machine.SubtransientRate;
+        double sum = g1 + g2, product = g1 * g2;
+        var linear = sum - machine.TransientShare * g1 - machine.SubtransientShare * g2;
+        var constant = product * (1.0 - machine.TransientShare - machine.SubtransientShare);
+        foreach (var w in external)
+        {
+            double x = w.Imaginary, mu = w.Real;
+            var weighted = new[] { constant, linear, 1.0 };
+            edges.AddRootsOf(atS: [product + x * constant, sum + x * linear, 1.0 + x], alone: Array.ConvertAll(weighted, value => value * mu));
+        }
+    }
+
+    /// <summary>A motor behind w: (ρ + s)·(p + g) + (x·s + μ)·p = 0. What a motor sees is bounded, so w is.</summary>
+    private void AddMotor(EdgePoints edges, double rate, List<Complex> external)
+    {
+        foreach (var rho in new[] { 0.0, _limits.LargestMotorResistanceRatio }.Distinct())
+        {
+            foreach (var w in external)
+                edges.AddRootsOf(atS: [rate, 1.0 + w.Imaginary], alone: [rho * rate, rho + w.Real]);
+        }
+    }
+
+    /// <summary>External impedances on the edges of the sector in which they lie, from 0 to the largest, over the machine's own reactance.</summary>
+    private IEnumerable<Complex> External(double largest, int density)
+    {
+        yield return Complex.Zero;
+        var last = double.IsInfinity(largest) ? 1e3 : largest;
+        var flattest = Math.Atan2(1.0, _limits.LargestResistanceRatio);
+        foreach (var size in Steps(Math.Min(1e-2, 0.1 * last), last, density))
+        {
+            yield return Complex.FromPolarCoordinates(size, flattest);
+            yield return Complex.FromPolarCoordinates(size, Math.PI / 2.0);
+        }
+        for (var i = 1; i < 2 * density && !double.IsInfinity(largest); i++)
+            yield return Complex.FromPolarCoordinates(last, flattest + i / (2.0 * density) * (Math.PI / 2.0 - flattest));
+    }
+
+    private static IEnumerable<double> Steps(double first, double last, int density)
+    {
+        var count = (int)Math.Ceiling(ChecksAPoint * density * Math.Log(last / first)) + 1;
+        for (var i = 0; i <= count; i++)
+            yield return first * Math.Pow(last / first, (double)i / count);
+    }
+}
+
+/// <summary>Points of the edges of the region of one cluster.</summary>
+/// <param name="Fit">Those that weights are fitted to.</param>
+/// <param name="Check">More of them, at which the error is looked up.</param>
+internal sealed record PolePoints(Complex[] Fit, Complex[] Check);
+
+/// <summary>What bounds the places of a network's poles; each figure holds for the whole network.</summary>
+internal sealed record PoleLimits
+{
+    /// <summary>The largest R/X of a branch, feeder or machine; infinite where one has no reactance.</summary>
+    public required double LargestResistanceRatio { get; init; }
+
+    /// <summary>Synchronous machines with time constants, those that differ.</summary>
+    public required IReadOnlyList<OperationalSource> Machines { get; init; }
+
+    /// <summary>The decay rates of the motors, those that differ.</summary>
+    public required IReadOnlyList<double> MotorRates { get; init; }
+
+    /// <summary>The largest R/X of a motor.</summary>
+    public double LargestMotorResistanceRatio { get; init; }
+
+    /// <summary>The largest impedance that the motors together see towards the rest of the network, over their own.</summary>
+    public double MotorsSee { get; init; }
+}
