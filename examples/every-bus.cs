@@ -7,8 +7,11 @@
 //     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --csv plant.csv
 //     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --method iec --case min
 //
+//     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --method ieee --current e/x
+//
 // --method decrement (default) takes --prefault and --x-over-r complex|separate; --method iec, which is IEC 60909-0, takes
-// --case max|min and --x-over-r a|b|c, the standard's three ways to the factor kappa.
+// --case max|min and --x-over-r a|b|c, the standard's three ways to the factor kappa; --method ieee, which is IEEE C37.010, takes
+// --prefault and --current e/z|e/x, and its times --at are contact-parting times.
 //
 // Exit codes: 0 done, 1 the network cannot be read or solved, 2 wrong arguments.
 
@@ -18,7 +21,8 @@ using NetFault;
 
 const string Usage =
     "usage: dotnet run examples/every-bus.cs -- NETWORK.yaml [--csv FILE] [--json FILE]"
-    + " [--at SECONDS[,SECONDS...]] [--method decrement|iec] [--case max|min] [--x-over-r complex|separate|a|b|c] [--prefault PU]";
+    + " [--at SECONDS[,SECONDS...]] [--method decrement|iec|ieee] [--case max|min] [--current e/z|e/x] [--x-over-r complex|separate|a|b|c]"
+    + " [--prefault PU]";
 
 Console.OutputEncoding = Encoding.UTF8;
 try
@@ -63,7 +67,7 @@ static void Run(Arguments arguments)
 /// <summary>What the command line asks for.</summary>
 sealed record Arguments(string NetworkPath, FaultMethod Method, ReportOptions Report, string? CsvPath, string? JsonPath)
 {
-    private static readonly string[] Known = ["--csv", "--json", "--at", "--method", "--case", "--x-over-r", "--prefault"];
+    private static readonly string[] Known = ["--csv", "--json", "--at", "--method", "--case", "--current", "--x-over-r", "--prefault"];
 
     public static Arguments Parse(string[] args)
     {
@@ -88,22 +92,38 @@ sealed record Arguments(string NetworkPath, FaultMethod Method, ReportOptions Re
 
     private static FaultMethod MethodOf(Dictionary<string, string> options) => options.GetValueOrDefault("--method", "decrement") switch
     {
-        "decrement" => Without("--case", options, "goes with --method iec", () => new MachineDecrement
+        "decrement" => Without(options, [("--case", OnlyIec), ("--current", OnlyIeee)], () => new MachineDecrement
         {
             PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
             XOverRRule = Choice(options, "--x-over-r", ("complex", XOverRRule.ComplexImpedance), ("separate", XOverRRule.SeparateNetworks)),
         }),
-        "iec" => Without("--prefault", options, "goes with --method decrement: IEC 60909-0 has its factor c", () => new Iec60909
+        "iec" => Without(options, [("--prefault", "does not go with --method iec: IEC 60909-0 has its factor c"), ("--current", OnlyIeee)], () => new Iec60909
         {
             Case = Choice(options, "--case", ("max", ShortCircuitCase.Maximum), ("min", ShortCircuitCase.Minimum)),
             XOverRRule = Choice(options, "--x-over-r",
                 ("c", XOverRRule.EquivalentFrequency), ("b", XOverRRule.ComplexImpedance), ("a", XOverRRule.SmallestRatio)),
         }),
-        var other => throw new UsageException($"--method {other}: decrement or iec"),
+        "ieee" => Without(options, [("--case", OnlyIec), ("--x-over-r", "does not go with --method ieee: IEEE C37.010 asks for separate networks")], () => new IeeeC37
+        {
+            PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
+            CurrentRule = Choice(options, "--current", ("e/z", IeeeCurrentRule.EOverZ), ("e/x", IeeeCurrentRule.EOverX)),
+        }),
+        var other => throw new UsageException($"--method {other}: decrement, iec or ieee"),
     };
 
-    private static FaultMethod Without(string option, Dictionary<string, string> options, string why, Func<FaultMethod> make) =>
-        options.ContainsKey(option) ? throw new UsageException($"{option} {why}") : make();
+    private const string OnlyIec = "goes with --method iec";
+    private const string OnlyIeee = "goes with --method ieee";
+
+    /// <summary>The method, unless an option is given that it does not know.</summary>
+    private static FaultMethod Without(Dictionary<string, string> options, (string Option, string Why)[] unknown, Func<FaultMethod> make)
+    {
+        foreach (var (option, why) in unknown)
+        {
+            if (options.ContainsKey(option))
+                throw new UsageException($"{option} {why}");
+        }
+        return make();
+    }
 
     /// <summary>The value of the word given, of the first word where none is.</summary>
     private static T Choice<T>(Dictionary<string, string> options, string option, params (string Word, T Value)[] choices)

@@ -83,7 +83,7 @@ public sealed class BusFault
     /// <summary>
     /// The peak short-circuit current ip, an instantaneous value in kA. By <see cref="MachineDecrement"/> the exact maximum over time for a
     /// fault at voltage zero, with the AC component held at I″k and the DC component by <see cref="DcDecayRule"/>, 2√2·I″k where that is
-    /// undamped; by <see cref="NetFault.Iec60909"/> κ·√2·I″k.
+    /// undamped, and by <see cref="NetFault.IeeeC37"/> the same of the first-cycle current; by <see cref="NetFault.Iec60909"/> κ·√2·I″k.
     /// </summary>
     public double PeakKa => _currents?.PeakKa ?? 0.0;
 
@@ -102,6 +102,12 @@ public sealed class BusFault
     /// </summary>
     public Iec60909Result? Iec60909 => _currents?.Standard;
 
+    /// <summary>
+    /// What IEEE Std C37.010 gives beyond these: interrupting and 30-cycle currents, multiplying factors, contributions; null by another
+    /// method and at a de-energised bus.
+    /// </summary>
+    public IeeeC37Result? IeeeC37 => _currents?.Ieee;
+
     /// <summary>Whether this is a result of a study.</summary>
     internal bool IsOf(StudyContext context) => ReferenceEquals(_context, context);
 
@@ -110,7 +116,7 @@ public sealed class BusFault
     /// <summary>
     /// The DC component i_dc(t) of the phase with the largest one, in kA, an instantaneous value: √2·I″k·e^(−ω·t/(X/R)), undamped where there
     /// is no X/R. By IEC 60909-0 the X/R is that of the equivalent frequency for the time, and what full-size converters add has no DC
-    /// component.
+    /// component. By IEEE Std C37.010 current and X/R are those of the first-cycle network before 1.5 cycles, then of the interrupting one.
     /// </summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
@@ -122,7 +128,7 @@ public sealed class BusFault
 
     /// <summary>
     /// The RMS value of the AC component in kA, as <see cref="AcComponentRule"/> says: I″k at all times, or by IEC 60909-0 the breaking
-    /// current Ib of this minimum time delay.
+    /// current Ib of this minimum time delay, or by IEEE Std C37.010 the current of the time's network.
     /// </summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>

@@ -43,7 +43,7 @@ internal sealed class FlowSolution
     {
         var solved = state.Basis.Network;
         var column = solved.Column(node, out var residual);
-        var zk = column[node] + faultImpedancePu;
+        var zk = column[node] + solved.Variant.OfFault(faultImpedancePu);
         state.Residual = residual;
         state.Fault = state.Basis.DrivingVoltagePu / zk;
         var phase = state.Fault / Complex.Abs(state.Fault);
