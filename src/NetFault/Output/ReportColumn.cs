@@ -69,7 +69,7 @@ internal sealed record ReportColumn(string Name, string? Symbol, string Unit, Fu
         if (method is Iec60909)
             yield return new($"symmetrical_rms_ka_at_{time}_s", $"Ib({time} s)", "kA", fault => fault.SymmetricalRmsKa(seconds));
         if (method is IeeeC37)
-            yield return new($"symmetrical_rms_ka_at_{time}_s", $"Iac({time} s)", "kA", fault => fault.SymmetricalRmsKa(seconds));
+            yield return new($"symmetrical_rms_ka_at_{time}_s", null, "kA", fault => fault.SymmetricalRmsKa(seconds));
         yield return new($"dc_component_ka_at_{time}_s", $"i_dc({time} s)", "kA", fault => fault.DcComponentKa(seconds));
         yield return new($"asymmetrical_rms_ka_at_{time}_s", $"I_asym({time} s)", "kA", fault => fault.AsymmetricalRmsKa(seconds));
     }

@@ -72,7 +72,7 @@ public static class IeeeMultiplyingFactors
         return Math.Max(1.0, TotalCurrent(contactPartingCycles, xOverR) / ratioS);
     }
 
-    /// <summary>Peak over symmetrical RMS current at half a cycle: √2·(1 + e^(−π/(X/R))). The exact peak comes earlier and is up to 1 % higher.</summary>
+    /// <summary>Peak over symmetrical RMS current at half a cycle: √2·(1 + e^(−π/(X/R))). The exact peak comes earlier and is up to about 3 % higher.</summary>
     /// <param name="xOverR">X/R, above 0.</param>
     /// <exception cref="ArgumentOutOfRangeException">Not above 0.</exception>
     public static double HalfCyclePeak(double xOverR) => PerUnit.Sqrt2 * (1.0 + Math.Exp(-Math.PI / Ratio(xOverR)));
