@@ -90,39 +90,44 @@ sealed record Arguments(string NetworkPath, FaultMethod Method, ReportOptions Re
         return new Arguments(paths[0], MethodOf(options), ReportOf(options), csvPath, jsonPath);
     }
 
-    private static FaultMethod MethodOf(Dictionary<string, string> options) => options.GetValueOrDefault("--method", "decrement") switch
+    private static FaultMethod MethodOf(Dictionary<string, string> options)
     {
-        "decrement" => Without(options, [("--case", OnlyIec), ("--current", OnlyIeee)], () => new MachineDecrement
+        var method = options.GetValueOrDefault("--method", "decrement");
+        if (method is not ("decrement" or "iec" or "ieee"))
+            throw new UsageException($"--method {method}: decrement, iec or ieee");
+        Refuse(options, "--case", method != "iec", "goes with --method iec");
+        Refuse(options, "--current", method != "ieee", "goes with --method ieee");
+        Refuse(options, "--prefault", method == "iec", "does not go with --method iec: IEC 60909-0 has its factor c");
+        Refuse(options, "--x-over-r", method == "ieee", "does not go with --method ieee: IEEE C37.010 asks for separate networks");
+        return method switch
         {
-            PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
-            XOverRRule = Choice(options, "--x-over-r", ("complex", XOverRRule.ComplexImpedance), ("separate", XOverRRule.SeparateNetworks)),
-        }),
-        "iec" => Without(options, [("--prefault", "does not go with --method iec: IEC 60909-0 has its factor c"), ("--current", OnlyIeee)], () => new Iec60909
-        {
-            Case = Choice(options, "--case", ("max", ShortCircuitCase.Maximum), ("min", ShortCircuitCase.Minimum)),
-            XOverRRule = Choice(options, "--x-over-r",
-                ("c", XOverRRule.EquivalentFrequency), ("b", XOverRRule.ComplexImpedance), ("a", XOverRRule.SmallestRatio)),
-        }),
-        "ieee" => Without(options, [("--case", OnlyIec), ("--x-over-r", "does not go with --method ieee: IEEE C37.010 asks for separate networks")], () => new IeeeC37
-        {
-            PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
-            CurrentRule = Choice(options, "--current", ("e/z", IeeeCurrentRule.EOverZ), ("e/x", IeeeCurrentRule.EOverX)),
-        }),
-        var other => throw new UsageException($"--method {other}: decrement, iec or ieee"),
-    };
+            "decrement" => new MachineDecrement
+            {
+                PrefaultVoltagePu = Prefault(options),
+                XOverRRule = Choice(options, "--x-over-r",
+                    ("complex", XOverRRule.ComplexImpedance), ("separate", XOverRRule.SeparateNetworks)),
+            },
+            "iec" => new Iec60909
+            {
+                Case = Choice(options, "--case", ("max", ShortCircuitCase.Maximum), ("min", ShortCircuitCase.Minimum)),
+                XOverRRule = Choice(options, "--x-over-r",
+                    ("c", XOverRRule.EquivalentFrequency), ("b", XOverRRule.ComplexImpedance), ("a", XOverRRule.SmallestRatio)),
+            },
+            _ => new IeeeC37
+            {
+                PrefaultVoltagePu = Prefault(options),
+                CurrentRule = Choice(options, "--current", ("e/z", IeeeCurrentRule.EOverZ), ("e/x", IeeeCurrentRule.EOverX)),
+            },
+        };
+    }
 
-    private const string OnlyIec = "goes with --method iec";
-    private const string OnlyIeee = "goes with --method ieee";
+    private static double Prefault(Dictionary<string, string> options) =>
+        Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false);
 
-    /// <summary>The method, unless an option is given that it does not know.</summary>
-    private static FaultMethod Without(Dictionary<string, string> options, (string Option, string Why)[] unknown, Func<FaultMethod> make)
+    private static void Refuse(Dictionary<string, string> options, string option, bool when, string why)
     {
-        foreach (var (option, why) in unknown)
-        {
-            if (options.ContainsKey(option))
-                throw new UsageException($"{option} {why}");
-        }
-        return make();
+        if (when && options.ContainsKey(option))
+            throw new UsageException($"{option} {why}");
     }
 
     /// <summary>The value of the word given, of the first word where none is.</summary>

@@ -6,8 +6,8 @@ namespace NetFault;
 internal static class IeeeC37Columns
 {
     /// <summary>
-    /// The networks' currents, and for each of the options' instants, as contact-parting times, multiplying factor and duty. Contributions are
-    /// not among them: they cost a solve a bus.
+    /// The networks' currents, and for each of the options' instants, as contact-parting times, multiplying factor and duty.
+    /// Contributions are not among them: they cost a solve a bus.
     /// </summary>
     public static IEnumerable<ReportColumn> Of(ReportOptions options)
     {
@@ -19,9 +19,12 @@ internal static class IeeeC37Columns
         foreach (var seconds in options.InstantsSeconds)
         {
             var time = seconds.ToString("R", CultureInfo.InvariantCulture);
-            yield return new($"multiplying_factor_at_{time}_s", $"MF({time} s)", "", fault => Value(fault, one => one.MultiplyingFactor(one.Cycles(seconds))));
             yield return new(
-                $"interrupting_duty_ka_at_{time}_s", $"duty({time} s)", "kA", fault => Value(fault, one => one.InterruptingDutyKa(one.Cycles(seconds))));
+                $"multiplying_factor_at_{time}_s", $"MF({time} s)", "",
+                fault => Value(fault, one => one.MultiplyingFactor(one.Cycles(seconds))));
+            yield return new(
+                $"interrupting_duty_ka_at_{time}_s", $"duty({time} s)", "kA",
+                fault => Value(fault, one => one.InterruptingDutyKa(one.Cycles(seconds))));
         }
     }
 

@@ -11,8 +11,10 @@ internal static class ReportTexts
     /// <summary>How the method treats AC and DC over time, in one line.</summary>
     public static string MethodLine(FaultMethod method) => method switch
     {
-        Iec60909 => $"Method: {method.Name}; kappa by {RuleName(method.RatioRule)}; DC component by equivalent frequency; AC component over time is Ib.",
-        IeeeC37 => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; first-cycle, interrupting (from 1.5 cycles) and 30-cycle networks; "
+        Iec60909 => $"Method: {method.Name}; kappa by {RuleName(method.RatioRule)}; "
+            + "DC component by equivalent frequency; AC component over time is Ib.",
+        IeeeC37 => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; "
+            + "first-cycle, interrupting (from 1.5 cycles) and 30-cycle networks; "
             + "remote multiplying factors, no AC decrement credited for local generators.",
         _ => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; DC component by X/R; AC component held at I″k over time.",
     };

@@ -46,7 +46,8 @@ public class ContributionTests
             new Bus { Id = "A2", NominalKv = 13.8 }, new Line { Id = "cable", From = "A", To = "A2", PerUnit = new Impedance(0, 0.1) },
             new Transformer
             {
-                Id = "T3", Hv = "B", Lv = "A2", RatedMva = 50, RatedHvKv = 115, RatedLvKv = 13.8, ShortCircuitVoltagePercent = 10, ResistivePercent = 0,
+                Id = "T3", Hv = "B", Lv = "A2", RatedMva = 50, RatedHvKv = 115, RatedLvKv = 13.8,
+                ShortCircuitVoltagePercent = 10, ResistivePercent = 0,
             });
         new FaultStudy(network, new IeeeC37()).At("A2").IeeeC37!.Contributions.Single(one => one.Id == "G").Transformations.Should().Be(0);
     }
@@ -54,7 +55,8 @@ public class ContributionTests
     [Fact]
     public void Motors_and_condensers_have_their_kinds()
     {
-        // At A: a condenser, a synchronous motor of 10 MVA and 0.25 with its 1.5, beside the generator 0.4 and the way to the feeder 0.2 + 0.2 + 0.4.
+        // At A: a condenser, a synchronous motor of 10 MVA and 0.25 with its 1.5, beside the generator 0.4 and the way to the feeder,
+        // 0.2 + 0.2 + 0.4.
         var network = Chain(10).With(Machine("motor", SynchronousService.Motor), Machine("condenser", SynchronousService.Condenser));
         var result = new FaultStudy(network, new IeeeC37()).At("A").IeeeC37!;
         double all = 1 / 0.4 + 1 / 0.8 + 1 / 3.75 + 1 / 2.5;
@@ -71,14 +73,19 @@ public class ContributionTests
 
     private static Network Chain(double secondPercent) => new NetworkBuilder { FrequencyHz = 60, BaseMva = 100 }.Add(
         new Bus { Id = "A", NominalKv = 13.8 }, new Bus { Id = "B", NominalKv = 115 }, new Bus { Id = "C", NominalKv = 34.5 },
-        new SynchronousMachine { Id = "G", Bus = "A", RatedMva = 50, ReactancePu = new MachineReactances(0.2, 0.3), ArmatureResistancePu = 0 },
-        new Transformer
+        new SynchronousMachine
         {
-            Id = "T1", Hv = "B", Lv = "A", RatedMva = 50, RatedHvKv = 115, RatedLvKv = 13.8, ShortCircuitVoltagePercent = 10, ResistivePercent = 0,
+            Id = "G", Bus = "A", RatedMva = 50, ReactancePu = new MachineReactances(0.2, 0.3), ArmatureResistancePu = 0,
         },
         new Transformer
         {
-            Id = "T2", Hv = "B", Lv = "C", RatedMva = 50, RatedHvKv = 115, RatedLvKv = 34.5, ShortCircuitVoltagePercent = secondPercent, ResistivePercent = 0,
+            Id = "T1", Hv = "B", Lv = "A", RatedMva = 50, RatedHvKv = 115, RatedLvKv = 13.8,
+            ShortCircuitVoltagePercent = 10, ResistivePercent = 0,
+        },
+        new Transformer
+        {
+            Id = "T2", Hv = "B", Lv = "C", RatedMva = 50, RatedHvKv = 115, RatedLvKv = 34.5,
+            ShortCircuitVoltagePercent = secondPercent, ResistivePercent = 0,
         },
         new NetworkFeeder { Id = "U", Bus = "C", ShortCircuitMva = new MaxMin(250), ROverX = 0 }).Build();
 }

@@ -48,13 +48,15 @@ public class CurrentTests
         var zk = 20 / Math.Sqrt(3) / 10;
         double x = zk / Math.Sqrt(1.01), r = 0.1 * x;
         var fault = new Complex(0.5, 0.25);
-        foreach (var (rule, ohm) in new[] { (IeeeCurrentRule.EOverZ, new Complex(r + 0.5, x + 0.25).Magnitude), (IeeeCurrentRule.EOverX, x + 0.25) })
+        foreach (var rule in new[] { IeeeCurrentRule.EOverZ, IeeeCurrentRule.EOverX })
         {
+            var ohm = rule == IeeeCurrentRule.EOverZ ? new Complex(r + 0.5, x + 0.25).Magnitude : x + 0.25;
             var study = new FaultStudy(Plants.OneFeeder(0.1), new IeeeC37 { CurrentRule = rule });
             var at = study.At("Q", fault);
             at.InitialSymmetricalKa.Should().BeApproximately(20 / Math.Sqrt(3) / ohm, 1e-9);
             at.XOverR.Should().BeApproximately((x + 0.25) / (r + 0.5), 1e-9);
-            study.FlowsAt("Q", FaultInstant.Transient, fault).FaultCurrentKa.Magnitude.Should().BeApproximately(20 / Math.Sqrt(3) / ohm, 1e-9);
+            study.FlowsAt("Q", FaultInstant.Transient, fault).FaultCurrentKa.Magnitude
+                .Should().BeApproximately(20 / Math.Sqrt(3) / ohm, 1e-9);
         }
     }
 
@@ -69,8 +71,9 @@ public class CurrentTests
         result.InterruptingSymmetricalKa.Should().BeGreaterThan(result.ThirtyCycleSymmetricalKa);
         foreach (var (cycles, expected) in new[]
         {
-            (0, fault.InitialSymmetricalKa), (0.5, fault.InitialSymmetricalKa), (1.49, fault.InitialSymmetricalKa), (1.5, result.InterruptingSymmetricalKa),
-            (4, result.InterruptingSymmetricalKa), (29.9, result.InterruptingSymmetricalKa), (30, result.ThirtyCycleSymmetricalKa),
+            (0, fault.InitialSymmetricalKa), (0.5, fault.InitialSymmetricalKa), (1.49, fault.InitialSymmetricalKa),
+            (1.5, result.InterruptingSymmetricalKa), (4, result.InterruptingSymmetricalKa), (29.9, result.InterruptingSymmetricalKa),
+            (30, result.ThirtyCycleSymmetricalKa),
         })
         {
             fault.SymmetricalRmsKa(Cycle(cycles)).Should().Be(expected);
@@ -148,10 +151,12 @@ public class CurrentTests
         new NetworkFeeder { Id = "U", Bus = "B", ShortCircuitMva = new MaxMin(300), XOverR = 15 },
         new SynchronousMachine
         {
-            Id = "G", Bus = "B", RatedMva = 12, RatedKv = 13.8, ReactancePu = new MachineReactances(0.15, 0.24), ArmatureResistancePu = 0.004,
+            Id = "G", Bus = "B", RatedMva = 12, RatedKv = 13.8, ReactancePu = new MachineReactances(0.15, 0.24),
+            ArmatureResistancePu = 0.004,
         },
         new AsynchronousMotor
         {
-            Id = "M", Bus = "B", RatedKw = 1500, RatedKv = 13.2, RatedPowerFactor = 0.9, Efficiency = 0.95, LockedRotorCurrentRatio = 6, XOverR = 25, PolePairs = 2, Count = 2,
+            Id = "M", Bus = "B", RatedKw = 1500, RatedKv = 13.2, RatedPowerFactor = 0.9, Efficiency = 0.95, LockedRotorCurrentRatio = 6,
+            XOverR = 25, PolePairs = 2, Count = 2,
         }).Build();
 }

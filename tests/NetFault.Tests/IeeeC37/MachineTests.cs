@@ -1,8 +1,8 @@
 namespace NetFault.Tests.ByIeeeC37;
 
 /// <summary>
-/// Oracle: arithmetic by hand on one bus. Multipliers from memory of IEEE Std C37.010's table of rotating machine reactances, 1.67 from memory
-/// of IEEE Std 141.
+/// Oracle: arithmetic by hand on one bus. Multipliers from memory of IEEE Std C37.010's table of rotating machine reactances, 1.67 from
+/// memory of IEEE Std 141.
 /// </summary>
 public class MachineTests
 {
@@ -19,11 +19,13 @@ public class MachineTests
     [InlineData(746.0, 2, 60, 1.2, 3.0)]        // 1000 hp at 1800 r/min: not above
     [InlineData(895.2, 2, 60, 1.0, 1.5)]        // 1200 hp at 1800 r/min
     [InlineData(895.2, 6, 50, 1.0, 1.5)]        // 1200 hp at 500 r/min
-    public void Asynchronous_motors_contribute_by_size_and_speed(double kw, int? polePairs, double frequencyHz, double first, double interrupting)
+    public void Asynchronous_motors_contribute_by_size_and_speed(
+        double kw, int? polePairs, double frequencyHz, double first, double interrupting)
     {
         var fault = Solve(frequencyHz, new AsynchronousMotor
         {
-            Id = "M", Bus = "B", RatedKw = kw, RatedPowerFactor = 0.9, Efficiency = 0.95, LockedRotorCurrentRatio = 6, ROverX = 0, PolePairs = polePairs, Count = 3,
+            Id = "M", Bus = "B", RatedKw = kw, RatedPowerFactor = 0.9, Efficiency = 0.95, LockedRotorCurrentRatio = 6, ROverX = 0,
+            PolePairs = polePairs, Count = 3,
         });
         // Three motors at 6 times their rated current kw/(√3·4.16·0.9·0.95), in kA.
         var lockedRotorKa = 3 * 6 * kw / 1000 / (Math.Sqrt(3) * 4.16 * 0.9 * 0.95);
@@ -57,7 +59,8 @@ public class MachineTests
             new Bus { Id = "B", NominalKv = 4.16 },
             new SynchronousMachine
             {
-                Id = "S", Bus = "B", Service = SynchronousService.Motor, RatedMva = 5, ReactancePu = new MachineReactances(0.2), ArmatureResistancePu = 0.01,
+                Id = "S", Bus = "B", Service = SynchronousService.Motor, RatedMva = 5, ReactancePu = new MachineReactances(0.2),
+                ArmatureResistancePu = 0.01,
             }).Build(), new IeeeC37()).At("B");
         fault.XOverR.Should().BeApproximately(20, 1e-9);
         fault.IeeeC37!.InterruptingXOverR.Should().BeApproximately(20, 1e-9);
@@ -70,7 +73,8 @@ public class MachineTests
             new Bus { Id = "apart", NominalKv = 4.16 },
             new SynchronousMachine
             {
-                Id = "C", Bus = "apart", Service = SynchronousService.Condenser, RatedMva = 5, ReactancePu = new MachineReactances(0.2), ArmatureResistancePu = 0,
+                Id = "C", Bus = "apart", Service = SynchronousService.Condenser, RatedMva = 5, ReactancePu = new MachineReactances(0.2),
+                ArmatureResistancePu = 0,
             });
         var study = new FaultStudy(network, new IeeeC37());
         study.At("apart").IeeeC37!.ThirtyCycleSymmetricalKa.Should().Be(0);
@@ -89,17 +93,19 @@ public class MachineTests
             new FullConverterSource { Id = "F", Bus = "B", SourceCurrentKa = 0.5, SteadyStateKa = new MaxMin(0.4, 0.3) });
         var study = new FaultStudy(network, new IeeeC37 { CurrentRule = IeeeCurrentRule.EOverX });
         var fault = study.At("B");
-        // The drive as ILR/Ir = 3 with R/X = 0.1: E/X is √1.01 times E/Z; 1.5 times the reactance in the interrupting network. The doubly fed
-        // generator gives iWDmax/(κ·√2); the converter its own current, 0.3 kA at 30 cycles.
+        // The drive as ILR/Ir = 3 with R/X = 0.1: E/X is √1.01 times E/Z; 1.5 times the reactance in the interrupting network. The doubly
+        // fed generator gives iWDmax/(κ·√2); the converter its own current, 0.3 kA at 30 cycles.
         var drive = 3 * 2 / (Math.Sqrt(3) * 4.16) * Math.Sqrt(1.01);
         var doublyFed = 3 / (1.7 * Math.Sqrt(2));
         fault.InitialSymmetricalKa.Should().BeApproximately(20 + drive + doublyFed + 0.5, 1e-9);
         fault.IeeeC37!.InterruptingSymmetricalKa.Should().BeApproximately(20 + drive / 1.5 + doublyFed + 0.5, 1e-9);
         fault.IeeeC37.ThirtyCycleSymmetricalKa.Should().BeApproximately(20 + 0.3, 1e-9);
         fault.IeeeC37.ConverterPartKa.Should().BeApproximately(0.5, 1e-9);
-        study.FlowsAt("B", FaultInstant.Transient).FaultCurrentKa.Magnitude.Should().BeApproximately(fault.IeeeC37.InterruptingSymmetricalKa, 1e-9);
+        study.FlowsAt("B", FaultInstant.Transient).FaultCurrentKa.Magnitude
+            .Should().BeApproximately(fault.IeeeC37.InterruptingSymmetricalKa, 1e-9);
         study.Assumptions.Select(one => one.ElementId).Should().Contain(["D", "W", "F"]);
-        study.Assumptions.Single(one => one.ElementId == "W" && one.Key == "steady_state_ka.min").Text.Should().Contain("left out of the 30-cycle");
+        study.Assumptions.Single(one => one.ElementId == "W" && one.Key == "steady_state_ka.min").Text
+            .Should().Contain("left out of the 30-cycle");
     }
 
     [Fact]
@@ -127,11 +133,15 @@ public class MachineTests
     {
         static AsynchronousMotor Motor(string id, double kw) => new()
         {
-            Id = id, Bus = "B", RatedKw = kw, RatedKv = 4.16, RatedPowerFactor = 0.9, Efficiency = 0.95, LockedRotorCurrentRatio = 6, ROverX = 0.1,
+            Id = id, Bus = "B", RatedKw = kw, RatedKv = 4.16, RatedPowerFactor = 0.9, Efficiency = 0.95, LockedRotorCurrentRatio = 6,
+            ROverX = 0.1,
         };
         var study = new FaultStudy(Feeder(60).With(
             Motor("small", 100), Motor("between", 400), Motor("large", 900),
-            new SynchronousMachine { Id = "G", Bus = "B", RatedMva = 5, RatedKv = 4.16, ReactancePu = new MachineReactances(0.2), ArmatureResistancePu = 0.01 }),
+            new SynchronousMachine
+            {
+                Id = "G", Bus = "B", RatedMva = 5, RatedKv = 4.16, ReactancePu = new MachineReactances(0.2), ArmatureResistancePu = 0.01,
+            }),
             new IeeeC37());
         study.Assumptions.Where(one => one.Key == "pole_pairs").Should().ContainSingle().Which.ElementId.Should().Be("between");
         study.Assumptions.Single(one => one.Key == "reactance_pu.transient").Text.Should().Contain("x″d is kept in the 30-cycle network");

@@ -3,7 +3,9 @@ namespace NetFault.Tests.ByIeeeC37;
 /// <summary>Published digits of the standards, and arithmetic by hand.</summary>
 public class MultiplyingFactorTests
 {
-    /// <summary>Source: IEEE C37.04-1979 and C37.010, ratio S by contact-parting time (from memory). Between two times that of the longer.</summary>
+    /// <summary>
+    /// Source: IEEE C37.04-1979 and C37.010, ratio S by contact-parting time (from memory). Between two times that of the longer.
+    /// </summary>
     [Theory]
     [InlineData(0.5, 1.4)]
     [InlineData(1.0, 1.4)]
@@ -39,8 +41,8 @@ public class MultiplyingFactorTests
     }
 
     /// <summary>
-    /// Sources, from memory: making-current factors of IEC 62271-100, 2.5 at 50 Hz and 2.6 at 60 Hz for 45 ms; 2.6 of IEEE C37.04-1999 at X/R 17;
-    /// 2.7 and 1.6 of ANSI C37.06 and IEEE C37.010-1979 at X/R 25.
+    /// Sources, from memory: making-current factors of IEC 62271-100, 2.5 at 50 Hz and 2.6 at 60 Hz for 45 ms; 2.6 of IEEE C37.04-1999 at
+    /// X/R 17; 2.7 and 1.6 of ANSI C37.06 and IEEE C37.010-1979 at X/R 25.
     /// </summary>
     [Fact]
     public void Close_and_latch_multipliers_are_those_of_their_X_over_R()
@@ -51,7 +53,9 @@ public class MultiplyingFactorTests
         Math.Round(IeeeMultiplyingFactors.HalfCycleRms(25), 1).Should().Be(IeeeMultiplyingFactors.CloseAndLatchRmsMultiplier);
     }
 
-    /// <summary>Source: A. L. Sheldrake, Handbook of Electrical Engineering, Wiley 2003, table 8.1, RMS at half a cycle; truncated in places.</summary>
+    /// <summary>
+    /// Source: A. L. Sheldrake, Handbook of Electrical Engineering, Wiley 2003, table 8.1, RMS at half a cycle; truncated in places.
+    /// </summary>
     [Theory]
     [InlineData(100, 1.696)]
     [InlineData(33.322, 1.630)]
@@ -101,7 +105,9 @@ public class MultiplyingFactorTests
         IeeeMultiplyingFactors.Remote(1.5, double.PositiveInfinity).Should().BeApproximately(Math.Sqrt(3) / 1.3, 1e-12);
     }
 
-    /// <summary>Source: IEEE C37.010: where X/R is 15 or less, E/X needs no factor (from memory), for breakers that part within 3 cycles.</summary>
+    /// <summary>
+    /// Source: IEEE C37.010: where X/R is 15 or less, E/X needs no factor (from memory), for breakers that part within 3 cycles.
+    /// </summary>
     [Theory]
     [InlineData(1.0)]
     [InlineData(1.5)]
@@ -127,8 +133,9 @@ public class MultiplyingFactorTests
     {
         foreach (var ask in new Action[]
         {
-            () => IeeeMultiplyingFactors.RatioS(-1), () => IeeeMultiplyingFactors.RatioS(double.NaN), () => IeeeMultiplyingFactors.TotalCurrent(2, 0),
-            () => IeeeMultiplyingFactors.TotalCurrent(2, double.NaN), () => IeeeMultiplyingFactors.Remote(2, 10, 0.9),
+            () => IeeeMultiplyingFactors.RatioS(-1), () => IeeeMultiplyingFactors.RatioS(double.NaN),
+            () => IeeeMultiplyingFactors.TotalCurrent(2, 0), () => IeeeMultiplyingFactors.TotalCurrent(2, double.NaN),
+            () => IeeeMultiplyingFactors.Remote(2, 10, 0.9),
             () => IeeeMultiplyingFactors.LowVoltageUnfused(-3), () => IeeeMultiplyingFactors.LowVoltageFused(5, 0),
         })
         {

@@ -12,7 +12,8 @@ public class ReportTests
         var faults = study.EveryBus();
         var options = new ReportOptions { InstantsSeconds = [0.06], CsvComments = false };
         var table = FaultReport.ToTable(study, faults, options);
-        table.Should().Contain("IEEE C37.010, E/X").And.Contain("no AC decrement credited").And.Contain("I_int").And.Contain("duty(0.06 s)");
+        table.Should().Contain("IEEE C37.010, E/X").And.Contain("no AC decrement credited").And.Contain("I_int")
+            .And.Contain("duty(0.06 s)");
         using var writer = new StringWriter();
         FaultReport.WriteCsv(writer, study, faults, options);
         var rows = writer.ToString().Split(["\r\n"], StringSplitOptions.RemoveEmptyEntries).Select(row => row.Split(',')).ToArray();

@@ -24,7 +24,13 @@ internal static class IeeeNetworks
             SynchronousMachine machine => machine with { Service = (SynchronousService)random.Next(3) },
             AsynchronousMotor motor => motor with
             {
-                RatedKw = random.Next(4) switch { 0 => random.Next(5, 36), 1 => random.Next(38, 180), 2 => random.Next(190, 740), _ => random.Next(760, 6000) },
+                RatedKw = random.Next(4) switch
+                {
+                    0 => random.Next(5, 36),
+                    1 => random.Next(38, 180),
+                    2 => random.Next(190, 740),
+                    _ => random.Next(760, 6000),
+                },
                 PolePairs = random.Next(4) is var pairs and > 0 ? pairs : null,
             },
             _ => one,
@@ -44,7 +50,8 @@ internal static class IeeeNetworks
     {
         SynchronousMachine { Service: SynchronousService.Motor } motor => motor with
         {
-            ReactancePu = new MachineReactances(1.5 * motor.ReactancePu.Subtransient), ArmatureResistancePu = 1.5 * motor.ArmatureResistancePu,
+            ReactancePu = new MachineReactances(1.5 * motor.ReactancePu.Subtransient),
+            ArmatureResistancePu = 1.5 * motor.ArmatureResistancePu,
         },
         AsynchronousMotor { RatedKw: < 37.3 } => null,
         AsynchronousMotor motor => Weakened(motor, FirstCycleMultiplier(motor, network.FrequencyHz) == 1.0 ? 1.5 : 3.0),

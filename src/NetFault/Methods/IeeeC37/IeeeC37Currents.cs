@@ -67,7 +67,9 @@ internal sealed class IeeeC37Currents : FaultCurrents
     public double InjectedKa(FaultInstant instant) =>
         _work.Injected.At(Node, _context.Method.NetworkAt(instant)) / Complex.Abs(Impedance(instant)) * _context.BaseKa(_bus);
 
-    /// <summary>Current and X/R of what a breaker must interrupt: those of the first cycle before the interrupting network's time.</summary>
+    /// <summary>
+    /// Current and X/R of what a breaker must interrupt: those of the first cycle before the interrupting network's time.
+    /// </summary>
     public (double SymmetricalKa, ReactanceRatio Ratio) ToInterrupt(double cycles) => IsFirstCycle(cycles)
         ? (InitialSymmetricalKa, Ratio)
         : (CurrentKa(FaultInstant.Transient), InterruptingRatio);

@@ -3,9 +3,9 @@ using System.Numerics;
 namespace NetFault;
 
 /// <summary>
-/// What IEEE Std C37.010 gives at a fault beyond the quantities that all methods share. Immutable. Currents are RMS values in kA unless they
-/// say otherwise; contact-parting times are in cycles of the rated frequency, from the beginning of the fault. The first-cycle current and
-/// its X/R are <see cref="BusFault.InitialSymmetricalKa"/> and <see cref="BusFault.XOverR"/>.
+/// What IEEE Std C37.010 gives at a fault beyond the quantities that all methods share. Immutable. Currents are RMS values in kA unless
+/// they say otherwise; contact-parting times are in cycles of the rated frequency, from the beginning of the fault. The first-cycle
+/// current and its X/R are <see cref="BusFault.InitialSymmetricalKa"/> and <see cref="BusFault.XOverR"/>.
 /// </summary>
 public sealed class IeeeC37Result
 {
@@ -36,12 +36,14 @@ public sealed class IeeeC37Result
     /// </summary>
     public double? InterruptingXOverR => _currents.InterruptingRatio.XOverR;
 
-    /// <summary>Whether X/R of the interrupting network is known, and if not, why; factors then take the DC component as undamped.</summary>
+    /// <summary>
+    /// Whether X/R of the interrupting network is known, and if not, why; factors then take the DC component as undamped.
+    /// </summary>
     public XOverRStatus InterruptingXOverRStatus => _currents.InterruptingRatio.Status;
 
     /// <summary>
-    /// The symmetrical current of the 30-cycle network, for time-delayed relays: generators at x′d, no motors and no condensers; 0 where only
-    /// such hold the bus.
+    /// The symmetrical current of the 30-cycle network, for time-delayed relays: generators at x′d, no motors and no condensers; 0 where
+    /// only such hold the bus.
     /// </summary>
     public double ThirtyCycleSymmetricalKa => _currents.CurrentKa(FaultInstant.SteadyState);
 
@@ -52,8 +54,8 @@ public sealed class IeeeC37Result
     public double FirstCycleAsymmetricalRmsKa => _currents.InitialSymmetricalKa * IeeeMultiplyingFactors.HalfCycleRms(FirstCycleXOverR);
 
     /// <summary>
-    /// The close-and-latch peak by the multiplier alone, 2.6 times the first-cycle current, an instantaneous value; null where the exact peak
-    /// (<see cref="BusFault.PeakKa"/>) is higher, at an X/R above about 17.5, for there the rule is not on the safe side.
+    /// The close-and-latch peak by the multiplier alone, 2.6 times the first-cycle current, an instantaneous value; null where the exact
+    /// peak (<see cref="BusFault.PeakKa"/>) is higher, at an X/R above about 17.5, for there the rule is not on the safe side.
     /// </summary>
     public double? PeakByMultiplierKa => CoveringKa(IeeeMultiplyingFactors.CloseAndLatchPeakMultiplier, _currents.PeakKa);
 
@@ -61,11 +63,12 @@ public sealed class IeeeC37Result
     /// The first-cycle total RMS current by the multiplier alone, 1.6 times the first-cycle current; null where
     /// <see cref="FirstCycleAsymmetricalRmsKa"/> is higher, at an X/R above about 25.
     /// </summary>
-    public double? AsymmetricalRmsByMultiplierKa => CoveringKa(IeeeMultiplyingFactors.CloseAndLatchRmsMultiplier, FirstCycleAsymmetricalRmsKa);
+    public double? AsymmetricalRmsByMultiplierKa =>
+        CoveringKa(IeeeMultiplyingFactors.CloseAndLatchRmsMultiplier, FirstCycleAsymmetricalRmsKa);
 
     /// <summary>
-    /// Always false: the standard's curves with AC decrement, for faults fed by local generators, are not in this library. All faults take the
-    /// remote factor, with DC decrement only, which is on the safe side.
+    /// Always false: the standard's curves with AC decrement, for faults fed by local generators, are not in this library. All faults
+    /// take the remote factor, with DC decrement only, which is on the safe side.
     /// </summary>
     public bool AcDecrementCredited => false;
 
@@ -76,16 +79,17 @@ public sealed class IeeeC37Result
     public IReadOnlyList<IeeeContribution> Contributions => _currents.Contributions.All;
 
     /// <summary>The share of local generators in the interrupting current, 0 to 1; costs what <see cref="Contributions"/> costs.</summary>
-    public double LocalGeneratorShare => _currents.Contributions.ShareOf(IeeeContributionKind.LocalGenerator);
+    public double LocalGeneratorShare => Share(IeeeContributionKind.LocalGenerator);
 
     /// <summary>
-    /// The share of what has no AC decay by the standard: feeders, remote generators, converters; costs what <see cref="Contributions"/> costs.
+    /// The share of what has no AC decay by the standard: feeders, remote generators, converters; costs what <see cref="Contributions"/>
+    /// costs.
     /// </summary>
-    public double RemoteShare => _currents.Contributions.ShareOf(IeeeContributionKind.Feeder)
-        + _currents.Contributions.ShareOf(IeeeContributionKind.RemoteGenerator) + _currents.Contributions.ShareOf(IeeeContributionKind.Converter);
+    public double RemoteShare => Share(IeeeContributionKind.Feeder) + Share(IeeeContributionKind.RemoteGenerator)
+        + Share(IeeeContributionKind.Converter);
 
     /// <summary>The share of motors; costs what <see cref="Contributions"/> costs.</summary>
-    public double MotorShare => _currents.Contributions.ShareOf(IeeeContributionKind.Motor);
+    public double MotorShare => Share(IeeeContributionKind.Motor);
 
     /// <summary>
     /// The symmetrical current to interrupt at a contact-parting time: that of the interrupting network, or the first-cycle one before 1.5
@@ -104,7 +108,9 @@ public sealed class IeeeC37Result
     public double MultiplyingFactor(double contactPartingCycles) =>
         IeeeMultiplyingFactors.Remote(contactPartingCycles, XOverRToInterrupt(contactPartingCycles));
 
-    /// <summary>The current to set beside a breaker's symmetrical interrupting capability: the symmetrical current times the multiplying factor.</summary>
+    /// <summary>
+    /// The current to set beside a breaker's symmetrical interrupting capability: the symmetrical current times the multiplying factor.
+    /// </summary>
     /// <param name="contactPartingCycles">Contact-parting time in cycles, not negative.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
     public double InterruptingDutyKa(double contactPartingCycles) =>
@@ -130,6 +136,8 @@ public sealed class IeeeC37Result
 
     /// <summary>A time in cycles of the network's rated frequency.</summary>
     internal double Cycles(double seconds) => _currents.Cycles(seconds);
+
+    private double Share(IeeeContributionKind kind) => _currents.Contributions.ShareOf(kind);
 
     private double FirstCycleXOverR => Undamped(_currents.Ratio);
 

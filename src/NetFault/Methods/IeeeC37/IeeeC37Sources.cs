@@ -18,8 +18,8 @@ internal sealed class IeeeC37Sources
     }
 
     /// <summary>
-    /// The impedance of each source in the network of an instant: first-cycle, interrupting (<see cref="FaultInstant.Transient"/>) or 30-cycle
-    /// (<see cref="FaultInstant.SteadyState"/>); null where it is not in it.
+    /// The impedance of each source in the network of an instant: first-cycle, interrupting (<see cref="FaultInstant.Transient"/>) or
+    /// 30-cycle (<see cref="FaultInstant.SteadyState"/>); null where it is not in it.
     /// </summary>
     public Complex?[] Impedances(FaultInstant instant, AssumptionLog? log)
     {
@@ -52,18 +52,19 @@ internal sealed class IeeeC37Sources
             case NetworkFeeder feeder:
                 return NetworkFeederCircuit.MaximumPu(feeder, kv, mva);
             case SynchronousMachine machine:
-                // Where motors and condensers alone hold a part they stay, lest its equations have no solution; its currents are taken as 0.
+                // Where motors and condensers alone hold a part they stay, lest its equations have no solution; its currents count as 0.
                 return instant == FaultInstant.SteadyState
                     ? ThirtyCycle(machine, kv, isStandIn: !isHeld![source.Node], log)
                     : Multiplied(Machine(machine, machine.ReactancePu.Subtransient, kv, log), ReactanceMultipliers.Of(machine), instant);
             case AsynchronousMotor motor:
-                return Multiplied(
-                    AsynchronousMotorCircuit.ImpedancePu(motor, kv, mva, log), ReactanceMultipliers.Of(motor, _network.FrequencyHz, log), instant);
+                var ofMotor = ReactanceMultipliers.Of(motor, _network.FrequencyHz, log);
+                return Multiplied(AsynchronousMotorCircuit.ImpedancePu(motor, kv, mva, log), ofMotor, instant);
             case ConverterFedDrive drive:
                 return Multiplied(ConverterFedDriveCircuit.ImpedancePu(drive, kv, mva, log), ReactanceMultipliers.Of(drive, log), instant);
             case DoublyFedGenerator generator:
                 InjectedCurrents.LogSteadyState(generator, generator.SteadyStateKa, log);
-                return Multiplied(DoublyFedGeneratorCircuit.ImpedancePu(generator, kv, mva, log), ReactanceMultipliers.Of(generator, log), instant);
+                var ofGenerator = ReactanceMultipliers.Of(generator, log);
+                return Multiplied(DoublyFedGeneratorCircuit.ImpedancePu(generator, kv, mva, log), ofGenerator, instant);
             case FullConverterSource converter:
                 InjectedCurrents.Log(converter, log);
                 return null;
@@ -87,7 +88,7 @@ internal sealed class IeeeC37Sources
         if (machine.ReactancePu.Transient is null)
         {
             log?.Add(machine, "reactance_pu.transient",
-                "x′d is not given; x″d is kept in the 30-cycle network, whose current is then too large for judging whether relays pick up");
+                "x′d is not given; x″d is kept in the 30-cycle network, whose current is then too large to judge whether relays pick up");
         }
         return Machine(machine, machine.ReactancePu.Transient ?? machine.ReactancePu.Subtransient, kv, log);
     }

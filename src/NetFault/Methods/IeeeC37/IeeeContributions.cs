@@ -11,7 +11,9 @@ public enum IeeeContributionKind
     /// <summary>A generator or condenser through two or more transformations and an external reactance of at least 1.5 times x″d.</summary>
     RemoteGenerator,
 
-    /// <summary>A generator or condenser through at most one transformation, or with an external reactance of less than 1.5 times x″d.</summary>
+    /// <summary>
+    /// A generator or condenser through at most one transformation, or with an external reactance of less than 1.5 times x″d.
+    /// </summary>
     LocalGenerator,
 
     /// <summary>A synchronous or asynchronous motor, or a drive that feeds back; its decay is in its multiplier.</summary>
@@ -26,13 +28,15 @@ public enum IeeeContributionKind
 /// <param name="Id">The source's id.</param>
 /// <param name="BusId">Its bus.</param>
 /// <param name="Kind">What it is to this fault.</param>
-/// <param name="CurrentKa">The magnitude of its current at its own bus in kA, by superposition without sources of their own current.</param>
+/// <param name="CurrentKa">
+/// The magnitude of its current at its own bus in kA, by superposition without sources of their own current.
+/// </param>
 /// <param name="Share">Its share of the fault's current, by the part in phase with that; all shares add to 1.</param>
 /// <param name="Transformations">The fewest transformations on a way from it to the fault.</param>
 /// <param name="ExternalReactanceRatio">
-/// The external over its own impedance: its current at its terminals over that in this fault, less 1. 1.5 is the same as 0.4 of the current
-/// at its terminals. In meshed networks the impedance that the others' currents make larger. Infinite where it does not feed the fault; 0 for
-/// sources of their own current.
+/// The external over its own impedance: its current at its terminals over that in this fault, less 1. 1.5 is the same as 0.4 of the
+/// current at its terminals. In meshed networks the impedance that the others' currents make larger. Infinite where it does not feed the
+/// fault; 0 for sources of their own current.
 /// </param>
 public sealed record IeeeContribution(
     string Section, string Id, string BusId, IeeeContributionKind Kind, double CurrentKa, double Share, int Transformations,
@@ -84,7 +88,10 @@ internal sealed class IeeeContributions
             if (injected.TryGetValue(i, out var current))
                 found.Add(Contribution(i, current, current * AtFault(i) / total, 0.0));
             else if (own[i] != Complex.Zero)
-                found.Add(Contribution(i, Complex.Abs(own[i]) * driven, own[i].Real / sum * driven / total, Complex.Abs(seen) / Voltage(i) - 1.0));
+            {
+                var external = Complex.Abs(seen) / Voltage(i) - 1.0;
+                found.Add(Contribution(i, Complex.Abs(own[i]) * driven, own[i].Real / sum * driven / total, external));
+            }
         }
         return found;
 
@@ -113,7 +120,9 @@ internal sealed class IeeeContributions
 
     private static bool IsRemote(int transformations, double externalRatio) => transformations > 1 && externalRatio >= RemoteFromRatio;
 
-    /// <summary>The fewest transformations from a node to each, −1 for nodes it is not connected with: a breadth-first search by transformers.</summary>
+    /// <summary>
+    /// The fewest transformations from a node to each, −1 for nodes it is not connected with: a breadth-first search by transformers.
+    /// </summary>
     private int[] TransformationsFrom(int from)
     {
         var count = new int[_circuit.NodeCount];
@@ -137,7 +146,8 @@ internal sealed class IeeeContributions
         count[node] = level;
         for (var end = _work.Graph.Start(node); end < _work.Graph.End(node); end++)
         {
-            var isTransformer = _circuit.Network.Elements[_circuit.Branches[_work.Graph.Branch(end)].Element] is Transformer or ThreeWindingTransformer;
+            var element = _circuit.Branches[_work.Graph.Branch(end)].Element;
+            var isTransformer = _circuit.Network.Elements[element] is Transformer or ThreeWindingTransformer;
             (isTransformer ? beyond : open).Push(_work.Graph.Neighbour(node, end));
         }
     }

@@ -1,8 +1,8 @@
 namespace NetFault;
 
 /// <summary>
-/// The factors by which IEEE standards bring a symmetrical current with its X/R beside a breaker's symmetrical rating. X/R may be
-/// <see cref="double.PositiveInfinity"/>: a DC component that does not decay. Times are in cycles of the rated frequency, from the beginning
+/// The factors by which IEEE standards bring a symmetrical current with its X/R beside a breaker's symmetrical rating. X/R may be <see
+/// cref="double.PositiveInfinity"/>: a DC component that does not decay. Times are in cycles of the rated frequency, from the beginning
 /// of the fault. The formulas are those behind the standards' curves and tables, from memory of the standards.
 /// </summary>
 public static class IeeeMultiplyingFactors
@@ -13,22 +13,26 @@ public static class IeeeMultiplyingFactors
     /// <summary>X/R at which unfused low-voltage power breakers are tested: 15 % power factor (IEEE Std C37.13).</summary>
     public const double UnfusedTestXOverR = 6.6;
 
-    /// <summary>X/R at which fused low-voltage power breakers, and moulded-case ones above 20 kA, are tested: 20 % power factor (IEEE Std C37.13).</summary>
+    /// <summary>
+    /// X/R at which fused low-voltage power breakers, and moulded-case ones above 20 kA, are tested: 20 % power factor (IEEE Std C37.13).
+    /// </summary>
     public const double FusedTestXOverR = 4.9;
 
-    /// <summary>The peak close-and-latch multiplier of a symmetrical rating at 60 Hz: X/R of 17 (IEEE Std C37.04-1999, C37.06-2000).</summary>
+    /// <summary>
+    /// The peak close-and-latch multiplier of a symmetrical rating at 60 Hz: X/R of 17 (IEEE Std C37.04-1999, C37.06-2000).
+    /// </summary>
     public const double CloseAndLatchPeakMultiplier = 2.6;
 
     /// <summary>
-    /// The RMS multiplier of the first cycle: X/R of 25 (IEEE Std C37.010-1979, C37.06 before 1987: closing and latching capability 1.6·K times
-    /// the rated short-circuit current).
+    /// The RMS multiplier of the first cycle: X/R of 25 (IEEE Std C37.010-1979, C37.06 before 1987: closing and latching capability 1.6·K
+    /// times the rated short-circuit current).
     /// </summary>
     public const double CloseAndLatchRmsMultiplier = 1.6;
 
     /// <summary>
     /// The ratio S of a breaker's asymmetrical to its symmetrical interrupting capability by contact-parting time (IEEE Std C37.04-1979,
-    /// C37.010): 1 cycle 1.4, 1.5 cycles 1.3, 2 cycles 1.2, 3 cycles 1.1, 4 cycles and more 1.0. Between them that of the next longer time, the
-    /// smaller one, on the safe side; below 1 cycle 1.4.
+    /// C37.010): 1 cycle 1.4, 1.5 cycles 1.3, 2 cycles 1.2, 3 cycles 1.1, 4 cycles and more 1.0. Between them that of the next longer
+    /// time, the smaller one, on the safe side; below 1 cycle 1.4.
     /// </summary>
     /// <param name="contactPartingCycles">Contact-parting time in cycles, not negative.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative or not finite.</exception>
@@ -72,7 +76,10 @@ public static class IeeeMultiplyingFactors
         return Math.Max(1.0, TotalCurrent(contactPartingCycles, xOverR) / ratioS);
     }
 
-    /// <summary>Peak over symmetrical RMS current at half a cycle: √2·(1 + e^(−π/(X/R))). The exact peak comes earlier and is up to about 3 % higher.</summary>
+    /// <summary>
+    /// Peak over symmetrical RMS current at half a cycle: √2·(1 + e^(−π/(X/R))). The exact peak comes earlier and is up to about 3 %
+    /// higher.
+    /// </summary>
     /// <param name="xOverR">X/R, above 0.</param>
     /// <exception cref="ArgumentOutOfRangeException">Not above 0.</exception>
     public static double HalfCyclePeak(double xOverR) => PerUnit.Sqrt2 * (1.0 + Math.Exp(-Math.PI / Ratio(xOverR)));
@@ -83,8 +90,8 @@ public static class IeeeMultiplyingFactors
     public static double HalfCycleRms(double xOverR) => TotalCurrent(0.5, xOverR);
 
     /// <summary>
-    /// The multiplying factor of an unfused low-voltage breaker, by the peak: (1 + e^(−π/(X/R)))/(1 + e^(−π/(X/R)test)), never below 1 (IEEE Std
-    /// C37.13).
+    /// The multiplying factor of an unfused low-voltage breaker, by the peak: (1 + e^(−π/(X/R)))/(1 + e^(−π/(X/R)test)), never below 1
+    /// (IEEE Std C37.13).
     /// </summary>
     /// <param name="xOverR">X/R of the first-cycle current, above 0.</param>
     /// <param name="testXOverR">X/R at which the breaker was tested, above 0; 6.6 for power breakers, 4.9 for moulded-case ones.</param>

@@ -18,7 +18,8 @@ internal sealed class InjectedCurrents
     public static void Log(FullConverterSource source, AssumptionLog? log)
     {
         log?.Add(source, "source_current_ka",
-            "IEEE C37.010 has no current sources; the current is added in phase at the fault (IEC 60909-0), in the first-cycle and interrupting networks");
+            "IEEE C37.010 has no current sources; the current is added in phase at the fault (IEC 60909-0), "
+            + "in the first-cycle and interrupting networks");
         LogSteadyState(source, source.SteadyStateKa, log);
     }
 
@@ -38,8 +39,9 @@ internal sealed class InjectedCurrents
         {
             var element = _networks.Circuit.Sources[i].Element;
             var currentKa = CurrentKa(network.Elements[element], instant);
+            var kv = network.Buses[network.Topology.TerminalBus(element, 0)].NominalKv;
             if (currentKa > 0.0)
-                injections.Add((i, currentKa / PerUnit.BaseKa(network.Buses[network.Topology.TerminalBus(element, 0)].NominalKv, network.BaseMva)));
+                injections.Add((i, currentKa / PerUnit.BaseKa(kv, network.BaseMva)));
         }
         return injections;
     }

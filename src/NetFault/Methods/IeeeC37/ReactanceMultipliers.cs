@@ -3,8 +3,8 @@ using System.Globalization;
 namespace NetFault;
 
 /// <summary>
-/// The multipliers of a rotating machine's subtransient impedance (IEEE Std C37.010, table of rotating machine reactances; motors below 50 hp
-/// in the first cycle by the combined network of IEEE Std 141 and C37.13). All from memory of the standards.
+/// The multipliers of a rotating machine's subtransient impedance (IEEE Std C37.010, table of rotating machine reactances; motors below
+/// 50 hp in the first cycle by the combined network of IEEE Std 141 and C37.13). All from memory of the standards.
 /// </summary>
 /// <param name="FirstCycle">In the first-cycle network.</param>
 /// <param name="Interrupting">In the interrupting network; null where the machine is left out of it.</param>
@@ -13,12 +13,14 @@ internal readonly record struct ReactanceMultipliers(double FirstCycle, double? 
     private const double KilowattsPerHorsepower = 0.746;
 
     /// <summary>
-    /// Motors of 50 hp and above. 50 hp are 37.3 kW; the metric size that goes by 50 hp is 37 kW, and it is counted as such, which is on the
-    /// safe side.
+    /// Motors of 50 hp and above. 50 hp are 37.3 kW; the metric size that goes by 50 hp is 37 kW, and it is counted as such, which is on
+    /// the safe side.
     /// </summary>
     private const double FiftyHorsepowerKw = 37.0;
 
-    /// <summary>The standard's speeds are those of 60 Hz: 1800 r/min or less, and 3600 r/min. What is faster than the first is as the second.</summary>
+    /// <summary>
+    /// The standard's speeds are those of 60 Hz: 1800 r/min or less, and 3600 r/min. What is faster than the first is as the second.
+    /// </summary>
     private const double SlowRpm = 1800.0;
     private const double LargeAndSlowHp = 1000.0;
     private const double LargeAndFastHp = 250.0;
