@@ -7,8 +7,11 @@
 //     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --csv plant.csv
 //     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --method iec --case min
 //
+//     dotnet run examples/every-bus.cs -- examples/industrial-plant.yaml --method ieee --current e/x
+//
 // --method decrement (default) takes --prefault and --x-over-r complex|separate; --method iec, which is IEC 60909-0, takes
-// --case max|min and --x-over-r a|b|c, the standard's three ways to the factor kappa.
+// --case max|min and --x-over-r a|b|c, the standard's three ways to the factor kappa; --method ieee, which is IEEE C37.010, takes
+// --prefault and --current e/z|e/x, and its times --at are contact-parting times.
 //
 // Exit codes: 0 done, 1 the network cannot be read or solved, 2 wrong arguments.
 
@@ -18,7 +21,8 @@ using NetFault;
 
 const string Usage =
     "usage: dotnet run examples/every-bus.cs -- NETWORK.yaml [--csv FILE] [--json FILE]"
-    + " [--at SECONDS[,SECONDS...]] [--method decrement|iec] [--case max|min] [--x-over-r complex|separate|a|b|c] [--prefault PU]";
+    + " [--at SECONDS[,SECONDS...]] [--method decrement|iec|ieee] [--case max|min] [--current e/z|e/x] [--x-over-r complex|separate|a|b|c]"
+    + " [--prefault PU]";
 
 Console.OutputEncoding = Encoding.UTF8;
 try
@@ -63,7 +67,7 @@ static void Run(Arguments arguments)
 /// <summary>What the command line asks for.</summary>
 sealed record Arguments(string NetworkPath, FaultMethod Method, ReportOptions Report, string? CsvPath, string? JsonPath)
 {
-    private static readonly string[] Known = ["--csv", "--json", "--at", "--method", "--case", "--x-over-r", "--prefault"];
+    private static readonly string[] Known = ["--csv", "--json", "--at", "--method", "--case", "--current", "--x-over-r", "--prefault"];
 
     public static Arguments Parse(string[] args)
     {
@@ -86,24 +90,45 @@ sealed record Arguments(string NetworkPath, FaultMethod Method, ReportOptions Re
         return new Arguments(paths[0], MethodOf(options), ReportOf(options), csvPath, jsonPath);
     }
 
-    private static FaultMethod MethodOf(Dictionary<string, string> options) => options.GetValueOrDefault("--method", "decrement") switch
+    private static FaultMethod MethodOf(Dictionary<string, string> options)
     {
-        "decrement" => Without("--case", options, "goes with --method iec", () => new MachineDecrement
+        var method = options.GetValueOrDefault("--method", "decrement");
+        if (method is not ("decrement" or "iec" or "ieee"))
+            throw new UsageException($"--method {method}: decrement, iec or ieee");
+        Refuse(options, "--case", method != "iec", "goes with --method iec");
+        Refuse(options, "--current", method != "ieee", "goes with --method ieee");
+        Refuse(options, "--prefault", method == "iec", "does not go with --method iec: IEC 60909-0 has its factor c");
+        Refuse(options, "--x-over-r", method == "ieee", "does not go with --method ieee: IEEE C37.010 asks for separate networks");
+        return method switch
         {
-            PrefaultVoltagePu = Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false),
-            XOverRRule = Choice(options, "--x-over-r", ("complex", XOverRRule.ComplexImpedance), ("separate", XOverRRule.SeparateNetworks)),
-        }),
-        "iec" => Without("--prefault", options, "goes with --method decrement: IEC 60909-0 has its factor c", () => new Iec60909
-        {
-            Case = Choice(options, "--case", ("max", ShortCircuitCase.Maximum), ("min", ShortCircuitCase.Minimum)),
-            XOverRRule = Choice(options, "--x-over-r",
-                ("c", XOverRRule.EquivalentFrequency), ("b", XOverRRule.ComplexImpedance), ("a", XOverRRule.SmallestRatio)),
-        }),
-        var other => throw new UsageException($"--method {other}: decrement or iec"),
-    };
+            "decrement" => new MachineDecrement
+            {
+                PrefaultVoltagePu = Prefault(options),
+                XOverRRule = Choice(options, "--x-over-r",
+                    ("complex", XOverRRule.ComplexImpedance), ("separate", XOverRRule.SeparateNetworks)),
+            },
+            "iec" => new Iec60909
+            {
+                Case = Choice(options, "--case", ("max", ShortCircuitCase.Maximum), ("min", ShortCircuitCase.Minimum)),
+                XOverRRule = Choice(options, "--x-over-r",
+                    ("c", XOverRRule.EquivalentFrequency), ("b", XOverRRule.ComplexImpedance), ("a", XOverRRule.SmallestRatio)),
+            },
+            _ => new IeeeC37
+            {
+                PrefaultVoltagePu = Prefault(options),
+                CurrentRule = Choice(options, "--current", ("e/z", IeeeCurrentRule.EOverZ), ("e/x", IeeeCurrentRule.EOverX)),
+            },
+        };
+    }
 
-    private static FaultMethod Without(string option, Dictionary<string, string> options, string why, Func<FaultMethod> make) =>
-        options.ContainsKey(option) ? throw new UsageException($"{option} {why}") : make();
+    private static double Prefault(Dictionary<string, string> options) =>
+        Number("--prefault", options.GetValueOrDefault("--prefault", "1"), zeroAllowed: false);
+
+    private static void Refuse(Dictionary<string, string> options, string option, bool when, string why)
+    {
+        if (when && options.ContainsKey(option))
+            throw new UsageException($"{option} {why}");
+    }
 
     /// <summary>The value of the word given, of the first word where none is.</summary>
     private static T Choice<T>(Dictionary<string, string> options, string option, params (string Word, T Value)[] choices)

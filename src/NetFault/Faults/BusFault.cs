@@ -83,7 +83,8 @@ public sealed class BusFault
     /// <summary>
     /// The peak short-circuit current ip, an instantaneous value in kA. By <see cref="MachineDecrement"/> with the DC component by X/R the exact
     /// maximum over time for a fault at voltage zero, the AC component held at I″k, 2√2·I″k where the DC component is undamped; with the exact DC
-    /// component that of <see cref="WorstPeak"/>; by <see cref="NetFault.Iec60909"/> κ·√2·I″k.
+    /// component that of <see cref="WorstPeak"/>; by <see cref="NetFault.IeeeC37"/> as the first, of the first-cycle current; by
+    /// <see cref="NetFault.Iec60909"/> κ·√2·I″k.
     /// </summary>
     public double PeakKa => _currents?.PeakKa ?? 0.0;
 
@@ -102,6 +103,12 @@ public sealed class BusFault
     /// </summary>
     public Iec60909Result? Iec60909 => _currents?.Standard;
 
+    /// <summary>
+    /// What IEEE Std C37.010 gives beyond these: interrupting and 30-cycle currents, multiplying factors, contributions; null by another
+    /// method and at a de-energised bus.
+    /// </summary>
+    public IeeeC37Result? IeeeC37 => _currents?.Ieee;
+
     /// <summary>Whether this is a result of a study.</summary>
     internal bool IsOf(StudyContext context) => ReferenceEquals(_context, context);
 
@@ -117,7 +124,8 @@ public sealed class BusFault
     /// <summary>
     /// The DC component i_dc(t) of the phase with the largest one, in kA, an instantaneous value: √2·I″k·e^(−ω·t/(X/R)), undamped where there
     /// is no X/R; or, as <see cref="DcDecayRule"/> says, the exact one, at each time that of the closing angle which makes it largest. By IEC 60909-0
-    /// the X/R is that of the equivalent frequency for the time, and what full-size converters add has no DC component.
+    /// the X/R is that of the equivalent frequency for the time, and what full-size converters add has no DC component. By IEEE Std C37.010 current
+    /// and X/R are those of the first-cycle network before 1.5 cycles, then of the interrupting one.
     /// </summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; with the exact rule within the horizon.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon.</exception>
@@ -130,7 +138,7 @@ public sealed class BusFault
 
     /// <summary>
     /// The RMS value of the AC component in kA, as <see cref="AcComponentRule"/> says: decaying with the machines, or held at I″k; by IEC
-    /// 60909-0 the breaking current Ib of this minimum time delay.
+    /// 60909-0 the breaking current Ib of this minimum time delay; by IEEE Std C37.010 the current of the time's network.
     /// </summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where the rule has one.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon.</exception>

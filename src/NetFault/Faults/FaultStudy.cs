@@ -20,7 +20,7 @@ public sealed class FaultStudy
 
     /// <summary>Prepares a study: builds the circuit, orders and factors its admittance matrix.</summary>
     /// <param name="network">The network.</param>
-    /// <param name="method">The method, such as <see cref="MachineDecrement"/>.</param>
+    /// <param name="method">The method: <see cref="MachineDecrement"/>, <see cref="Iec60909"/> or <see cref="IeeeC37"/>.</param>
     /// <exception cref="ArgumentNullException">An argument is null.</exception>
     /// <exception cref="SingularNetworkException">The network's equations have no solution.</exception>
     /// <exception cref="MethodDataException">The network lacks data that the method needs.</exception>

@@ -61,7 +61,7 @@ internal sealed class FlowSolution
     {
         var node = _circuit.NodeOfBus[_bus];
         var column = basis.Network.Column(node, out var residual);
-        var zk = column[node] + basis.Variant.OfFault(faultImpedanceOhm / _context.BaseOhm(_network.Buses[_bus]));
+        var zk = column[node] + basis.Network.Variant.OfFault(faultImpedanceOhm / _context.BaseOhm(_network.Buses[_bus]));
         var fault = basis.Weight * basis.DrivingVoltagePu / zk;
         var change = new Complex[column.Length];
         foreach (var (source, magnitude) in basis.Injections)

@@ -13,14 +13,18 @@ internal sealed class SolvedNetwork
     private readonly bool _refusesResonance;
     private readonly Lazy<DrivingPointImpedances> _drivingPoints;
 
-    private SolvedNetwork(CircuitMatrix matrix, AdmittanceValues values, bool refusesResonance)
+    private SolvedNetwork(CircuitMatrix matrix, AdmittanceValues values, NetworkVariant variant)
     {
-        _refusesResonance = refusesResonance;
+        Variant = variant;
+        _refusesResonance = variant.FrequencyRatio.Equals(1.0) && !variant.IsAtNode;
         _matrix = matrix;
         Values = values;
         _factor = matrix.Factor(values);
         _drivingPoints = new Lazy<DrivingPointImpedances>(FindDrivingPoints);
     }
+
+    /// <summary>Which network it is.</summary>
+    public NetworkVariant Variant { get; }
 
     /// <summary>The admittances that were factored.</summary>
     public AdmittanceValues Values { get; }
@@ -37,7 +41,7 @@ internal sealed class SolvedNetwork
 
     /// <summary>Factors a network with these impedances.</summary>
     public static SolvedNetwork Of(CircuitMatrix matrix, Complex?[] sources, Complex[] branches, NetworkVariant variant) =>
-        new(matrix, AdmittanceValues.Of(matrix, sources, branches, variant), variant.FrequencyRatio.Equals(1.0) && !variant.IsAtNode);
+        new(matrix, AdmittanceValues.Of(matrix, sources, branches, variant), variant);
 
     /// <summary>Column k of Zbus: the voltages of all nodes for a unit current into node k.</summary>
     /// <param name="node">k.</param>

@@ -35,6 +35,9 @@ internal abstract class FaultCurrents
     /// <summary>What the method gives beyond the quantities that all methods share, where it is IEC 60909-0.</summary>
     public virtual Iec60909Result? Standard => null;
 
+    /// <summary>The same, where it is IEEE Std C37.010.</summary>
+    public virtual IeeeC37Result? Ieee => null;
+
     /// <summary>The current of a phase in kA at a closing angle in radians; null where the method gives no waveform.</summary>
     public virtual double? InstantaneousKa(double seconds, double closingAngle) => null;
 

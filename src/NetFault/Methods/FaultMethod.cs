@@ -48,13 +48,13 @@ public abstract record FaultMethod
 /// <summary>An instant of the short circuit, by the reactance of the machines that governs it.</summary>
 public enum FaultInstant
 {
-    /// <summary>The beginning: subtransient reactances, I″k.</summary>
+    /// <summary>The beginning: subtransient reactances, I″k. By <see cref="IeeeC37"/> the first-cycle network.</summary>
     Initial,
 
-    /// <summary>After the subtransient decay: transient reactances, I′k.</summary>
+    /// <summary>After the subtransient decay: transient reactances, I′k. By <see cref="IeeeC37"/> the interrupting network.</summary>
     Transient,
 
-    /// <summary>The end: synchronous reactances at constant excitation, Ik.</summary>
+    /// <summary>The end: synchronous reactances at constant excitation, Ik. By <see cref="IeeeC37"/> the 30-cycle network.</summary>
     SteadyState,
 }
 

@@ -57,6 +57,11 @@ public enum AcComponentRule
     /// I″k, commonly by less than 1 percent.
     /// </summary>
     Exact,
+
+    /// <summary>
+    /// By IEEE Std C37.010, the network of the time: first-cycle before 1.5 cycles, then interrupting, from 30 cycles the 30-cycle network.
+    /// </summary>
+    NetworkOfTime,
 }
 
 /// <summary>X/R at a fault by a named rule.</summary>

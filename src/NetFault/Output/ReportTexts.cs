@@ -9,9 +9,15 @@ internal static class ReportTexts
         + "this does not replace licensed practice and is not for live switching decisions.";
 
     /// <summary>How the method treats AC and DC over time, in one line.</summary>
-    public static string MethodLine(FaultMethod method) => method is Iec60909
-        ? $"Method: {method.Name}; kappa by {RuleName(method.RatioRule)}; DC component by equivalent frequency; AC component over time is Ib."
-        : $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; DC component by X/R; AC component held at I″k over time.";
+    public static string MethodLine(FaultMethod method) => method switch
+    {
+        Iec60909 => $"Method: {method.Name}; kappa by {RuleName(method.RatioRule)}; "
+            + "DC component by equivalent frequency; AC component over time is Ib.",
+        IeeeC37 => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; "
+            + "first-cycle, interrupting (from 1.5 cycles) and 30-cycle networks; "
+            + "remote multiplying factors, no AC decrement credited for local generators.",
+        _ => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; DC component by X/R; AC component held at I″k over time.",
+    };
 
     /// <summary>An X/R rule in words.</summary>
     private static string RuleName(XOverRRule rule) => rule switch

@@ -14,11 +14,18 @@ internal sealed class DenseOracle
     private readonly List<(int From, int To, Complex Siemens, double Ratio)> _branches = [];
     private readonly List<(int Node, Complex Siemens)> _sources = [];
     private readonly HashSet<string> _live = [];
+    private readonly Func<Complex, Complex> _part;
     private int _labels;
 
-    public DenseOracle(Network network, bool withMotors = true, Func<SynchronousMachine, double>? reactancePu = null)
+    /// <param name="network">The network.</param>
+    /// <param name="withMotors">Whether asynchronous motors are in it.</param>
+    /// <param name="reactancePu">The machines' reactance; x″d by default.</param>
+    /// <param name="part">What is taken of each impedance, such as its reactance alone; all of it by default.</param>
+    public DenseOracle(
+        Network network, bool withMotors = true, Func<SynchronousMachine, double>? reactancePu = null, Func<Complex, Complex>? part = null)
     {
         _network = network;
+        _part = part ?? (z => z);
         Label();
         AddBranches();
         AddSources(withMotors, reactancePu ?? (machine => machine.ReactancePu.Subtransient));
@@ -82,7 +89,7 @@ internal sealed class DenseOracle
     private void AddLeg(int star, string? bus, Complex ohm, double ratio)
     {
         if (bus is not null)
-            _branches.Add((star, _label[bus], 1 / ohm, ratio));
+            _branches.Add((star, _label[bus], 1 / _part(ohm), ratio));
     }
 
     private void AddSources(bool withMotors, Func<SynchronousMachine, double> reactancePu)
@@ -141,9 +148,9 @@ internal sealed class DenseOracle
         bool IsLive(int node) => _live.Any(bus => _label[bus] == node);
     }
 
-    private void Add(string from, string to, Complex ohm, double ratio) => _branches.Add((_label[from], _label[to], 1 / ohm, ratio));
+    private void Add(string from, string to, Complex ohm, double ratio) => _branches.Add((_label[from], _label[to], 1 / _part(ohm), ratio));
 
-    private void AddSource(string bus, Complex ohm) => _sources.Add((_label[bus], 1 / ohm));
+    private void AddSource(string bus, Complex ohm) => _sources.Add((_label[bus], 1 / _part(ohm)));
 
     private bool Active(NetworkElement element, params string?[] buses) =>
         element.InService && buses.All(id => id is null || _network.Buses.First(bus => bus.Id == id).InService);

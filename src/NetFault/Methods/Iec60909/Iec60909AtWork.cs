@@ -72,7 +72,7 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
         if (Method.LeaveOutSmallMotors && LeavesMotorsOut(node, driving, Seen(Iec60909.WithoutMotors, node)))
             variant = Iec60909.WithoutMotors;
         var network = Inside.Of(node)?.Solved(Method, variant) ?? Networks.Of(variant);
-        return FlowBasis.Of(network, variant, driving, Converters.Injections(instant));
+        return FlowBasis.Of(network, driving, Converters.Injections(instant));
     }
 
     /// <summary>c at a bus, or c·UrG/Un at a machine's terminals inside a power station unit.</summary>

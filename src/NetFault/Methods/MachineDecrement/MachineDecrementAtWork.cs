@@ -36,7 +36,7 @@ internal sealed class MachineDecrementAtWork : CurrentsOfMethod
         new MachineDecrementCurrents(this, context, context.Network.Buses[bus], seen);
 
     public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant) =>
-        FlowBasis.Of(context.Networks.At(instant), context.Method.NetworkAt(instant), context.Method.DrivingVoltagePu(context.Network.Buses[bus]));
+        FlowBasis.Of(context.Networks.At(instant), context.Method.DrivingVoltagePu(context.Network.Buses[bus]));
 
     public override IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds)
     {
@@ -47,7 +47,7 @@ internal sealed class MachineDecrementAtWork : CurrentsOfMethod
         var weights = part.WeightsAt(angle).Ac;
         var voltage = context.Method.DrivingVoltagePu(context.Network.Buses[bus]);
         return part.Rule.Nodes.Select((node, q) =>
-            new FlowBasis(solution.NetworkAt(node), solution.VariantAt(node), voltage, weights[q] / node, []));
+            new FlowBasis(solution.NetworkAt(node), voltage, weights[q] / node, []));
     }
 
     public override IReadOnlyList<DecayPart> PartsOverTime() =>
