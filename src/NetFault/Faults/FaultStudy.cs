@@ -125,6 +125,19 @@ public sealed class FaultStudy
     }
 
     /// <summary>
+    /// How far the rules for X/R lie from the exact DC component at a time and from the exact peak, at every bus: the impedance at the fault,
+    /// separate networks, and the equivalent frequency of IEC 60909-0. By <see cref="MachineDecrement"/>, whatever its own rules are.
+    /// </summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative, within the method's horizon.</param>
+    /// <param name="cancellationToken">Stops the work between steps.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is out of its range.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
+    /// <exception cref="NotSupportedException">The method is another one.</exception>
+    /// <exception cref="OperationCanceledException">The work was stopped.</exception>
+    public DcRuleComparison CompareDcRules(double seconds, CancellationToken cancellationToken = default) =>
+        _context.Currents.CompareDcRules(_context, Guard.NotNegative(seconds), cancellationToken);
+
+    /// <summary>
     /// The bus impedance matrix per unit, dense, one row for each of <see cref="Nodes"/>. It takes 16·n² bytes and n solves: for small
     /// networks; <see cref="EveryBus"/> never needs it.
     /// </summary>

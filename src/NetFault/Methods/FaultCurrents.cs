@@ -67,6 +67,10 @@ internal abstract class CurrentsOfMethod
     public virtual IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds) => throw new NotSupportedException(
         $"{context.Method.Name} gives no branch currents over time; ask for those of an instant, or take MachineDecrement");
 
+    /// <summary>The rules for the DC component beside the exact one.</summary>
+    public virtual DcRuleComparison CompareDcRules(StudyContext context, double seconds, CancellationToken cancellation) =>
+        throw new NotSupportedException($"{context.Method.Name} has its own rule for the DC component; compare rules by MachineDecrement");
+
     /// <summary>What the currents over time of every bus are found from, beside the method's networks.</summary>
     public virtual IReadOnlyList<DecayPart> PartsOverTime() => [];
 }

@@ -35,10 +35,12 @@ internal static class CsvReport
             writer.Write("# " + text.Replace('\r', ' ').Replace('\n', ' ') + LineEnd);
     }
 
-    private static void WriteRow(TextWriter writer, IEnumerable<string> cells) =>
+    /// <summary>Writes one row.</summary>
+    public static void WriteRow(TextWriter writer, IEnumerable<string> cells) =>
         writer.Write(string.Join(",", cells.Select(Quoted)) + LineEnd);
 
-    private static string Cell(object? value) => value switch
+    /// <summary>A value as a file has it.</summary>
+    public static string Cell(object? value) => value switch
     {
         null => string.Empty,
         double number => RoundTrip.Text(number),

@@ -41,6 +41,18 @@ public static class FaultReport
     public static void WriteJson(Stream stream, FaultStudy study, IReadOnlyList<BusFault> faults, ReportOptions? options = null) =>
         JsonReport.Write(Guard.NotNull(stream), Guard.NotNull(study), Of(study, faults), options ?? new ReportOptions());
 
+    /// <summary>A comparison of the rules for the DC component as a table of text, with the worst of each rule below it.</summary>
+    /// <param name="comparison">The comparison.</param>
+    /// <exception cref="ArgumentNullException">The comparison is null.</exception>
+    public static string ToTable(DcRuleComparison comparison) => ComparisonReport.Render(Guard.NotNull(comparison));
+
+    /// <summary>A comparison of the rules for the DC component as CSV (RFC 4180), one row for each bus and rule.</summary>
+    /// <param name="writer">Where to write; it is left open.</param>
+    /// <param name="comparison">The comparison.</param>
+    /// <exception cref="ArgumentNullException">Writer or comparison are null.</exception>
+    public static void WriteCsv(TextWriter writer, DcRuleComparison comparison) =>
+        ComparisonReport.Write(Guard.NotNull(writer), Guard.NotNull(comparison));
+
     /// <summary>The faults, if they are results of the study: a report is headed by the study's method.</summary>
     private static IReadOnlyList<BusFault> Of(FaultStudy study, IReadOnlyList<BusFault> faults) =>
         Guard.NotNull(faults).All(fault => Guard.NotNull(fault, nameof(faults)).IsOf(study.Context))

@@ -38,6 +38,8 @@ internal sealed record ReportColumn(string Name, string? Symbol, string Unit, Fu
             columns.AddRange(Iec60909Columns.Of(options));
         if (method is IeeeC37)
             columns.AddRange(IeeeC37Columns.Of(options));
+        if (method is MachineDecrement)
+            columns.AddRange(OverTimeColumns.Of(options));
         columns.AddRange(
         [
             new("x_over_r_rule", null, "", fault => Snake(fault.XOverRRule.ToString())),
@@ -68,9 +70,13 @@ internal sealed record ReportColumn(string Name, string? Symbol, string Unit, Fu
         var time = seconds.ToString("R", CultureInfo.InvariantCulture);
         if (method is Iec60909)
             yield return new($"symmetrical_rms_ka_at_{time}_s", $"Ib({time} s)", "kA", fault => fault.SymmetricalRmsKa(seconds));
-        if (method is IeeeC37)
-            yield return new($"symmetrical_rms_ka_at_{time}_s", null, "kA", fault => fault.SymmetricalRmsKa(seconds));
+        else
+            yield return new($"symmetrical_rms_ka_at_{time}_s", SymbolOfAc(method, time), "kA", fault => fault.SymmetricalRmsKa(seconds));
         yield return new($"dc_component_ka_at_{time}_s", $"i_dc({time} s)", "kA", fault => fault.DcComponentKa(seconds));
         yield return new($"asymmetrical_rms_ka_at_{time}_s", $"I_asym({time} s)", "kA", fault => fault.AsymmetricalRmsKa(seconds));
     }
+
+    /// <summary>A table shows the AC component where it is not I″k, which it shows anyway.</summary>
+    private static string? SymbolOfAc(FaultMethod method, string time) =>
+        method is MachineDecrement { AcComponentRule: not AcComponentRule.HeldAtInitial } ? $"Iac({time} s)" : null;
 }

@@ -16,11 +16,22 @@ internal static class ReportTexts
         IeeeC37 => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; "
             + "first-cycle, interrupting (from 1.5 cycles) and 30-cycle networks; "
             + "remote multiplying factors, no AC decrement credited for local generators.",
-        _ => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; DC component by X/R; AC component held at I″k over time.",
+        MachineDecrement decrement => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}; "
+            + $"DC component {DcRule(decrement.DcDecayRule)}; AC component {AcRule(decrement.AcComponentRule)}.",
+        _ => $"Method: {method.Name}; X/R by {RuleName(method.RatioRule)}.",
+    };
+
+    private static string DcRule(DcDecayRule rule) => rule == DcDecayRule.Exact ? "exact" : "by X/R";
+
+    private static string AcRule(AcComponentRule rule) => rule switch
+    {
+        AcComponentRule.HeldAtInitial => "held at I″k over time",
+        AcComponentRule.Exact => "decaying with all machines, exact",
+        _ => "decaying with all machines, reactances at rated frequency",
     };
 
     /// <summary>An X/R rule in words.</summary>
-    private static string RuleName(XOverRRule rule) => rule switch
+    public static string RuleName(XOverRRule rule) => rule switch
     {
         XOverRRule.SeparateNetworks => "separate R and X networks",
         XOverRRule.EquivalentFrequency => "the equivalent frequency, method (c)",

@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Text;
 
 namespace NetFault;
@@ -33,26 +32,7 @@ internal static class TableReport
             columns.Select(column => column.Unit).ToArray(),
         };
         rows.AddRange(faults.Select(fault => columns.Select(column => column.Text(fault)).ToArray()));
-        var widths = columns.Select((_, i) => rows.Max(row => Width(row[i]))).ToArray();
-        for (var i = 0; i < rows.Count; i++)
-        {
-            AppendRow(text, rows[i], widths);
-            if (i == 1)
-                text.Append('-', widths.Sum() + 2 * (widths.Length - 1)).Append('\n');
-        }
-    }
-
-    private static void AppendRow(StringBuilder text, string[] cells, int[] widths)
-    {
-        var line = new StringBuilder();
-        for (var i = 0; i < cells.Length; i++)
-        {
-            var gap = widths[i] - Width(cells[i]);
-            var leftAligned = i == 0 || i == cells.Length - 1;
-            line.Append(i > 0 ? "  " : "");
-            line.Append(' ', leftAligned ? 0 : gap).Append(cells[i]).Append(' ', leftAligned ? gap : 0);
-        }
-        text.Append(line.ToString().TrimEnd()).Append('\n');
+        TextTable.Append(text, rows, headingRows: 2);
     }
 
     private static void AppendNotes(StringBuilder text, FaultStudy study, IReadOnlyList<BusFault> faults)
@@ -69,7 +49,4 @@ internal static class TableReport
         if (text.Length > start)
             text.Insert(start, "\n");
     }
-
-    /// <summary>Columns a text takes on a terminal, counted in text elements, not in UTF-16 units.</summary>
-    private static int Width(string text) => new StringInfo(text).LengthInTextElements;
 }

@@ -138,7 +138,10 @@ public sealed record MachineDecrement : FaultMethod
     {
         var impedances = new Complex?[circuit.Sources.Length];
         for (var i = 0; i < impedances.Length; i++)
-            impedances[i] = Impedance(circuit.Network, circuit.Sources[i].Element, variant.Instant, log);
+        {
+            if (Impedance(circuit.Network, circuit.Sources[i].Element, variant.Instant, log) is { } z)
+                impedances[i] = new Complex(z.Real, z.Imaginary * variant.FrequencyRatio);
+        }
         return impedances;
     }
 

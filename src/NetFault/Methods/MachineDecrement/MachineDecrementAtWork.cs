@@ -18,6 +18,9 @@ internal sealed class MachineDecrementAtWork : CurrentsOfMethod
     /// <summary>ω in rad/s.</summary>
     public double Omega { get; }
 
+    /// <summary>ω times the horizon.</summary>
+    public double HorizonAngle => Omega * _method.HorizonSeconds;
+
     /// <summary>What gives the AC component over time; null where it is held.</summary>
     public DecaySolution? AcSolution => _method.AcComponentRule switch
     {
@@ -31,6 +34,9 @@ internal sealed class MachineDecrementAtWork : CurrentsOfMethod
 
     /// <summary>The exact solution, whatever the rules are: for comparing rules with it.</summary>
     public DecaySolution ExactSolution => _exact.Value;
+
+    public override DcRuleComparison CompareDcRules(StudyContext context, double seconds, CancellationToken cancellation) =>
+        DcRules.At(context, this, seconds, cancellation);
 
     public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
         new MachineDecrementCurrents(this, context, context.Network.Buses[bus], seen);
@@ -62,13 +68,12 @@ internal sealed class MachineDecrementAtWork : CurrentsOfMethod
 
     private DecaySolution Solution(StudyNetworks networks, bool quasiStatic)
     {
-        var angle = Omega * _method.HorizonSeconds;
-        if (angle > DecayWindow.LargestAngle)
+        if (HorizonAngle > DecayWindow.LargestAngle)
         {
             throw CurrentOverTimeException.Because(
                 FormattableString.Invariant($"a horizon of {_method.HorizonSeconds} s is too long at {networks.Circuit.Network.FrequencyHz} Hz"),
                 FormattableString.Invariant($"set MachineDecrement.HorizonSeconds to {DecayWindow.LargestAngle / Omega:0.##} s or less"));
         }
-        return new DecaySolution(networks, quasiStatic, angle, _method.DecayErrorLimit);
+        return new DecaySolution(networks, quasiStatic, HorizonAngle, _method.DecayErrorLimit);
     }
 }

@@ -11,6 +11,7 @@ internal sealed class MachineDecrementCurrents : FaultCurrents
     private readonly SeenImpedances _seen;
     private DecayOfFault? _ac;      // made when first asked for; whoever comes at the same time makes an equal one
     private DecayOfFault? _dc;
+    private PeakCurrent? _worstPeak;
 
     public MachineDecrementCurrents(MachineDecrementAtWork work, StudyContext context, Bus bus, in SeenImpedances seen)
     {
@@ -44,9 +45,9 @@ internal sealed class MachineDecrementCurrents : FaultCurrents
     public override double? InstantaneousKa(double seconds, double closingAngle) =>
         Waveform.InstantaneousKa(AngleOf(seconds, AcOfDecay ?? DcOfDecay), closingAngle);
 
-    public override PeakCurrent WorstPeak => Waveform.WorstPeak(AcOfDecay is null && DcOfDecay is null
+    public override PeakCurrent WorstPeak => _worstPeak ??= Waveform.WorstPeak(AcOfDecay is null && DcOfDecay is null
         ? double.PositiveInfinity
-        : _context.Omega * Method.HorizonSeconds);
+        : _work.HorizonAngle);
 
     public override double SymmetricalRmsKa(double seconds) => Complex.Abs(Ac(AngleOf(seconds, AcOfDecay)));
 

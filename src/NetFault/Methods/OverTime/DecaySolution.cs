@@ -37,7 +37,11 @@ internal sealed class DecaySolution
     public DecayPart PartAt(double angle) => _parts.First(part => angle <= part.Window.LastAngle);
 
     /// <summary>The parts that a horizon needs.</summary>
-    public IEnumerable<DecayPart> PartsOfHorizon => _parts.Where(part => part.Window.FirstAngle < _horizonAngle);
+    public IEnumerable<DecayPart> PartsOfHorizon => PartsUpTo(_horizonAngle);
+
+    /// <summary>The parts that begin before a time.</summary>
+    /// <param name="angle">ω·t.</param>
+    public IEnumerable<DecayPart> PartsUpTo(double angle) => _parts.Where(part => part.Window.FirstAngle <= angle);
 
     /// <summary>The network at a node of the quadrature.</summary>
     public SolvedNetwork NetworkAt(Complex node)
