@@ -4,7 +4,8 @@ namespace NetFault.Tests.Support;
 
 /// <summary>
 /// Invented plants for the current over time, made from a seed: two or three voltage levels, meshed, off-nominal ratios, closed couplers,
-/// feeders, up to 20 machines, motors. R/X from 0.01 to 5; T″ 0.01 to 0.05 s, T′ 0.3 to 10 s, motors' T 0.01 to 0.2 s; 50 or 60 Hz.
+/// feeders, up to 20 machines, motors. R/X from 0.01 to 5; T″ 0.01 to 0.05 s, T′ 0.3 to 10 s, motors' T 0.01 to 0.2 s; 50 or 60 Hz. Now and then
+/// a machine lacks a time constant, or a motor its slip.
 /// </summary>
 internal sealed class RandomDecayPlants
 {
@@ -25,8 +26,18 @@ internal sealed class RandomDecayPlants
     public static Gen<(int Seed, int Buses, int Machines)> Cases(int mostBuses = 60, int mostMachines = 20) =>
         Gen.Select(Gen.Int[0, int.MaxValue - 1], Gen.Int[1, mostBuses], Gen.Int[0, mostMachines]);
 
-    /// <summary>The plant of a seed. Without motors and decay it is a circuit of resistances and reactances.</summary>
+    /// <summary>The plant of a seed.</summary>
     public static Network Make(int seed, int buses, int machines) => new RandomDecayPlants(seed).Build(buses, machines);
+
+    /// <summary>The plant as a circuit of resistances and reactances: machines held at x″d, no motors.</summary>
+    public static Network WithoutDecay(Network plant) => plant.With(
+    [
+        .. plant.SynchronousMachines.Select(one => one with
+        {
+            ReactancePu = new MachineReactances(one.ReactancePu.Subtransient), TimeConstantSeconds = default,
+        }),
+        .. plant.AsynchronousMotors.Select(one => one with { InService = false }),
+    ]);
 
     private Network Build(int count, int machines)
     {
@@ -74,20 +85,20 @@ internal sealed class RandomDecayPlants
         var x = one.NominalKv * one.NominalKv / PowerMva(one) * Between(0.003, 0.06);
         if (kind == 1)
         {
-            _builder.Add(new SeriesReactor { Id = Id(), From = one.Id, To = other.Id, Ohm = new Impedance(x * ROverX(0.01, 0.05), x) });
+            _builder.Add(new SeriesReactor { Id = Id(), From = one.Id, To = other.Id, Ohm = new Impedance(x * LogBetween(0.01, 0.05), x) });
             return;
         }
         _builder.Add(new Line
         {
             Id = Id(), From = one.Id, To = other.Id, LengthKm = Between(0.2, 3), Parallel = 1 + _random.Next(2),
-            OhmPerKm = new Impedance(x * ROverX(0.05, 5), x),
+            OhmPerKm = new Impedance(x * LogBetween(0.05, 5), x),
         });
     }
 
     private void AddTransformer(Bus hv, Bus lv) => _builder.Add(new Transformer
     {
         Id = Id(), Hv = hv.Id, Lv = lv.Id, RatedMva = PowerMva(lv) * Between(0.5, 1.5), RatedHvKv = hv.NominalKv * Between(0.95, 1.05),
-        RatedLvKv = lv.NominalKv * Between(0.98, 1.04), ShortCircuitVoltagePercent = Between(5, 14), XOverR = 1 / ROverX(0.01, 0.3),
+        RatedLvKv = lv.NominalKv * Between(0.98, 1.04), ShortCircuitVoltagePercent = Between(5, 14), XOverR = 1 / LogBetween(0.01, 0.3),
     });
 
     private void AddThreeWindings(Bus hv, Bus mv, Bus lv) => _builder.Add(new ThreeWindingTransformer
@@ -101,7 +112,7 @@ internal sealed class RandomDecayPlants
 
     private void AddFeeder(Bus bus) => _builder.Add(new NetworkFeeder
     {
-        Id = Id(), Bus = bus.Id, ShortCircuitMva = new MaxMin(PowerMva(bus) * Between(10, 60)), ROverX = ROverX(0.01, 1),
+        Id = Id(), Bus = bus.Id, ShortCircuitMva = new MaxMin(PowerMva(bus) * Between(10, 60)), ROverX = LogBetween(0.01, 1),
     });
 
     private void AddMachine(Bus bus)
@@ -110,8 +121,8 @@ internal sealed class RandomDecayPlants
         _builder.Add(new SynchronousMachine
         {
             Id = Id(), Bus = bus.Id, RatedMva = PowerMva(bus) * Between(0.2, 1.2), RatedKv = bus.NominalKv * Between(0.95, 1.05),
-            ReactancePu = new MachineReactances(first, second, third), ArmatureResistancePu = first * ROverX(0.01, 0.3),
-            TimeConstantSeconds = new MachineTimeConstants(LogBetween(0.01, 0.05), LogBetween(0.3, 10)),
+            ReactancePu = new MachineReactances(first, second, third), ArmatureResistancePu = first * LogBetween(0.01, 0.3),
+            TimeConstantSeconds = new MachineTimeConstants(NowAndThenNull(LogBetween(0.01, 0.05)), NowAndThenNull(LogBetween(0.3, 10))),
         });
     }
 
@@ -124,14 +135,14 @@ internal sealed class RandomDecayPlants
         {
             Id = Id(), Bus = bus.Id, RatedKw = 1000 * PowerMva(bus) * Between(0.02, 0.3), RatedPowerFactor = Between(0.8, 0.92),
             Efficiency = Between(0.9, 0.97), LockedRotorCurrentRatio = ratio, ROverX = rOverX, Count = 1 + _random.Next(3),
-            RatedSlipPercent = 100 * x / (2 * Math.PI * _builder.FrequencyHz * LogBetween(0.01, 0.2)),
+            RatedSlipPercent = NowAndThenNull(100 * x / (2 * Math.PI * _builder.FrequencyHz * LogBetween(0.01, 0.2))),
         });
     }
 
     /// <summary>A power that is usual at the bus's voltage.</summary>
     private static double PowerMva(Bus bus) => bus.NominalKv switch { > 50 => 80, > 15 => 30, > 3 => 10, _ => 1 };
 
-    private double ROverX(double low, double high) => LogBetween(low, high);
+    private double? NowAndThenNull(double value) => _random.Next(12) == 0 ? null : value;
 
     private Bus Any(List<Bus> among) => among[_random.Next(among.Count)];
 
