@@ -36,7 +36,7 @@ public class DecayOracleTests
     [Fact]
     public void A_motor_at_its_terminals_decays_with_its_own_time_constant()
     {
-        // Behind a feeder without impedance to speak of, the fault current is the sum of the two.
+        // A fault at their bus parts the feeder and the motors: its current is the sum of the two, of the same R/X here.
         var network = Plants.OneFeeder(0.1).With(new AsynchronousMotor
         {
             Id = "M", Bus = "Q", RatedKw = 2000, RatedKv = 20, RatedPowerFactor = 0.88, Efficiency = 0.95, LockedRotorCurrentRatio = 6,
@@ -46,7 +46,8 @@ public class DecayOracleTests
         var seconds = 1 / 6.0 / Math.Sqrt(1.01) / (2 * Math.PI * 50 * 0.008);
         var oracle = new DecayOracle(network, "Q", DecayMode.QuasiStatic);
         oracle.AcRmsKa(0.06).Should().BeApproximately(10 + motorsKa * Math.Exp(-0.06 / seconds), 1e-10);
-        oracle.AcIntoBusKa("asynchronous_motors", "M", "Q", 0.06).Magnitude.Should().BeApproximately(motorsKa * Math.Exp(-0.06 / seconds), 1e-11);
+        var motors = oracle.AcIntoBusKa("asynchronous_motors", "M", "Q", 0.06).Magnitude;
+        motors.Should().BeApproximately(motorsKa * Math.Exp(-0.06 / seconds), 1e-11);
     }
 
     [Theory]
@@ -129,7 +130,8 @@ public class DecayOracleTests
         var faulted = network.Buses[12].Id;
         var oracle = new DecayOracle(network, faulted, DecayMode.Exact);
         var sources = network.SynchronousMachines.Concat<ShuntElement>(network.NetworkFeeders).Concat(network.AsynchronousMotors);
-        var inflow = sources.Where(one => one.Bus == "E0").Aggregate(Complex.Zero, (sum, one) => sum + oracle.AcIntoBusKa(one.Section, one.Id, "E0", 0.08));
+        var inflow = sources.Where(one => one.Bus == "E0")
+            .Aggregate(Complex.Zero, (sum, one) => sum + oracle.AcIntoBusKa(one.Section, one.Id, "E0", 0.08));
         var outflow = network.Lines.Select(one => (one.Section, one.Id))
             .Concat(network.SeriesReactors.Select(one => (one.Section, one.Id)))
             .Concat(network.Transformers.Select(one => (one.Section, one.Id)))
@@ -142,7 +144,9 @@ public class DecayOracleTests
 
     private static string Any(Network network, Random random) => network.Buses[random.Next(network.Buses.Count)].Id;
 
-    /// <summary>i(0) = 0 where there is inductance, and Σ r/(p − z) against a dense inverse at p, at random places right of all poles.</summary>
+    /// <summary>
+    /// i(0) = 0 where there is inductance; Σ r/(p − z) against a dense inverse at p, at random places right of all poles.
+    /// </summary>
     private static void AssertTransform(DecayOracle oracle, Random random)
     {
         var largest = oracle.Residues.Max(residue => residue.Magnitude);

@@ -4,8 +4,8 @@ using Xunit.Abstractions;
 namespace NetFault.Tests.Methods;
 
 /// <summary>
-/// The oracle of the current over time against a circuit simulation of the same network by ngspice. The trapezoidal rule with 4,000 steps a cycle
-/// is within 1e-6 of the solution: (2π/4000)²/12 = 2e-7 of each reactance.
+/// The oracle of the current over time against a circuit simulation of the same network by ngspice. The trapezoidal rule with 4,000 steps a
+/// cycle is within 1e-6 of the solution: (2π/4000)²/12 = 2e-7 of each reactance.
 /// </summary>
 public class SpiceDecayTests(ITestOutputHelper output)
 {

@@ -22,7 +22,9 @@ internal sealed record DecayBranch(string Section, string Id, IReadOnlyList<Deca
 
     public double Size => Math.Sqrt(R * R + X * X);
 
-    /// <summary>The operational impedance: <paramref name="s"/> is what reactances are multiplied with, <paramref name="p"/> Laplace's variable.</summary>
+    /// <summary>
+    /// The operational impedance: <paramref name="s"/> is what reactances are multiplied with, <paramref name="p"/> Laplace's variable.
+    /// </summary>
     public Complex Impedance(Complex s, Complex p)
     {
         if (MotorSeconds is { } seconds)

@@ -88,27 +88,36 @@ internal sealed class DecayCircuit
             AddThreeWindings(one);
     }
 
+    /// <summary>With an open winding the pair of the two others counts, else the star of the three pairs, referred to HV.</summary>
     private void AddThreeWindings(ThreeWindingTransformer one)
     {
         var (mva, kv, uk, ur) = (one.RatedMva, one.RatedKv, one.ShortCircuitVoltagePercent, one.ResistivePercent);
-        Complex Pair(double? u, double? r, double? a, double? b, double? refKv, string refBus) =>
-            Part(u!.Value, r!.Value) * refKv!.Value * refKv.Value / Math.Min(a!.Value, b!.Value) / BaseOhm(refBus);
-        if (one.Hv is null)
-            Add(one, one.Mv!, one.Lv!, Pair(uk.MvLv, ur.MvLv, mva.Mv, mva.Lv, kv.Mv, one.Mv!), Ratio(kv.Mv!.Value, one.Mv!, kv.Lv!.Value, one.Lv!));
-        else if (one.Mv is null)
-            Add(one, one.Hv, one.Lv!, Pair(uk.HvLv, ur.HvLv, mva.Hv, mva.Lv, kv.Hv, one.Hv), Ratio(kv.Hv!.Value, one.Hv, kv.Lv!.Value, one.Lv!));
-        else if (one.Lv is null)
-            Add(one, one.Hv, one.Mv, Pair(uk.HvMv, ur.HvMv, mva.Hv, mva.Mv, kv.Hv, one.Hv), Ratio(kv.Hv!.Value, one.Hv, kv.Mv!.Value, one.Mv));
+        var hv = (Bus: one.Hv, Mva: mva.Hv, Kv: kv.Hv);
+        var mv = (Bus: one.Mv, Mva: mva.Mv, Kv: kv.Mv);
+        var lv = (Bus: one.Lv, Mva: mva.Lv, Kv: kv.Lv);
+        var reference = hv.Bus is null ? mv : hv;
+        var hm = Pair(uk.HvMv, ur.HvMv, hv.Mva, mv.Mva);
+        var hl = Pair(uk.HvLv, ur.HvLv, hv.Mva, lv.Mva);
+        var ml = Pair(uk.MvLv, ur.MvLv, mv.Mva, lv.Mva);
+        if (hv.Bus is null)
+            Add(one, mv.Bus!, lv.Bus!, ml, RatioTo(lv));
+        else if (mv.Bus is null)
+            Add(one, hv.Bus, lv.Bus!, hl, RatioTo(lv));
+        else if (lv.Bus is null)
+            Add(one, hv.Bus, mv.Bus, hm, RatioTo(mv));
         else
         {
-            var hm = Pair(uk.HvMv, ur.HvMv, mva.Hv, mva.Mv, kv.Hv, one.Hv);
-            var hl = Pair(uk.HvLv, ur.HvLv, mva.Hv, mva.Lv, kv.Hv, one.Hv);
-            var ml = Pair(uk.MvLv, ur.MvLv, mva.Mv, mva.Lv, kv.Hv, one.Hv);
             var star = _labels++;
-            AddLeg(one, one.Hv, star, (hm + hl - ml) / 2, 1);
-            AddLeg(one, one.Mv, star, (hm + ml - hl) / 2, Ratio(kv.Hv!.Value, one.Hv, kv.Mv!.Value, one.Mv));
-            AddLeg(one, one.Lv, star, (hl + ml - hm) / 2, Ratio(kv.Hv!.Value, one.Hv, kv.Lv!.Value, one.Lv));
+            AddLeg(one, hv.Bus, star, (hm + hl - ml) / 2, 1);
+            AddLeg(one, mv.Bus, star, (hm + ml - hl) / 2, RatioTo(mv));
+            AddLeg(one, lv.Bus, star, (hl + ml - hm) / 2, RatioTo(lv));
         }
+
+        Complex Pair(double? u, double? r, double? a, double? b) => u is null || r is null || a is null || b is null
+            ? Complex.Zero
+            : Part(u.Value, r.Value) * Math.Pow(reference.Kv!.Value, 2) / Math.Min(a.Value, b.Value) / BaseOhm(reference.Bus!);
+
+        double RatioTo((string? Bus, double? Mva, double? Kv) other) => Ratio(reference.Kv!.Value, reference.Bus!, other.Kv!.Value, other.Bus!);
     }
 
     private void Add(NetworkElement element, string from, string to, Complex z, double ratio) => _all.Add(
@@ -158,5 +167,6 @@ internal sealed class DecayCircuit
         ? Complex.FromPolarCoordinates(one.ShortCircuitVoltagePercent / 100, Math.Atan(ratio))
         : Part(one.ShortCircuitVoltagePercent, one.ResistivePercent ?? one.LoadLossKw!.Value / 10 / one.RatedMva);
 
-    private static Complex Part(double percent, double resistive) => new Complex(resistive, Math.Sqrt(percent * percent - resistive * resistive)) / 100;
+    private static Complex Part(double percent, double resistive) =>
+        new Complex(resistive, Math.Sqrt(percent * percent - resistive * resistive)) / 100;
 }

@@ -2,7 +2,9 @@ using System.Numerics;
 
 namespace NetFault.Tests.Support;
 
-/// <summary>Synchronous machines and asynchronous motors as branches of <see cref="DecayOracle"/>, after section 6.1 of the design.</summary>
+/// <summary>
+/// Synchronous machines and asynchronous motors as branches of <see cref="DecayOracle"/>, after section 6.1 of the design.
+/// </summary>
 internal static class DecayMachines
 {
     /// <summary>Slip of a motor that gives none, in percent.</summary>
@@ -11,7 +13,8 @@ internal static class DecayMachines
     /// <summary>
     /// 1/X(p) = 1/x″d − (1/x′d − 1/xd)/(1 + pT′d) − (1/x″d − 1/x′d)/(1 + pT″d); where a time constant is not known, its part stays.
     /// </summary>
-    public static DecayBranch Synchronous(SynchronousMachine one, IReadOnlyList<DecayEnd> ends, double nominalKv, double baseMva, double omega)
+    public static DecayBranch Synchronous(
+        SynchronousMachine one, IReadOnlyList<DecayEnd> ends, double nominalKv, double baseMva, double omega)
     {
         var ratedOhm = Math.Pow(one.RatedKv ?? nominalKv, 2) / one.RatedMva;
         var toBase = ratedOhm * baseMva / (nominalKv * nominalKv);
@@ -20,7 +23,9 @@ internal static class DecayMachines
         var third = one.ReactancePu.Synchronous ?? second;
         var r = one.ArmatureResistancePu
             ?? one.ArmatureResistanceOhm / ratedOhm
-            ?? (one.TimeConstantSeconds.Armature is { } seconds ? (one.ReactancePu.Negative ?? first) / (omega * seconds) : first / (omega * 0.15));
+            ?? (one.TimeConstantSeconds.Armature is { } seconds
+                ? (one.ReactancePu.Negative ?? first) / (omega * seconds)
+                : first / (omega * 0.15));
         return new DecayBranch(one.Section, one.Id, ends, r * toBase, first * toBase)
         {
             Terms = new[] { (second, third, one.TimeConstantSeconds.Transient), (first, second, one.TimeConstantSeconds.Subtransient) }
@@ -30,7 +35,8 @@ internal static class DecayMachines
     }
 
     /// <summary>The locked-rotor impedance times (1 + pT)/(pT), T = x/(ω·r2) with both on the motor's own rating.</summary>
-    public static DecayBranch Asynchronous(AsynchronousMotor one, IReadOnlyList<DecayEnd> ends, double nominalKv, double baseMva, double omega)
+    public static DecayBranch Asynchronous(
+        AsynchronousMotor one, IReadOnlyList<DecayEnd> ends, double nominalKv, double baseMva, double omega)
     {
         var kv = one.RatedKv ?? nominalKv;
         var own = Complex.FromPolarCoordinates(1 / one.LockedRotorCurrentRatio, Math.Atan2(1, ROverX(one, kv)));

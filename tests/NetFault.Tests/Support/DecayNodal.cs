@@ -3,7 +3,9 @@ using MathNet.Numerics.LinearAlgebra;
 
 namespace NetFault.Tests.Support;
 
-/// <summary>The driving-point impedance of the circuit of <see cref="DecayOracle"/> at the faulted node, by nodes and a dense solve.</summary>
+/// <summary>
+/// The driving-point impedance of the circuit of <see cref="DecayOracle"/> at the faulted node, by nodes and a dense solve.
+/// </summary>
 internal static class DecayNodal
 {
     public static Complex Impedance(DecayCircuit circuit, Func<DecayBranch, Complex> impedance)
@@ -22,7 +24,9 @@ internal static class DecayNodal
     }
 }
 
-/// <summary>Diagonal scaling by powers of two that makes rows and columns alike in size (Parlett and Reinsch 1969), for eigenvalues.</summary>
+/// <summary>
+/// Diagonal scaling by powers of two that makes rows and columns alike in size (Parlett and Reinsch 1969), for eigenvalues.
+/// </summary>
 internal static class Balancing
 {
     public static double[] Of(Matrix<Complex> h)

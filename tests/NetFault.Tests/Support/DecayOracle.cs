@@ -15,9 +15,9 @@ internal enum DecayMode
 internal sealed record DecayPeak(double Ka, double Seconds, double ClosingAngleDegrees);
 
 /// <summary>
-/// The fault current over time by another way than the library's: the poles z and residues r of F(p) = V/(p·Zkk(p)), V = 1, in the frame that
-/// rotates with ω, from the eigenvalues of the circuit's state matrix (Math.NET), so that i(t) = Σ r·e^(zt). The AC component is the sum over
-/// the poles above Im p = −ω/2, the DC component the rest.
+/// The fault current over time by another way than the library's: the poles z and residues r of F(p) = V/(p·Zkk(p)), V = 1, in the frame
+/// that rotates with ω, from the eigenvalues of the circuit's state matrix (Math.NET), so that i(t) = Σ r·e^(zt). The AC component is the
+/// sum over the poles above Im p = −ω/2, the DC component the rest.
 /// </summary>
 internal sealed class DecayOracle
 {
@@ -33,7 +33,9 @@ internal sealed class DecayOracle
         _circuit = new DecayCircuit(network, bus);
         _mode = mode;
         _baseKa = _circuit.BaseKa(bus);
-        (Poles, _residues) = _circuit.IsEnergised ? Solve(new DecayStateSpace(_circuit, mode == DecayMode.QuasiStatic)) : ([], new Complex[1, 0]);
+        (Poles, _residues) = _circuit.IsEnergised
+            ? Solve(new DecayStateSpace(_circuit, mode == DecayMode.QuasiStatic))
+            : ([], new Complex[1, 0]);
         Residues = Enumerable.Range(0, Poles.Count).Select(j => _residues[_residues.GetLength(0) - 1, j]).ToList();
     }
 
@@ -63,8 +65,11 @@ internal sealed class DecayOracle
     public double DcEnvelopeKa(double seconds) => Math.Sqrt(2) * DcKa(seconds).Magnitude;
 
     /// <summary>Of the phase whose voltage is √2·U·sin(ωt + angle).</summary>
-    public double InstantaneousKa(double seconds, double closingAngleDegrees) => Math.Sqrt(2)
-        * ((AcKa(seconds) + DcKa(seconds)) * Complex.FromPolarCoordinates(1, Omega * seconds + closingAngleDegrees * Math.PI / 180)).Imaginary;
+    public double InstantaneousKa(double seconds, double closingAngleDegrees)
+    {
+        var turned = Complex.FromPolarCoordinates(Math.Sqrt(2), Omega * seconds + closingAngleDegrees * Math.PI / 180);
+        return ((AcKa(seconds) + DcKa(seconds)) * turned).Imaginary;
+    }
 
     /// <summary>√2·max |AC + DC|: a scan of 400 steps a cycle, then golden sections around the largest.</summary>
     public DecayPeak WorstPeak(double horizonSeconds = 0.2)
@@ -85,7 +90,12 @@ internal sealed class DecayOracle
         double Size(double t) => Math.Sqrt(2) * (AcKa(t) + DcKa(t)).Magnitude;
     }
 
-    /// <summary>The AC current from a bus into a branch during the fault, as the library's flows have it.</summary>
+    /// <summary>Whether couplers make one node of two buses of the faulted part of the network.</summary>
+    public bool AreOneNode(string bus, string other) => _circuit.NodeOf(bus) == _circuit.NodeOf(other);
+
+    /// <summary>
+    /// The AC current from a bus into a branch during the fault, as the library's flows have it: all that flows in at the bus's node.
+    /// </summary>
     public Complex AcIntoBranchKa(string section, string id, string bus, double seconds)
     {
         var node = _circuit.NodeOf(bus);
@@ -123,7 +133,9 @@ internal sealed class DecayOracle
         return sum;
     }
 
-    /// <summary>x′ = H·x + b from x(0) = 0: the mode z with vector v gives v·(V⁻¹b)/z·(e^(zτ) − 1); what is left at the end is −H⁻¹b.</summary>
+    /// <summary>
+    /// x′ = H·x + b from x(0) = 0: the mode z with vector v gives v·(V⁻¹b)/z·(e^(zτ) − 1); what is left at the end is −H⁻¹b.
+    /// </summary>
     private (IReadOnlyList<Complex> Poles, Complex[,] Residues) Solve(DecayStateSpace space)
     {
         var states = space.H.RowCount;

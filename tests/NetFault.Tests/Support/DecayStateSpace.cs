@@ -5,10 +5,10 @@ using ComplexVector = MathNet.Numerics.LinearAlgebra.Vector<System.Numerics.Comp
 namespace NetFault.Tests.Support;
 
 /// <summary>
-/// A circuit with a short circuit at one node as ordinary differential equations in time τ = ωt: x′ = H·x + b, branch currents P·x + d, x(0) = 0,
-/// for a drive of 1 per unit in the fault. Loop currents fulfil Kirchhoff's current law by themselves: they are a basis of the null space of
-/// the incidence matrix (with the transformers' ratios), from a spanning tree of the smallest impedances with the fault in it. The fault
-/// is the last branch.
+/// A circuit with a short circuit at one node as ordinary differential equations in time τ = ωt: x′ = H·x + b, branch currents P·x + d,
+/// x(0) = 0, for a drive of 1 per unit in the fault. Loop currents fulfil Kirchhoff's current law by themselves: they are a basis of the
+/// null space of the incidence matrix (with the transformers' ratios), from a spanning tree of the smallest impedances with the fault in
+/// it. The fault is the last branch.
 /// </summary>
 internal sealed class DecayStateSpace
 {
@@ -75,8 +75,8 @@ internal sealed class DecayStateSpace
     /// Flux of a machine: X″·(i + Σ A·w), T·dw/dt = flux − w. Motor: (R + sX)·(i + w), T·dw/dt = i. Matrices cannot be empty: where nothing
     /// decays there is one rotor that nothing drives.
     /// </summary>
-    private (Matrix<Complex> M, Matrix<Complex> R, Matrix<Complex> N, Matrix<Complex> Rw, Matrix<Complex> G, Matrix<Complex> Q, ComplexVector C)
-        Equations()
+    private (Matrix<Complex> M, Matrix<Complex> R, Matrix<Complex> N, Matrix<Complex> Rw,
+        Matrix<Complex> G, Matrix<Complex> Q, ComplexVector C) Equations()
     {
         var branches = _circuit.Branches;
         var transposed = Loops.Transpose();
@@ -139,7 +139,9 @@ internal sealed class DecayStateSpace
         return loops;
     }
 
-    /// <summary>A spanning tree with the reference (numbered last) as its root, of the smallest impedances (Kruskal), the fault first.</summary>
+    /// <summary>
+    /// A spanning tree with the reference (numbered last) as its root, of the smallest impedances (Kruskal), the fault first.
+    /// </summary>
     private List<int> Tree()
     {
         var group = Enumerable.Range(0, _circuit.NodeCount + 1).ToArray();

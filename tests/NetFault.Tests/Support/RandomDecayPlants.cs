@@ -4,8 +4,8 @@ namespace NetFault.Tests.Support;
 
 /// <summary>
 /// Invented plants for the current over time, made from a seed: two or three voltage levels, meshed, off-nominal ratios, closed couplers,
-/// feeders, up to 20 machines, motors. R/X from 0.01 to 5; T″ 0.01 to 0.05 s, T′ 0.3 to 10 s, motors' T 0.01 to 0.2 s; 50 or 60 Hz. Now and then
-/// a machine lacks a time constant, or a motor its slip.
+/// feeders, up to 20 machines, motors. R/X from 0.01 to 5; T″ 0.01 to 0.05 s, T′ 0.3 to 10 s, motors' T 0.01 to 0.2 s; 50 or 60 Hz. Now
+/// and then a machine lacks a time constant, or a motor its slip.
 /// </summary>
 internal sealed class RandomDecayPlants
 {

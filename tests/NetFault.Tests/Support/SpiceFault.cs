@@ -4,9 +4,10 @@ using System.Text;
 namespace NetFault.Tests.Support;
 
 /// <summary>
-/// The fault current of a network of resistances and reactances by the circuit simulator ngspice. By superposition it is the current of a source
-/// V·sin(ωt + α) that is applied to the network without its own sources at the faulted bus at t = 0. The network stands there twice, for
-/// α = 0 and 90°; the two make i(t)·e^(jωt) = i90 + j·i0. The AC component comes from the simulator's AC analysis, the DC one is the rest.
+/// The fault current of a network of resistances and reactances by the circuit simulator ngspice. By superposition it is the current of a
+/// source V·sin(ωt + α) that is applied to the network without its own sources at the faulted bus at t = 0. The network stands there
+/// twice, for α = 0 and 90°; the two make i(t)·e^(jωt) = i90 + j·i0. The AC component comes from the simulator's AC analysis, the DC one is
+/// the rest. Which branches there are, it shares with <see cref="DecayOracle"/>.
 /// </summary>
 internal sealed class SpiceFault
 {
@@ -58,7 +59,8 @@ internal sealed class SpiceFault
         var sum = Complex.Zero;
         foreach (var one in nearest)
         {
-            var weight = nearest.Where(other => other != one).Aggregate(1.0, (product, other) => product * (seconds - other[0]) / (one[0] - other[0]));
+            var weight = nearest.Where(other => other != one)
+                .Aggregate(1.0, (product, other) => product * (seconds - other[0]) / (one[0] - other[0]));
             sum += weight * new Complex(one[3], one[1]);
         }
         return _baseKa * sum * Complex.FromPolarCoordinates(1, -Omega * seconds);
@@ -69,7 +71,8 @@ internal sealed class SpiceFault
         var text = new StringBuilder("fault current, per unit\n");
         foreach (var (copy, degrees) in new[] { ("a", 0), ("b", 90) })
         {
-            text.AppendLine(FormattableString.Invariant($"Vf{copy} {copy}{circuit.FaultedNode} 0 DC 0 AC 1 SIN(0 1 {frequencyHz:R} 0 0 {degrees})"));
+            text.AppendLine(
+                FormattableString.Invariant($"Vf{copy} {copy}{circuit.FaultedNode} 0 DC 0 AC 1 SIN(0 1 {frequencyHz:R} 0 0 {degrees})"));
             for (var i = 0; i < circuit.Branches.Count; i++)
                 Append(text, copy, i, circuit.Branches[i], circuit.Omega);
         }
@@ -92,7 +95,9 @@ internal sealed class SpiceFault
             """)).ToString();
     }
 
-    /// <summary>Resistance and inductance in series between the nodes; an end with a ratio other than 1 sits behind an ideal transformer.</summary>
+    /// <summary>
+    /// Resistance and inductance in series between the nodes; an end with a ratio other than 1 sits behind an ideal transformer.
+    /// </summary>
     private static void Append(StringBuilder text, string copy, int number, DecayBranch branch, double omega)
     {
         var name = $"{copy}x{number}";

@@ -26,7 +26,8 @@ internal static class TwoSources
         new NetworkFeeder { Id = "Weak", Bus = "WEAK", ShortCircuitMva = new MaxMin(600), XOverR = 2 },
         new SynchronousMachine
         {
-            Id = "G1", Bus = "GT", RatedMva = 30, RatedPowerFactor = 0.85, ReactancePu = new MachineReactances(0.13), ArmatureResistancePu = 0.0013,
+            Id = "G1", Bus = "GT", RatedMva = 30, RatedPowerFactor = 0.85, ReactancePu = new MachineReactances(0.13),
+            ArmatureResistancePu = 0.0013,
         },
         new Transformer
         {
