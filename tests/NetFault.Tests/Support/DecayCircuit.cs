@@ -117,7 +117,8 @@ internal sealed class DecayCircuit
             ? Complex.Zero
             : Part(u.Value, r.Value) * Math.Pow(reference.Kv!.Value, 2) / Math.Min(a.Value, b.Value) / BaseOhm(reference.Bus!);
 
-        double RatioTo((string? Bus, double? Mva, double? Kv) other) => Ratio(reference.Kv!.Value, reference.Bus!, other.Kv!.Value, other.Bus!);
+        double RatioTo((string? Bus, double? Mva, double? Kv) other) =>
+            Ratio(reference.Kv!.Value, reference.Bus!, other.Kv!.Value, other.Bus!);
     }
 
     private void Add(NetworkElement element, string from, string to, Complex z, double ratio) => _all.Add(
