@@ -117,9 +117,7 @@ internal static class FileProblems
     public static Problem NotAChoice(string text, string choices, string? nearest) =>
         new("NF121", Error, $"{Quoted(text)} is not one of {choices}", nearest);
 
-    public static Problem ReservedSection(string section) =>
-        new("NF122", Error, $"the section {section} is reserved for breaker ratings and is not read by this version",
-            $"leave {section} out until a version that reads it");
+    // NF122 said that circuit_breakers was a reserved section; the id is not used again.
 
     public static Problem OtherFormat(int format, int known) =>
         new("NF123", Error, FormattableString.Invariant($"the file is of format {format}, and this version reads format {known}"),
