@@ -22,7 +22,7 @@ internal static class CircuitBreakerKeys
         void Only(string key, double? value, params CircuitBreakerStandard[] standards)
         {
             if (value.HasValue && !standards.Contains(breaker.Standard))
-                check.Say(key, Problems.NotOfStandard(Name(breaker.Standard), "it is one by " + string.Join(" and ", standards.Select(Name))));
+                check.Say(key, Problems.NotOfStandard(Name(breaker.Standard), "it is one by " + string.Join(", ", standards.Select(Name))));
         }
 
         Only("service_short_circuit_breaking_capacity_ka", breaker.ServiceShortCircuitBreakingCapacityKa, Iec60947_2);
@@ -46,7 +46,7 @@ internal static class CircuitBreakerKeys
         _ => "IEEE C37.13",
     };
 
-    /// <summary>The limit of 1 kV is that of IEC 60947-2 and IEC 62271-1; IEEE C37.13 and C37.04 draw it there too.</summary>
+    /// <summary>The limit is the scope of IEC 60947-2 and IEC 62271-1: AC systems up to and above 1 kV; IEEE's limit is the same (from memory).</summary>
     private static void CheckVoltage(CircuitBreaker breaker, ElementCheck check)
     {
         if (breaker.Bus is null || check.Draft.FindBus(breaker.Bus) is not { NominalKv: > 0 } bus)

@@ -16,7 +16,7 @@ internal static class FedElements
 
     /// <summary>The ids of the elements that have a terminal at a bus, in the order of the network. Looks at every element.</summary>
     public static List<string> IdsAt(NetworkDraft draft, string bus) =>
-        draft.Elements.Where(one => one.Terminals.Contains(bus)).Select(one => one.Id).ToList();
+        draft.Elements.Where(one => one.Terminals.Contains(bus)).Select(one => one.Id).Distinct().ToList();
 
     /// <summary>Reports a device that names no element, one at another bus, or two at once.</summary>
     public static void Check(TerminalDevice device, ElementCheck check)
@@ -61,19 +61,19 @@ internal static class FedElements
     private static Problem Elsewhere(TerminalDevice device, NetworkElement named, ElementCheck check)
     {
         var ends = string.Join(" and ", named.Terminals.Where(bus => bus is not null).Select(bus => $"\"{Problems.Shown(bus!)}\""));
-        return Problems.NotAtBus(named.Section, named.Id, ends, device.Bus, NearestHere(device, check) ?? Listed(device.Bus, check));
+        return Problems.NotAtBus(named.Section, named.Id, ends, device.Bus, Choices(device, check));
     }
 
-    /// <summary>What a device at a bus can feed; the first few.</summary>
-    private static string Listed(string bus, ElementCheck check)
+    /// <summary>What a device at its bus can feed: all of it, or the nearest ids, or the first few.</summary>
+    private static string Choices(TerminalDevice device, ElementCheck check)
     {
         const int most = 5;
         if (!check.MayCompare(check.Draft.Elements.Count))
             return "name an element that has a terminal at the bus";
-        var ids = IdsAt(check.Draft, bus);
-        return ids.Count == 0
-            ? "nothing is connected to this bus"
-            : "connected there: " + string.Join(", ", ids.Take(most).Select(id => $"\"{Problems.Shown(id)}\""))
-                + (ids.Count > most ? FormattableString.Invariant($" and {ids.Count - most} more") : string.Empty);
+        var ids = IdsAt(check.Draft, device.Bus);
+        if (ids.Count == 0)
+            return "nothing is connected to this bus";
+        var first = "connected there: " + string.Join(", ", ids.Take(most).Select(id => $"\"{Problems.Shown(id)}\""));
+        return ids.Count <= most ? first : check.Nearest(device.Feeds, ids) ?? FormattableString.Invariant($"{first} and {ids.Count - most} more");
     }
 }
