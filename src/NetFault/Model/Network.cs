@@ -170,6 +170,7 @@ public sealed class Network
     {
         Guard.NotNull(device);
         return FedElements.Named(_draft, device.Feeds, device.FeedsSection).FirstOrDefault(one => one?.Terminals.Contains(device.Bus) == true)
-            ?? throw new UnknownIdException(device.FeedsSection ?? "the elements at bus " + device.Bus, device.Feeds, FedElements.IdsAt(_draft, device.Bus));
+            ?? throw new UnknownIdException(device.FeedsSection ?? "the elements at bus " + device.Bus, device.Feeds,
+                FedElements.IdsByBus(_draft).TryGetValue(device.Bus, out var ids) ? ids : []);
     }
 }

@@ -132,6 +132,27 @@ public class RatingTests
         Problems(new CircuitBreaker { Id = "X", Bus = "L", Feeds = "C1", Standard = CircuitBreakerStandard.Iec60947_2, RatedKv = 0.69 }).Should().BeEmpty();
     }
 
+    [Fact]
+    public void What_a_device_feeds_may_stand_behind_text_that_could_not_be_read()
+    {
+        const string text = "netfault: 1\nfrequency_hz: 50\nbuses:\n  A: {nominal_kv: 11}\n  B: {nominal_kv: 11}\n"
+            + "network_feeders:\n  T1: {bus: B, short_circuit_ka: 5, x_over_r: 10}\n"
+            + "switches:\n  Q1: {bus: A, feeds: C1}\n  Q2: {bus: A, feeds: T1}\nlines:\n  C1: {from: A: B}\n";
+        NetworkFile.CheckText(text).Diagnostics.Should().ContainSingle().Which.Id.Should().Be("NF005");
+    }
+
+    [Fact]
+    public void A_thousand_devices_with_dangling_references_are_all_found()
+    {
+        var builder = new NetworkBuilder { FrequencyHz = 50 }.Add(Plant);
+        for (var i = 0; i < 1_000; i++)
+            builder.Add(new Bus { Id = $"Busbar-{i}", NominalKv = 11 }, new Line { Id = $"Line-{i}", From = "A", To = $"Busbar-{i}", Ohm = new(1, 1) });
+        for (var i = 0; i < 500; i++)
+            builder.Add(new Switch { Id = $"Q{i}", Bus = "A", Feeds = $"Line-{i}x" }, new Switch { Id = $"R{i}", Bus = "B", Feeds = $"Line-{i}" });
+        var thrown = ((Action)(() => builder.Build())).Should().Throw<InvalidNetworkException>().Which;
+        thrown.Diagnostics.Where(one => one.Id is "NF310" or "NF311").Should().HaveCount(1_000);
+    }
+
     private static IEnumerable<double> Currents(Network network) =>
         new FaultStudy(network, new MachineDecrement()).EveryBus().SelectMany(one => new[] { one.InitialSymmetricalKa, one.PeakKa });
 

@@ -12,6 +12,7 @@ internal sealed class ElementCheck
     private long _comparisons = 200_000_000;
     private NetworkElement _element;
     private IReadOnlyCollection<string>? _reported;
+    private Dictionary<string, List<string>>? _idsByBus;
 
     public ElementCheck(NetworkDraft draft, List<Diagnostic> found, NetworkElement first)
     {
@@ -248,6 +249,10 @@ internal sealed class ElementCheck
     {
         return MayCompare((long)known.Count * id.Length * id.Length) ? NearestNames.Suggestion(id, known) : null;
     }
+
+    /// <summary>The ids of the elements that have a terminal at a bus; gathered when they are first asked for.</summary>
+    public IReadOnlyList<string> IdsAt(string? bus) =>
+        bus is not null && (_idsByBus ??= FedElements.IdsByBus(Draft)).TryGetValue(bus, out var ids) ? ids : [];
 
     /// <summary>Whether as many steps may still be spent on suggestions.</summary>
     public bool MayCompare(long steps)

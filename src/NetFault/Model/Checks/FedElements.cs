@@ -14,9 +14,24 @@ internal static class FedElements
     public static IEnumerable<NetworkElement?> Named(NetworkDraft draft, string id, string? section) =>
         Sections.Where(one => (section is null || one == section) && draft.Declares(one, id)).Select(one => draft.Find(one, id));
 
-    /// <summary>The ids of the elements that have a terminal at a bus, in the order of the network. Looks at every element.</summary>
-    public static List<string> IdsAt(NetworkDraft draft, string bus) =>
-        draft.Elements.Where(one => one.Terminals.Contains(bus)).Select(one => one.Id).Distinct().ToList();
+    /// <summary>The ids of the elements that have a terminal at each bus, in the order of the network.</summary>
+    public static Dictionary<string, List<string>> IdsByBus(NetworkDraft draft)
+    {
+        var byBus = new Dictionary<string, List<string>>(StringComparer.Ordinal);
+        var seen = new HashSet<(string Bus, string Id)>();
+        foreach (var element in draft.Elements)
+        {
+            foreach (var bus in element.Terminals)
+            {
+                if (bus is null || !seen.Add((bus, element.Id)))
+                    continue;
+                if (!byBus.TryGetValue(bus, out var ids))
+                    byBus.Add(bus, ids = []);
+                ids.Add(element.Id);
+            }
+        }
+        return byBus;
+    }
 
     /// <summary>Reports a device that names no element, one at another bus, or two at once.</summary>
     public static void Check(TerminalDevice device, ElementCheck check)
@@ -51,12 +66,13 @@ internal static class FedElements
     /// <summary>The nearest ids: of elements at the device's bus, else of all.</summary>
     private static string? Nearest(TerminalDevice device, ElementCheck check)
     {
-        var sections = Sections.Where(one => device.FeedsSection is null || one == device.FeedsSection);
-        return NearestHere(device, check) ?? check.Nearest(device.Feeds, sections.SelectMany(check.Draft.IdsOf).Distinct().ToList());
+        if (check.Nearest(device.Feeds, check.IdsAt(device.Bus)) is { } here)
+            return here;
+        var sections = Sections.Where(one => device.FeedsSection is null || one == device.FeedsSection).ToList();
+        return check.MayCompare(sections.Sum(one => check.Draft.IdsOf(one).Count))
+            ? check.Nearest(device.Feeds, sections.SelectMany(check.Draft.IdsOf).Distinct().ToList())
+            : null;
     }
-
-    private static string? NearestHere(TerminalDevice device, ElementCheck check) =>
-        check.Draft.HasBus(device.Bus) && check.MayCompare(check.Draft.Elements.Count) ? check.Nearest(device.Feeds, IdsAt(check.Draft, device.Bus)) : null;
 
     private static Problem Elsewhere(TerminalDevice device, NetworkElement named, ElementCheck check)
     {
@@ -68,9 +84,7 @@ internal static class FedElements
     private static string Choices(TerminalDevice device, ElementCheck check)
     {
         const int most = 5;
-        if (!check.MayCompare(check.Draft.Elements.Count))
-            return "name an element that has a terminal at the bus";
-        var ids = IdsAt(check.Draft, device.Bus);
+        var ids = check.IdsAt(device.Bus);
         if (ids.Count == 0)
             return "nothing is connected to this bus";
         var first = "connected there: " + string.Join(", ", ids.Take(most).Select(id => $"\"{Problems.Shown(id)}\""));
