@@ -46,7 +46,7 @@ internal static class CircuitBreakerKeys
         _ => "IEEE C37.13",
     };
 
-    /// <summary>The limit is the scope of IEC 60947-2 and IEC 62271-1: AC systems up to and above 1 kV; IEEE's limit is the same (from memory).</summary>
+    /// <summary>The limit is that of the scopes of IEC 60947-2 and IEC 62271-1, 1 kV AC; IEEE's is the same (from memory).</summary>
     private static void CheckVoltage(CircuitBreaker breaker, ElementCheck check)
     {
         if (breaker.Bus is null || check.Draft.FindBus(breaker.Bus) is not { NominalKv: > 0 } bus)

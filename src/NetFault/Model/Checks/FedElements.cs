@@ -6,7 +6,8 @@ internal static class FedElements
     /// <summary>The sections of those elements: all that have terminals.</summary>
     public static readonly string[] Sections =
     [
-        "network_feeders", "synchronous_machines", "asynchronous_motors", "converter_fed_drives", "full_converter_sources", "doubly_fed_generators",
+        "network_feeders", "synchronous_machines", "asynchronous_motors", "converter_fed_drives", "full_converter_sources",
+        "doubly_fed_generators",
         "transformers", "three_winding_transformers", "lines", "series_reactors", "series_capacitors", "bus_couplers",
     ];
 
@@ -61,7 +62,8 @@ internal static class FedElements
             check.Say("feeds", Problems.SeveralFed(device.Feeds, device.Bus, string.Join(" and in ", here.Select(one => one!.Section))));
     }
 
-    private static bool IsWhole(NetworkElement element, NetworkDraft draft) => element.Terminals.All(bus => bus is null || draft.HasBus(bus));
+    private static bool IsWhole(NetworkElement element, NetworkDraft draft) =>
+        element.Terminals.All(bus => bus is null || draft.HasBus(bus));
 
     /// <summary>The nearest ids: of elements at the device's bus, else of all.</summary>
     private static string? Nearest(TerminalDevice device, ElementCheck check)
@@ -88,6 +90,8 @@ internal static class FedElements
         if (ids.Count == 0)
             return "nothing is connected to this bus";
         var first = "connected there: " + string.Join(", ", ids.Take(most).Select(id => $"\"{Problems.Shown(id)}\""));
-        return ids.Count <= most ? first : check.Nearest(device.Feeds, ids) ?? FormattableString.Invariant($"{first} and {ids.Count - most} more");
+        return ids.Count <= most
+            ? first
+            : check.Nearest(device.Feeds, ids) ?? FormattableString.Invariant($"{first} and {ids.Count - most} more");
     }
 }
