@@ -27,12 +27,18 @@ public sealed class Network
         SeriesReactors = draft.Of<SeriesReactor>("series_reactors");
         SeriesCapacitors = draft.Of<SeriesCapacitor>("series_capacitors");
         BusCouplers = draft.Of<BusCoupler>("bus_couplers");
+        CircuitBreakers = draft.Of<CircuitBreaker>("circuit_breakers");
+        Switches = draft.Of<Switch>("switches");
+        Busbars = draft.Of<Busbar>("busbars");
+        Fuses = draft.Of<Fuse>("fuses");
         Elements =
         [
             .. Buses, .. NetworkFeeders, .. SynchronousMachines, .. AsynchronousMotors,
             .. ConverterFedDrives, .. FullConverterSources, .. DoublyFedGenerators,
             .. Transformers, .. ThreeWindingTransformers, .. Lines, .. SeriesReactors, .. SeriesCapacitors, .. BusCouplers,
+            .. CircuitBreakers, .. Switches, .. Busbars, .. Fuses,
         ];
+        ConductingCount = Elements.Count - CircuitBreakers.Count - Switches.Count - Busbars.Count - Fuses.Count;
         Topology = new NetworkTopology(this);
     }
 
@@ -87,6 +93,21 @@ public sealed class Network
     /// <summary>The bus couplers.</summary>
     public IReadOnlyList<BusCoupler> BusCouplers { get; }
 
+    /// <summary>The circuit-breakers with their ratings.</summary>
+    public IReadOnlyList<CircuitBreaker> CircuitBreakers { get; }
+
+    /// <summary>The switches and disconnectors with their ratings.</summary>
+    public IReadOnlyList<Switch> Switches { get; }
+
+    /// <summary>The ratings of busbars.</summary>
+    public IReadOnlyList<Busbar> Busbars { get; }
+
+    /// <summary>The fuses with their ratings.</summary>
+    public IReadOnlyList<Fuse> Fuses { get; }
+
+    /// <summary>How many of the <see cref="Elements"/>, from the first, are in the graph; devices with ratings stand behind them.</summary>
+    internal int ConductingCount { get; }
+
     /// <summary>What is odd but possible: buses without a source, unusual values. <see cref="NetworkBuilder.Build"/> fills it.</summary>
     public IReadOnlyList<Diagnostic> Warnings { get; internal set; } = [];
 
@@ -140,5 +161,16 @@ public sealed class Network
         if (Elements[Topology.FirstOfKind<T>()] is not T { Section: var section })
             throw new UnknownIdException(typeof(T).Name, id, []);
         return _draft.Find(section, id) as T ?? throw new UnknownIdException(section, id, _draft.IdsOf(section));
+    }
+
+    /// <summary>The element that a device of this network connects with its bus: the branch, source or coupler that it feeds.</summary>
+    /// <param name="device">A circuit-breaker, switch or fuse.</param>
+    /// <exception cref="UnknownIdException">The device's <see cref="TerminalDevice.Feeds"/> names nothing at its bus in this network.</exception>
+    public NetworkElement ElementBehind(TerminalDevice device)
+    {
+        Guard.NotNull(device);
+        return FedElements.Named(_draft, device.Feeds, device.FeedsSection).FirstOrDefault(one => one?.Terminals.Contains(device.Bus) == true)
+            ?? throw new UnknownIdException(device.FeedsSection ?? "the elements at bus " + device.Bus, device.Feeds,
+                FedElements.IdsByBus(_draft).TryGetValue(device.Bus, out var ids) ? ids : []);
     }
 }

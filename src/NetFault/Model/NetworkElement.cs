@@ -62,4 +62,7 @@ internal enum ElementRole
 
     /// <summary>Leaves its terminals apart.</summary>
     Gap,
+
+    /// <summary>Says what equipment can bear; takes no part in the graph.</summary>
+    Device,
 }

@@ -2,7 +2,7 @@ namespace NetFault;
 
 /// <summary>
 /// The network as a graph, with every id resolved once: which buses a closed coupler makes one node, and which nodes hang together with
-/// something that holds their voltage. An element counts where it and all its buses are in service.
+/// something that holds their voltage. An element counts where it and all its buses are in service. Devices with ratings are not in it.
 /// </summary>
 internal sealed class NetworkTopology
 {
@@ -22,7 +22,7 @@ internal sealed class NetworkTopology
     {
         for (var bus = 0; bus < network.Buses.Count; bus++)
             _busIndex.Add(network.Buses[bus].Id, bus);
-        (_terminalStart, _terminalBus) = ResolveTerminals(network.Elements);
+        (_terminalStart, _terminalBus) = ResolveTerminals(network.Elements, network.ConductingCount);
         _active = FindActive(network);
         NodeOfBus = JoinBuses(network, out var nodeCount);
         NodeCount = nodeCount;
@@ -58,7 +58,7 @@ internal sealed class NetworkTopology
     /// <summary>The position of the first element of a kind among all elements.</summary>
     public int FirstOfKind<T>() where T : NetworkElement => _firstOfKind.TryGetValue(typeof(T), out var first) ? first : 0;
 
-    /// <summary>Whether an element, by its position among all, and all its buses are in service.</summary>
+    /// <summary>Whether an element of the graph, by its position among all, and all its buses are in service.</summary>
     public bool IsActive(int element) => _active[element];
 
     /// <summary>The bus of an element's terminal; −1 for an open winding.</summary>
@@ -80,14 +80,16 @@ internal sealed class NetworkTopology
         return _terminalBus[at];
     }
 
-    private (int[] Start, int[] Bus) ResolveTerminals(IReadOnlyList<NetworkElement> elements)
+    private (int[] Start, int[] Bus) ResolveTerminals(IReadOnlyList<NetworkElement> elements, int conducting)
     {
-        var start = new int[elements.Count + 1];
-        var bus = new List<int>(2 * elements.Count);
+        var start = new int[conducting + 1];
+        var bus = new List<int>(2 * conducting);
         for (var i = 0; i < elements.Count; i++)
         {
             if (!_firstOfKind.ContainsKey(elements[i].GetType()))
                 _firstOfKind.Add(elements[i].GetType(), i);
+            if (i >= conducting)
+                continue;
             var terminals = elements[i].Terminals;
             for (var at = 0; at < terminals.Count; at++)
                 bus.Add(terminals[at] is { } id ? _busIndex[id] : -1);
@@ -98,7 +100,7 @@ internal sealed class NetworkTopology
 
     private bool[] FindActive(Network network)
     {
-        var active = new bool[network.Elements.Count];
+        var active = new bool[network.ConductingCount];
         for (var i = 0; i < active.Length; i++)
         {
             active[i] = network.Elements[i].InService;

@@ -115,11 +115,9 @@ internal static class FileProblems
         new("NF120", Error, $"{Quoted(text)} is neither true nor false", remedy ?? "write true or false");
 
     public static Problem NotAChoice(string text, string choices, string? nearest) =>
-        new("NF121", Error, $"{Quoted(text)} is not one of {choices}", nearest);
+        new("NF121", Error, $"{Quoted(text)} is not one of {choices}", ChoiceHint(text) ?? nearest);
 
-    public static Problem ReservedSection(string section) =>
-        new("NF122", Error, $"the section {section} is reserved for breaker ratings and is not read by this version",
-            $"leave {section} out until a version that reads it");
+    // NF122 said that circuit_breakers was a reserved section; the id is not used again.
 
     public static Problem OtherFormat(int format, int known) =>
         new("NF123", Error, FormattableString.Invariant($"the file is of format {format}, and this version reads format {known}"),
@@ -140,6 +138,10 @@ internal static class FileProblems
     internal static string Quoted(string text) => $"\"{Shortened(text)}\"";
 
     private static string Shortened(string text) => Problems.Shown(text);
+
+    /// <summary>Two standards whose numbers differ by a zero: the nearest word would be the wrong one.</summary>
+    private static string? ChoiceHint(string text) =>
+        text == "ieee_c37_013" ? "IEEE C37.013 is now iec_ieee_62271_37_013; ieee_c37_13 is for low voltage" : null;
 
     /// <summary>What a key that is none suggests: a blank missing after the colon, the second half of a decimal comma.</summary>
     private static string? KeyHint(string key)

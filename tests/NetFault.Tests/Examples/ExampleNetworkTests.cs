@@ -32,7 +32,7 @@ public class ExampleNetworkTests
         var network = Industrial();
         network.Buses.Should().HaveCount(25);
         network.Buses.Select(bus => bus.NominalKv).Distinct().Should().BeEquivalentTo([110, 20, 6, 0.4]);
-        network.Elements.Select(element => element.Section).Distinct().Should().HaveCount(9);
+        network.Elements.Select(element => element.Section).Distinct().Should().HaveCount(13);
         network.SynchronousMachines.Select(machine => machine.Service).Should().Contain(SynchronousService.Motor);
     }
 

@@ -34,6 +34,13 @@ public class NetworkBuilderTests
     };
 
     private static readonly SeriesReactor Reactor = new() { Id = "R", From = "A", To = "B", RatedKa = 1, ReactancePercent = 6 };
+    private static readonly CircuitBreaker Breaker = new() { Id = "CB", Bus = "A", Feeds = "C", Standard = CircuitBreakerStandard.Iec62271_100 };
+    private static readonly CircuitBreaker LvBreaker = new() { Id = "LB", Bus = "L", Feeds = "to L", Standard = CircuitBreakerStandard.Iec60947_2 };
+    private static readonly CircuitBreaker IeeeBreaker = Breaker with { Standard = CircuitBreakerStandard.IeeeC37_04 };
+    private static readonly CircuitBreaker GeneratorBreaker = Breaker with { Standard = CircuitBreakerStandard.IecIeee62271_37_013 };
+    private static readonly Switch Disconnector = new() { Id = "Q", Bus = "A", Feeds = "C" };
+    private static readonly Busbar Bar = new() { Id = "BB", Bus = "A" };
+    private static readonly Fuse Link = new() { Id = "F", Bus = "A", Feeds = "C" };
     private static readonly BusCoupler Coupler = new() { Id = "K", From = "A", To = "B", Closed = true };
 
     /// <summary>One changed element; the problem it makes, and the key at which it stands.</summary>
@@ -117,6 +124,58 @@ public class NetworkBuilderTests
         ("NF403", "locked_rotor_current_ratio", Motor with { LockedRotorCurrentRatio = 15 }),
         ("NF403", "short_circuit_voltage_percent", Unit with { ShortCircuitVoltagePercent = 101 }),
         ("NF404", "rated_kv.hv", Unit with { RatedHvKv = 10 }),
+        ("NF201", "rated_kv", Bar with { RatedKv = double.NaN }),
+        ("NF202", "rated_kv", Breaker with { RatedKv = 0 }),
+        ("NF202", "short_circuit_breaking_current_ka", Breaker with { ShortCircuitBreakingCurrentKa = 0 }),
+        ("NF202", "short_circuit_making_current_ka", Breaker with { ShortCircuitMakingCurrentKa = 0 }),
+        ("NF202", "ultimate_short_circuit_breaking_capacity_ka", LvBreaker with { UltimateShortCircuitBreakingCapacityKa = 0 }),
+        ("NF202", "service_short_circuit_breaking_capacity_ka", LvBreaker with { ServiceShortCircuitBreakingCapacityKa = 0 }),
+        ("NF202", "short_circuit_making_capacity_ka", LvBreaker with { ShortCircuitMakingCapacityKa = 0 }),
+        ("NF202", "closing_and_latching_current_ka", IeeeBreaker with { ClosingAndLatchingCurrentKa = 0 }),
+        ("NF202", "generator_source_breaking_current_ka", GeneratorBreaker with { GeneratorSourceBreakingCurrentKa = 0 }),
+        ("NF202", "short_circuit_making_current_ka", Disconnector with { ShortCircuitMakingCurrentKa = -1 }),
+        ("NF202", "peak_withstand_current_ka", Bar with { PeakWithstandCurrentKa = 0 }),
+        ("NF202", "short_time_withstand_current_ka", Bar with { ShortTimeWithstandCurrentKa = 0 }),
+        ("NF202", "breaking_capacity_ka", Link with { BreakingCapacityKa = 0 }),
+        ("NF202", "test_x_over_r", Link with { TestXOverR = 0 }),
+        ("NF204", "dc_component_percent", Breaker with { DcComponentPercent = 101 }),
+        ("NF205", "test_power_factor", LvBreaker with { TestPowerFactor = 25 }),
+        ("NF205", "test_power_factor", Link with { TestPowerFactor = 0 }),
+        ("NF206", "standard", Breaker with { Standard = (CircuitBreakerStandard)9 }),
+        ("NF206", "feeds_section", Breaker with { FeedsSection = "buses" }),
+        ("NF208", "short_circuit_breaking_current_ka", Breaker with { ShortCircuitBreakingCurrentKa = 63, ShortCircuitMakingCurrentKa = 25 }),
+        ("NF208", "short_circuit_breaking_current_ka", IeeeBreaker with { ShortCircuitBreakingCurrentKa = 65, ClosingAndLatchingCurrentKa = 25 }),
+        ("NF208", "ultimate_short_circuit_breaking_capacity_ka",
+            LvBreaker with { UltimateShortCircuitBreakingCapacityKa = 105, ShortCircuitMakingCapacityKa = 50 }),
+        ("NF208", "service_short_circuit_breaking_capacity_ka",
+            LvBreaker with { UltimateShortCircuitBreakingCapacityKa = 36, ServiceShortCircuitBreakingCapacityKa = 50 }),
+        ("NF208", "short_time_withstand_current_ka", Disconnector with { ShortTimeWithstandCurrentKa = 63, PeakWithstandCurrentKa = 25 }),
+        ("NF209", "dc_time_constant_s", Breaker with { DcComponentPercent = 36, DcTimeConstantSeconds = 0.045 }),
+        ("NF209", "minimum_opening_time_s", IeeeBreaker with { ContactPartingTimeCycles = 3, MinimumOpeningTimeSeconds = 0.04 }),
+        ("NF209", "relay_time_s", IeeeBreaker with { ContactPartingTimeCycles = 3, RelayTimeSeconds = 0.01 }),
+        ("NF209", "test_x_over_r", Link with { TestPowerFactor = 0.1, TestXOverR = 10 }),
+        ("NF220", "dc_time_constant_s", Breaker with { DcTimeConstantSeconds = 45 }),
+        ("NF220", "generator_source_dc_component_percent", GeneratorBreaker with { GeneratorSourceDcComponentPercent = 201 }),
+        ("NF220", "minimum_opening_time_s", Breaker with { MinimumOpeningTimeSeconds = 40 }),
+        ("NF220", "relay_time_s", Breaker with { RelayTimeSeconds = -0.01 }),
+        ("NF220", "rated_interrupting_time_cycles", IeeeBreaker with { RatedInterruptingTimeCycles = 83 }),
+        ("NF220", "contact_parting_time_cycles", IeeeBreaker with { ContactPartingTimeCycles = 0 }),
+        ("NF220", "short_time_duration_s", Disconnector with { ShortTimeDurationSeconds = 1000 }),
+        ("NF221", "feeds", Disconnector with { Feeds = null! }),
+        ("NF221", "bus", Bar with { Bus = null! }),
+        ("NF222", "test_power_factor", Breaker with { TestPowerFactor = 0.15 }),
+        ("NF301", "bus", Bar with { Bus = "a" }),
+        ("NF310", "feeds", Breaker with { Feeds = "c" }),
+        ("NF310", "feeds", Breaker with { FeedsSection = "transformers" }),
+        ("NF310", "feeds", Link with { Feeds = "Q-1" }),
+        ("NF311", "feeds", Breaker with { Bus = "H" }),
+        ("NF311", "feeds", Disconnector with { Feeds = "to Far" }),
+        ("NF312", "feeds", Link with { Bus = "B", Feeds = "twice" }),
+        ("NF407", "rated_kv", Breaker with { RatedKv = 10.99 }),
+        ("NF407", "rated_kv", Bar with { RatedKv = 7.2 }),
+        ("NF407", "rated_kv", Link with { RatedKv = 7.2 }),
+        ("NF408", "standard", Breaker with { Standard = CircuitBreakerStandard.IeeeC37_13 }),
+        ("NF408", "standard", LvBreaker with { Standard = CircuitBreakerStandard.IecIeee62271_37_013 }),
     ];
 
     public static IEnumerable<object?[]> Cases => Rules.Select((rule, i) => new object?[] { i, rule.Id, rule.Key });
@@ -173,7 +232,10 @@ public class NetworkBuilderTests
 
     private static NetworkBuilder Sound() =>
         new NetworkBuilder { FrequencyHz = 50 }.Add(
-            A, B, H, Feeder, Machine, Motor, Unit, Three, Cable, Reactor, Coupler,
+            A, B, H, Feeder, Machine, Motor, Unit, Three, Cable, Reactor, Coupler, Breaker, LvBreaker, Disconnector, Bar, Link,
+            new Bus { Id = "L", NominalKv = 0.4 },
+            new Transformer { Id = "to L", Hv = "A", Lv = "L", RatedMva = 1, RatedHvKv = 11, RatedLvKv = 0.4, ShortCircuitVoltagePercent = 6, XOverR = 6 },
+            Cable with { Id = "twice" }, Reactor with { Id = "twice" },
             new Bus { Id = "Far", NominalKv = 11 }, Cable with { Id = "to Far", From = "B", To = "Far" });
 
     private static IReadOnlyList<Diagnostic> Problems(Action<NetworkBuilder> change)

@@ -52,7 +52,11 @@ public class RoundTripTests
             new Bus { Id = id + "-2", NominalKv = one, InService = false },
             new NetworkFeeder { Id = id, Bus = id, ShortCircuitMva = new(one, one / 2), XOverR = other, Note = note },
             new Line { Id = id, From = id, To = id + "-2", Ohm = new(other, -one), Note = note },
-            new BusCoupler { Id = id, From = id, To = id + "-2", Closed = one > other }).Build();
+            new BusCoupler { Id = id, From = id, To = id + "-2", Closed = one > other },
+            new CircuitBreaker { Id = id, Bus = id + "-2", Feeds = id, FeedsSection = "lines", Standard = CircuitBreakerStandard.Iec62271_100, RatedKv = other, Note = note },
+            new Switch { Id = id, Bus = id + "-2", Feeds = id, FeedsSection = "bus_couplers", PeakWithstandCurrentKa = one, Note = note },
+            new Busbar { Id = id, Bus = id, PeakWithstandCurrentKa = one, ShortTimeWithstandCurrentKa = one / 2, Note = note },
+            new Fuse { Id = id, Bus = id, Feeds = id, FeedsSection = "network_feeders", BreakingCapacityKa = other, Note = note }).Build();
 
     private static bool IsWhole(string text)
     {

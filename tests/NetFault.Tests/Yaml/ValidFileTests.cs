@@ -100,6 +100,61 @@ public class ValidFileTests
     }
 
     [Fact]
+    public void Every_key_of_the_circuit_breakers_is_read()
+    {
+        var breakers = Read("every-key.yaml").CircuitBreakers;
+        breakers.Should().Equal(
+            new CircuitBreaker
+            {
+                Id = "CB1", Bus = "GRID", Feeds = "T1", FeedsSection = "transformers", Standard = CircuitBreakerStandard.Iec62271_100, RatedKv = 123,
+                ShortCircuitBreakingCurrentKa = 31.5, DcComponentPercent = 36, ShortCircuitMakingCurrentKa = 80, PeakWithstandCurrentKa = 81,
+                ShortTimeWithstandCurrentKa = 31, ShortTimeDurationSeconds = 3, MinimumOpeningTimeSeconds = 0.035, RelayTimeSeconds = 0.01, Note = "bay 1",
+            },
+            new CircuitBreaker
+            {
+                Id = "CB2", Bus = "MV-A", Feeds = "T1", Standard = CircuitBreakerStandard.IeeeC37_04, RatedKv = 15, ShortCircuitBreakingCurrentKa = 25,
+                DcTimeConstantSeconds = 0.045, ClosingAndLatchingCurrentKa = 65, RatedInterruptingTimeCycles = 5, ContactPartingTimeCycles = 3,
+            },
+            new CircuitBreaker
+            {
+                Id = "CB3", Bus = "MV-A", Feeds = "G1", Standard = CircuitBreakerStandard.IecIeee62271_37_013, RatedKv = 12, ShortCircuitBreakingCurrentKa = 50,
+                DcComponentPercent = 60, GeneratorSourceBreakingCurrentKa = 25, GeneratorSourceDcComponentPercent = 110,
+            },
+            new CircuitBreaker
+            {
+                Id = "CB4", Bus = "LV", Feeds = "T2", Standard = CircuitBreakerStandard.Iec60947_2, RatedKv = 0.69, UltimateShortCircuitBreakingCapacityKa = 50,
+                ServiceShortCircuitBreakingCapacityKa = 37.5, ShortCircuitMakingCapacityKa = 105, TestPowerFactor = 0.25,
+            },
+            new CircuitBreaker
+            {
+                Id = "CB5", Bus = "LV", Feeds = "M2", Standard = CircuitBreakerStandard.IeeeC37_13, RatedKv = 0.508, ShortCircuitBreakingCurrentKa = 42,
+                InService = false,
+            });
+    }
+
+    [Fact]
+    public void Every_key_of_switches_busbars_and_fuses_is_read()
+    {
+        var network = Read("every-key.yaml");
+        network.Switches.Should().Equal(new Switch
+        {
+            Id = "Q1", Bus = "MV-A", Feeds = "C1", FeedsSection = "lines", RatedKv = 12, ShortCircuitMakingCurrentKa = 50, PeakWithstandCurrentKa = 63,
+            ShortTimeWithstandCurrentKa = 25, ShortTimeDurationSeconds = 1, Note = "load break switch",
+        });
+        network.Busbars.Should().Equal(new Busbar
+        {
+            Id = "BB1", Bus = "MV-A", RatedKv = 12, PeakWithstandCurrentKa = 63, ShortTimeWithstandCurrentKa = 25, ShortTimeDurationSeconds = 1,
+            Note = "double bar",
+        });
+        network.Fuses.Should().Equal(
+            new Fuse
+            {
+                Id = "F1", Bus = "MV-B", Feeds = "T2", FeedsSection = "transformers", RatedKv = 12, BreakingCapacityKa = 63, TestPowerFactor = 0.1, Note = "160 A",
+            },
+            new Fuse { Id = "F2", Bus = "MV-B", Feeds = "C1", RatedKv = 15.5, BreakingCapacityKa = 50, TestXOverR = 25 });
+    }
+
+    [Fact]
     public void The_file_of_every_key_holds_every_key()
     {
         var text = File.ReadAllText(Path.Combine(TestFiles.Folder("valid"), "every-key.yaml"));

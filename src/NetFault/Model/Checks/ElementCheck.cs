@@ -6,20 +6,23 @@ namespace NetFault;
 /// </summary>
 internal sealed class ElementCheck
 {
-    private readonly NetworkDraft _draft;
     private readonly List<Diagnostic> _found;
 
     /// <summary>How many letters may still be compared for suggestions; about a second's work in all.</summary>
     private long _comparisons = 200_000_000;
     private NetworkElement _element;
     private IReadOnlyCollection<string>? _reported;
+    private Dictionary<string, List<string>>? _idsByBus;
 
     public ElementCheck(NetworkDraft draft, List<Diagnostic> found, NetworkElement first)
     {
-        _draft = draft;
+        Draft = draft;
         _found = found;
         _element = first;
     }
+
+    /// <summary>The network that is being checked.</summary>
+    public NetworkDraft Draft { get; }
 
     /// <summary>Runs the rules of one element.</summary>
     public void Run(NetworkElement element, IReadOnlyCollection<string>? reportedKeys)
@@ -161,8 +164,28 @@ internal sealed class ElementCheck
     public void RatedVoltage(string key, double? ratedKv, string? bus)
     {
         Positive(key, ratedKv);
-        if (ratedKv is { } rated && bus is not null && _draft.FindBus(bus) is { NominalKv: > 0 } at && OffByMoreThan(1.3, rated, at.NominalKv))
+        if (ratedKv is { } rated && bus is not null && Draft.FindBus(bus) is { NominalKv: > 0 } at && OffByMoreThan(1.3, rated, at.NominalKv))
             Say(key, Problems.RatedVoltageFarOff(rated, bus, at.NominalKv));
+    }
+
+    /// <summary>
+    /// The rated voltage of a device: anything above the nominal voltage is ordinary (12 kV in an 11 kV network, 690 V in one of 400 V),
+    /// anything below it is not.
+    /// </summary>
+    public void DeviceVoltage(string key, double? ratedKv, string? bus)
+    {
+        Positive(key, ratedKv);
+        if (ratedKv is > 0 and var rated && Draft.FindBus(bus) is { } at && rated < at.NominalKv)
+            Say(key, Problems.RatedVoltageBelow(rated, bus!, at.NominalKv));
+    }
+
+    /// <summary>What carries a short circuit: its peak, and its heat for a time.</summary>
+    public void Withstand(double? peakKa, double? shortTimeKa, double? durationSeconds)
+    {
+        Positive("peak_withstand_current_ka", peakKa);
+        Positive("short_time_withstand_current_ka", shortTimeKa);
+        NotAbove("short_time_withstand_current_ka", shortTimeKa, "peak_withstand_current_ka", peakKa);
+        Within("short_time_duration_s", durationSeconds, 0.01, 10.0);
     }
 
     public void HighVoltageFirst(string hvKey, double hvKv, string lvKey, double lvKv)
@@ -175,18 +198,18 @@ internal sealed class ElementCheck
     {
         if (bus is null)
         {
-            Say(key, Problems.NoReference());
+            Say(key, Problems.NoReference("bus"));
             return;
         }
-        if (!_draft.HasBus(bus) && _draft.BusIds.Count > 0)
-            Say(key, Problems.UnknownBus(bus, Nearest(bus, _draft.BusIds)));
+        if (!Draft.HasBus(bus) && Draft.BusIds.Count > 0)
+            Say(key, Problems.UnknownBus(bus, Nearest(bus, Draft.BusIds)));
     }
 
     public void TransformerReference(string key, string id, string bus)
     {
-        if (!_draft.Declares("transformers", id))
-            Say(key, Problems.UnknownTransformer(id, Nearest(id, _draft.IdsOf("transformers"))));
-        else if (_draft.HasBus(bus) && _draft.Find("transformers", id) is Transformer transformer && !IsAt(transformer, bus))
+        if (!Draft.Declares("transformers", id))
+            Say(key, Problems.UnknownTransformer(id, Nearest(id, Draft.IdsOf("transformers"))));
+        else if (Draft.HasBus(bus) && Draft.Find("transformers", id) is Transformer transformer && !IsAt(transformer, bus))
             Say(key, Problems.UnitTransformerElsewhere(id, bus));
     }
 
@@ -195,7 +218,7 @@ internal sealed class ElementCheck
     {
         if (transformer.Hv == bus || transformer.Lv == bus)
             return true;
-        foreach (var coupler in _draft.Elements.OfType<BusCoupler>())
+        foreach (var coupler in Draft.Elements.OfType<BusCoupler>())
         {
             if (coupler.From != bus && coupler.To != bus)
                 continue;
@@ -214,7 +237,7 @@ internal sealed class ElementCheck
 
     public void SameNominalVoltage(string from, string to, bool perUnit)
     {
-        if (_draft.FindBus(from) is not { NominalKv: > 0 } one || _draft.FindBus(to) is not { NominalKv: > 0 } other || one.NominalKv.Equals(other.NominalKv))
+        if (Draft.FindBus(from) is not { NominalKv: > 0 } one || Draft.FindBus(to) is not { NominalKv: > 0 } other || one.NominalKv.Equals(other.NominalKv))
             return;
         Say(null, perUnit
             ? Problems.UnitRatio(from, one.NominalKv, to, other.NominalKv)
@@ -222,16 +245,26 @@ internal sealed class ElementCheck
     }
 
     /// <summary>The nearest ids, as long as looking for them does not take too long: a file may have a thousand mistakes in a large network.</summary>
-    private string? Nearest(string id, IReadOnlyCollection<string> known)
+    public string? Nearest(string id, IReadOnlyCollection<string> known)
     {
-        _comparisons -= (long)known.Count * id.Length * id.Length;
-        return _comparisons < 0 ? null : NearestNames.Suggestion(id, known);
+        return MayCompare((long)known.Count * id.Length * id.Length) ? NearestNames.Suggestion(id, known) : null;
+    }
+
+    /// <summary>The ids of the elements that have a terminal at a bus; gathered when they are first asked for.</summary>
+    public IReadOnlyList<string> IdsAt(string? bus) =>
+        bus is not null && (_idsByBus ??= FedElements.IdsByBus(Draft)).TryGetValue(bus, out var ids) ? ids : [];
+
+    /// <summary>Whether as many steps may still be spent on suggestions.</summary>
+    public bool MayCompare(long steps)
+    {
+        _comparisons -= steps;
+        return _comparisons >= 0;
     }
 
     /// <summary>Buses that a closed coupler makes one node have one voltage factor c.</summary>
     public void SameTolerance(string from, string to)
     {
-        if (_draft.FindBus(from) is not { NominalKv: <= 1.0 } one || _draft.FindBus(to) is not { NominalKv: <= 1.0 } other)
+        if (Draft.FindBus(from) is not { NominalKv: <= 1.0 } one || Draft.FindBus(to) is not { NominalKv: <= 1.0 } other)
             return;
         double oneTolerance = one.LowVoltageTolerancePercent ?? 10.0, otherTolerance = other.LowVoltageTolerancePercent ?? 10.0;
         if (!oneTolerance.Equals(otherTolerance))
@@ -251,7 +284,7 @@ internal sealed class ElementCheck
     }
 
     /// <summary>Whether the reader has complained about this key or about the mapping it stands in.</summary>
-    private bool IsReported(string? key)
+    public bool IsReported(string? key)
     {
         if (_reported is null || key is null)
             return false;

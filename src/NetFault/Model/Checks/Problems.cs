@@ -71,8 +71,11 @@ internal static class Problems
     public static Problem BadId(int longest) =>
         new("NF219", Error, $"an id has at most {Text(longest)} characters, and none that breaks the line or cannot be seen");
 
-    public static Problem NoReference() =>
-        new("NF221", Error, "names no bus", "give the id of a bus");
+    public static Problem NoReference(string what) =>
+        new("NF221", Error, $"names no {what}", $"give the id of the {what}");
+
+    public static Problem NotOfStandard(string standard, string remedy) =>
+        new("NF222", Error, $"is no rating of a circuit-breaker by {standard}", remedy);
 
     public static Problem UnequalTolerances(string from, double fromPercent, string to, double toPercent) =>
         new("NF309", Error, $"closed, it makes one node of bus \"{Shown(from)}\" with a voltage tolerance of {Text(fromPercent)} percent and bus \"{Shown(to)}\" with {Text(toPercent)}",
@@ -105,6 +108,16 @@ internal static class Problems
         new("NF308", Error, "the network has no source in service, so no short-circuit current can flow",
             "add or put in service a network feeder or a synchronous machine");
 
+    public static Problem UnknownFed(string id, string? section, string? nearest) =>
+        new("NF310", Error, $"there is no {(section is null ? "branch, source or coupler" : "element")} \"{Shown(id)}\"{(section is null ? "" : " in " + section)}",
+            nearest ?? "name the branch, source or coupler that the device connects with its bus");
+
+    public static Problem NotAtBus(string section, string id, string ends, string bus, string remedy) =>
+        new("NF311", Error, $"\"{Shown(id)}\" of {section} is connected to {ends}, not to bus \"{Shown(bus)}\"", remedy);
+
+    public static Problem SeveralFed(string id, string bus, string sections) =>
+        new("NF312", Error, $"bus \"{Shown(bus)}\" has an element \"{Shown(id)}\" in {sections}", "say which one by feeds_section");
+
     public static Problem UnitRatio(string from, double fromKv, string to, double toKv) =>
         new("NF401", Warning, $"joins bus \"{from}\" of {Text(fromKv)} kV with bus \"{to}\" of {Text(toKv)} kV; its per-unit impedance is taken with the ratio 1");
 
@@ -122,6 +135,12 @@ internal static class Problems
 
     public static Problem UnusualFrequency(double hz) =>
         new("NF406", Warning, $"{Text(hz)} Hz is neither 50 nor 60");
+
+    public static Problem RatedVoltageBelow(double ratedKv, string bus, double nominalKv) =>
+        new("NF407", Warning, $"{Text(ratedKv)} kV is below the nominal {Text(nominalKv)} kV of bus \"{bus}\"");
+
+    public static Problem StandardOfOtherVoltage(string standard, bool lowVoltage, string bus, double nominalKv) =>
+        new("NF408", Warning, $"{standard} is for circuit-breakers {(lowVoltage ? "up to" : "above")} 1 kV, and bus \"{bus}\" has {Text(nominalKv)} kV");
 
     /// <summary>A text of the user's the way a message can show it: on one line, and not too long.</summary>
     internal static string Shown(string text)

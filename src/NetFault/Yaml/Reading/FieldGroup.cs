@@ -49,20 +49,9 @@ internal sealed class FieldGroup : IFields
 
     public bool? Flag(string key) => Find(key) is var index and >= 0 ? FlagAt(index, key) : null;
 
-    public int? Choice(string key, params string[] words)
-    {
-        if (Find(key) is var index && index < 0)
-            return null;
-        var text = Table.Text(index);
-        var choice = IsText(index) ? Array.IndexOf(words, text) : -1;
-        if (choice >= 0)
-            return choice;
-        var choices = string.Join(", ", words);
-        Report(index, key, IsText(index) && !IsNull(index)
-            ? FileProblems.NotAChoice(text, choices, NearestNames.Suggestion(text, words))
-            : WrongKind(index, "one of " + choices));
-        return null;
-    }
+    public int? RequiredChoice(string key, params string[] words) => FindRequired(key) is var index and >= 0 ? ChoiceAt(index, key, words) : null;
+
+    public int? Choice(string key, params string[] words) => Find(key) is var index and >= 0 ? ChoiceAt(index, key, words) : null;
 
     public IFields Group(string key, bool required, out bool given)
     {
@@ -148,6 +137,19 @@ internal sealed class FieldGroup : IFields
             return _element.SameText(text);
         Report(index, key, WrongKind(index, "an id"));
         return string.Empty;
+    }
+
+    private int? ChoiceAt(int index, string key, string[] words)
+    {
+        var text = Table.Text(index);
+        var choice = IsText(index) ? Array.IndexOf(words, text) : -1;
+        if (choice >= 0)
+            return choice;
+        var choices = string.Join(", ", words);
+        Report(index, key, IsText(index) && !IsNull(index)
+            ? FileProblems.NotAChoice(text, choices, NearestNames.Suggestion(text, words))
+            : WrongKind(index, "one of " + choices));
+        return null;
     }
 
     private bool? FlagAt(int index, string key)

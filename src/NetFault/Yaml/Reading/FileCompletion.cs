@@ -52,7 +52,7 @@ internal sealed class FileCompletion
 
     /// <summary>What can be said about the first part of a file: not that something is missing from it.</summary>
     private void CheckPart(List<Diagnostic> found) =>
-        found.AddRange(NetworkCheck.Elements(_gathered.Draft, _gathered.ReportedKeys).Where(one => one.Id is not ("NF301" or "NF302")));
+        found.AddRange(NetworkCheck.Elements(_gathered.Draft, _gathered.ReportedKeys).Where(one => one.Id is not ("NF301" or "NF302" or "NF310" or "NF311")));
 
     /// <summary>Each second element of an id, with the problems of its own values.</summary>
     private void CheckDuplicates(List<Diagnostic> found)

@@ -36,6 +36,9 @@ internal interface IFields
     /// <summary>true or false; null where there is none.</summary>
     bool? Flag(string key);
 
+    /// <summary>The position of the word among the choices, which must be there; null in place of a bad one.</summary>
+    int? RequiredChoice(string key, params string[] words);
+
     /// <summary>The position of the word among the choices; null where there is none.</summary>
     int? Choice(string key, params string[] words);
 
@@ -52,6 +55,10 @@ internal static class FieldsExtensions
     public static bool InService(this IFields fields) => fields.Flag("in_service") ?? true;
 
     public static string? Note(this IFields fields) => fields.Text("note");
+
+    /// <summary>The section of the element that a device feeds; null where there is none.</summary>
+    public static string? FeedsSection(this IFields fields) =>
+        fields.Choice("feeds_section", FedElements.Sections) is { } choice ? FedElements.Sections[choice] : null;
 
     /// <summary>A mapping of <c>r</c> and <c>x</c>.</summary>
     public static Impedance? Impedance(this IFields fields, string key)

@@ -33,6 +33,8 @@ internal sealed class KeyRecorder : IFields
 
     public bool? Flag(string key) => Add<bool?>(key, KeyKind.Flag, false, null);
 
+    public int? RequiredChoice(string key, params string[] words) => Add<int?>(key, KeyKind.Choice, true, null);
+
     public int? Choice(string key, params string[] words) => Add<int?>(key, KeyKind.Choice, false, null);
 
     public IFields Group(string key, bool required, out bool given)

@@ -100,11 +100,6 @@ internal sealed class NetworkFileReader
     /// <summary>Reports a key that is no section; the one it was probably meant to be, so that its elements are not missed elsewhere.</summary>
     private Section? Refuse(string key, int offset, int length)
     {
-        if (key == AllSections.Reserved)
-        {
-            _problems.Add(FileProblems.ReservedSection(key).At(null, null, key), offset, length);
-            return null;
-        }
         var names = FileHeader.Keys.Names.Concat(AllSections.InOrder.Select(one => one.Name)).ToList();
         var problem = FileProblems.UnknownSection(key, NearestNames.Suggestion(key, names));
         _problems.Add(problem.At(null, null, Problems.Shown(key)), offset, length);

@@ -3,15 +3,13 @@ namespace NetFault;
 /// <summary>The sections of format 1, in the order in which they are written.</summary>
 internal static class AllSections
 {
-    /// <summary>A section whose keys come with a later version.</summary>
-    public const string Reserved = "circuit_breakers";
-
     public static IReadOnlyList<Section> InOrder { get; } =
     [
         new BusSection(), new NetworkFeederSection(), new SynchronousMachineSection(), new AsynchronousMotorSection(),
         new ConverterFedDriveSection(), new FullConverterSourceSection(), new DoublyFedGeneratorSection(),
         new TransformerSection(), new ThreeWindingTransformerSection(), new LineSection(), new SeriesReactorSection(),
         new SeriesCapacitorSection(), new BusCouplerSection(),
+        new CircuitBreakerSection(), new SwitchSection(), new BusbarSection(), new FuseSection(),
     ];
 
     /// <summary>The position of a section in <see cref="InOrder"/>; −1 where it is none.</summary>

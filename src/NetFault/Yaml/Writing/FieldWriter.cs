@@ -56,6 +56,21 @@ internal sealed class FieldWriter
             Group(key, ("max", pair.Max), ("min", pair.Min));
     }
 
+    /// <summary>Where a device stands: at its bus, towards an element.</summary>
+    public void Terminal(TerminalDevice device)
+    {
+        Reference("bus", device.Bus);
+        Reference("feeds", device.Feeds);
+        Reference("feeds_section", device.FeedsSection);
+    }
+
+    public void Withstand(double? peakKa, double? shortTimeKa, double? durationSeconds)
+    {
+        Number("peak_withstand_current_ka", peakKa);
+        Number("short_time_withstand_current_ka", shortTimeKa);
+        Number("short_time_duration_s", durationSeconds);
+    }
+
     public void Windings(string key, WindingValues value) => Group(key, ("hv", value.Hv), ("mv", value.Mv), ("lv", value.Lv));
 
     public void WindingPairs(string key, WindingPairValues value) =>
