@@ -230,5 +230,7 @@ public class CurrentOverTimeTests
         return 5.1e-8 + Math.Sqrt(2) * Bound(fault);
     }
 
-    private static double Bound(BusFault fault) => fault.DecayErrorBound * fault.InitialSymmetricalKa;
+    /// <summary>The error that the result states, at the worst of some times.</summary>
+    private static double Bound(BusFault fault) =>
+        new[] { 0.005, 0.01, 0.02, 0.05, 0.1 }.Max(fault.DecayErrorBound) * fault.InitialSymmetricalKa;
 }

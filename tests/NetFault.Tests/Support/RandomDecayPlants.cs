@@ -101,14 +101,22 @@ internal sealed class RandomDecayPlants
         RatedLvKv = lv.NominalKv * Between(0.98, 1.04), ShortCircuitVoltagePercent = Between(5, 14), XOverR = 1 / LogBetween(0.01, 0.3),
     });
 
-    private void AddThreeWindings(Bus hv, Bus mv, Bus lv) => _builder.Add(new ThreeWindingTransformer
+    /// <summary>
+    /// A passive one: the two impedances of the low-voltage winding differ by less than that of the other pair, all on one rating. The
+    /// medium-voltage leg may be negative.
+    /// </summary>
+    private void AddThreeWindings(Bus hv, Bus mv, Bus lv)
     {
-        Id = Id(), Hv = hv.Id, Mv = mv.Id, Lv = lv.Id,
-        RatedMva = new WindingValues(Between(20, 60), Between(20, 60), PowerMva(lv)),
-        RatedKv = new WindingValues(hv.NominalKv * Between(0.97, 1.03), mv.NominalKv * Between(0.97, 1.03), lv.NominalKv),
-        ShortCircuitVoltagePercent = new WindingPairValues(Between(8, 12), Between(6, 9), Between(4, 7)),
-        ResistivePercent = new WindingPairValues(Between(0.2, 0.6), Between(0.2, 0.6), Between(0.2, 0.6)),
-    });
+        double low = PowerMva(lv), high = low + Between(5, 40), medium = low + Between(5, 40);
+        double hvMv = Between(8, 12), hvLv = Between(6, 9);
+        _builder.Add(new ThreeWindingTransformer
+        {
+            Id = Id(), Hv = hv.Id, Mv = mv.Id, Lv = lv.Id, RatedMva = new WindingValues(high, medium, low),
+            RatedKv = new WindingValues(hv.NominalKv * Between(0.97, 1.03), mv.NominalKv * Between(0.97, 1.03), lv.NominalKv),
+            ShortCircuitVoltagePercent = new WindingPairValues(hvMv, hvLv, hvLv - Between(0.1, 0.8) * Math.Min(5, hvMv * low / Math.Min(high, medium))),
+            ResistivePercent = new WindingPairValues(Between(0.2, 0.6), Between(0.2, 0.6), Between(0.2, 0.6)),
+        });
+    }
 
     private void AddFeeder(Bus bus) => _builder.Add(new NetworkFeeder
     {

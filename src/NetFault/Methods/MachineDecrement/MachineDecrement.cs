@@ -25,7 +25,7 @@ public sealed record MachineDecrement : FaultMethod
     private readonly AcComponentRule _acComponentRule = AcComponentRule.QuasiStatic;
     private readonly DcDecayRule _dcDecayRule = DcDecayRule.ByXOverR;
     private readonly double _horizonSeconds = 1.0;
-    private readonly double _decayErrorLimit = 1e-6;
+    private readonly double _decayErrorLimit = 5e-7;
 
     /// <inheritdoc/>
     public override string Name => "Machine decrement";
@@ -95,7 +95,7 @@ public sealed record MachineDecrement : FaultMethod
 
     /// <summary>
     /// The largest error of currents over time that is accepted, relative to I″k, from 1e-7 to 1e-2. It is bounded from the network's data before
-    /// anything is solved, and a study whose bound is larger is refused. Fewer nodes, and so less time, serve a larger one. Default 1e-6.
+    /// anything is solved, and a study whose bound is larger is refused. Fewer nodes, and so less time, serve a larger one. Default 5e-7.
     /// </summary>
     /// <exception cref="ArgumentOutOfRangeException">Not from 1e-7 to 1e-2.</exception>
     public double DecayErrorLimit

@@ -4,8 +4,8 @@ namespace NetFault;
 
 /// <summary>
 /// Finds what bounds the poles of a network, and refuses networks whose poles nothing bounds. The argument of <see cref="PoleRegion"/> holds for
-/// impedances with R ≥ 0 and X &gt; 0; three-winding transformers are tested as one three-port, and negative reactances by the inertia of the
-/// network's matrices, which tells whether all currents that Kirchhoff's law allows see positive reactances together.
+/// elements with R ≥ 0 and X &gt; 0, three-winding transformers as one three-port; where one is not so, <see cref="NetworkForms"/> shows it for
+/// the network as a whole, or cannot.
 /// </summary>
 internal sealed class NetworkPoles
 {
@@ -20,7 +20,7 @@ internal sealed class NetworkPoles
     private readonly OperationalSource[] _sources;
     private readonly bool _quasiStatic;
     private double _largestRatio;
-    private bool _hasNegative;
+    private bool _needsProof;
 
     private NetworkPoles(StudyNetworks networks, IEnumerable<OperationalSource?> sources, bool quasiStatic)
     {
@@ -41,10 +41,12 @@ internal sealed class NetworkPoles
         work.ReadBranches();
         foreach (var source in work._sources)
             work.TakeRatio(source.ResistanceRatio);
-        if (work._hasNegative)
-            work._largestRatio = NegativeReactances.LargestRatio(networks, sources, work._largestRatio);
+        var smallest = 0.0;
+        if (work._needsProof)
+            (smallest, work._largestRatio) = NetworkForms.ResistanceRatios(networks, sources, work._largestRatio);
         return new PoleLimits
         {
+            SmallestResistanceRatio = smallest,
             LargestResistanceRatio = work._largestRatio,
             Machines = work.DifferentMachines(),
             MotorRates = work.DifferentMotorRates(),
@@ -68,7 +70,7 @@ internal sealed class NetworkPoles
                     ReadStar(i);
                     break;
                 case BranchKind.Capacitor when _quasiStatic:
-                    _hasNegative = true;
+                    _needsProof = true;
                     break;
                 case BranchKind.Capacitor:
                     throw CurrentOverTimeException.Of(_circuit, [i],
@@ -81,34 +83,30 @@ internal sealed class NetworkPoles
     private void ReadSeries(int branch)
     {
         var z = _circuit.BranchImpedances[branch];
-        if (z.Real < 0.0)
-            throw CurrentOverTimeException.Of(_circuit, [branch], "its resistance is negative: nothing bounds how its currents decay", Held);
-        if (z.Imaginary < 0.0)
-            _hasNegative = true;
+        if (z.Real < 0.0 || z.Imaginary < 0.0)
+            _needsProof = true;
         else
             TakeRatio(z.Real / z.Imaginary);
     }
 
     /// <summary>
-    /// The star as the impedance matrices R and X of its two independent currents: X must be positive definite, R not negative; its R/X then lie
-    /// between the eigenvalues of R against X.
+    /// The star as the matrices R and X of its two independent currents: where X is positive definite and R not negative, its R/X lie between the
+    /// eigenvalues of R against X, λ²·det X − λ·t + det R = 0.
     /// </summary>
     private void ReadStar(int first)
     {
         Complex a = _circuit.BranchImpedances[first], b = _circuit.BranchImpedances[first + 1], c = _circuit.BranchImpedances[first + 2];
+        if (NetworkForms.NegativesOf(_circuit, first, z => z.Imaginary) > 0 || NetworkForms.NegativesOf(_circuit, first, z => z.Real) > 0)
+        {
+            _needsProof = true;
+            return;
+        }
         double x11 = a.Imaginary + c.Imaginary, x22 = b.Imaginary + c.Imaginary, x12 = c.Imaginary;
         double r11 = a.Real + c.Real, r22 = b.Real + c.Real, r12 = c.Real;
-        double determinant = x11 * x22 - x12 * x12, ofR = r11 * r22 - r12 * r12;
-        var rounding = 1e-12 * (r11 + r22) * (r11 + r22);
-        if (x11 <= 0.0 || determinant <= 0.0 || r11 < 0.0 || r22 < 0.0 || ofR < -rounding)
-            throw CurrentOverTimeException.Of(_circuit, [first], "the impedances of its pairs of windings are not those of a passive transformer", Held);
-        // Eigenvalues of R against X: λ²·det X − λ·t + det R = 0.
+        double ofX = x11 * x22 - x12 * x12, ofR = r11 * r22 - r12 * r12;
         var t = r11 * x22 + r22 * x11 - 2.0 * r12 * x12;
-        var root = Math.Sqrt(Math.Max(0.0, t * t - 4.0 * determinant * ofR));
-        TakeRatio((t + root) / (2.0 * determinant));
+        TakeRatio((t + Math.Sqrt(Math.Max(0.0, t * t - 4.0 * ofX * ofR))) / (2.0 * ofX));
     }
-
-    private const string Held = "take AcComponentRule.HeldAtInitial and DcDecayRule.ByXOverR";
 
     private void TakeRatio(double ratio) => _largestRatio = Math.Max(_largestRatio, ratio);
 

@@ -71,6 +71,8 @@ internal sealed class PoleRegion
     private void AddNetworkAlone(EdgePoints edges, int density)
     {
         edges.Add(-Complex.ImaginaryOne);
+        for (var i = 1; i <= 4 && _limits.SmallestResistanceRatio < 0.0; i++)
+            edges.Add(new Complex(-i / 4.0 * _limits.SmallestResistanceRatio, -1.0));
         var last = Math.Min(_limits.LargestResistanceRatio, LargestDcRate);
         if (last <= 0.0)
             return;
@@ -111,13 +113,14 @@ internal sealed class PoleRegion
         yield return Complex.Zero;
         var last = double.IsInfinity(largest) ? 1e3 : largest;
         var flattest = Math.Atan2(1.0, _limits.LargestResistanceRatio);
+        var steepest = Math.Atan2(1.0, _limits.SmallestResistanceRatio);
         foreach (var size in Steps(Math.Min(1e-2, 0.1 * last), last, density))
         {
             yield return Complex.FromPolarCoordinates(size, flattest);
-            yield return Complex.FromPolarCoordinates(size, Math.PI / 2.0);
+            yield return Complex.FromPolarCoordinates(size, steepest);
         }
         for (var i = 1; i < 2 * density && !double.IsInfinity(largest); i++)
-            yield return Complex.FromPolarCoordinates(last, flattest + i / (2.0 * density) * (Math.PI / 2.0 - flattest));
+            yield return Complex.FromPolarCoordinates(last, flattest + i / (2.0 * density) * (steepest - flattest));
     }
 
     private static IEnumerable<double> Steps(double first, double last, int density)
@@ -136,6 +139,9 @@ internal sealed record PolePoints(Complex[] Fit, Complex[] Check);
 /// <summary>What bounds the places of a network's poles; each figure holds for the whole network.</summary>
 internal sealed record PoleLimits
 {
+    /// <summary>The smallest R/X of the network: 0, or a little below where single resistances are negative.</summary>
+    public double SmallestResistanceRatio { get; init; }
+
     /// <summary>The largest R/X of a branch, feeder or machine; infinite where one has no reactance.</summary>
     public required double LargestResistanceRatio { get; init; }
 
