@@ -108,6 +108,22 @@ public sealed class FaultStudy
     }
 
     /// <summary>
+    /// The currents through one device for a fault at its bus and for one just beyond it: the fault's current less what does not flow through the
+    /// device, with X/R and DC component of that current. The duty check does the same for all devices at once.
+    /// </summary>
+    /// <param name="device">A circuit-breaker, switch or fuse of this network.</param>
+    /// <exception cref="UnknownIdException">The device's <see cref="TerminalDevice.Feeds"/> names nothing at its bus in this network.</exception>
+    /// <exception cref="ArgumentException">The element that the device feeds, or the bus, is out of service, or it is an open coupler.</exception>
+    public DeviceCurrents ThroughCurrents(TerminalDevice device)
+    {
+        var fed = Network.ElementBehind(Guard.NotNull(device));
+        var places = new ThroughPlaces(_networks.Circuit);
+        if (fed.Role == ElementRole.Gap || !Network.Topology.IsActive(places.ElementAt(fed)))
+            throw new ArgumentException($"{fed.Section} \"{fed.Id}\" is open or out of service: no current flows through the device", nameof(device));
+        return new ThroughStudy(_context, [places.Of(BusIndex(device.Bus), fed)]).Of(0);
+    }
+
+    /// <summary>
     /// Solves now what the currents over time of every bus need, which otherwise the first call for one does: to watch it, to stop it, or to have
     /// it refused at once. Nothing to do where the method's rules need no such solution.
     /// </summary>

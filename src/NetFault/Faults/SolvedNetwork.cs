@@ -12,6 +12,7 @@ internal sealed class SolvedNetwork
     /// <summary>At another frequency than the rated one a resonance only means that there is no R/X to be had.</summary>
     private readonly bool _refusesResonance;
     private readonly Lazy<DrivingPointImpedances> _drivingPoints;
+    private readonly Lazy<LocalImpedances> _local;
 
     private SolvedNetwork(CircuitMatrix matrix, AdmittanceValues values, NetworkVariant variant)
     {
@@ -20,7 +21,8 @@ internal sealed class SolvedNetwork
         _matrix = matrix;
         Values = values;
         _factor = matrix.Factor(values);
-        _drivingPoints = new Lazy<DrivingPointImpedances>(FindDrivingPoints);
+        _local = new Lazy<LocalImpedances>(FindLocal);
+        _drivingPoints = new Lazy<DrivingPointImpedances>(() => _local.IsValueCreated ? _local.Value.DrivingPoints : FindDrivingPoints());
     }
 
     /// <summary>Which network it is.</summary>
@@ -31,6 +33,12 @@ internal sealed class SolvedNetwork
 
     /// <summary>Zkk of every node, with the quality of the solution.</summary>
     public DrivingPointImpedances DrivingPoints => _drivingPoints.Value;
+
+    /// <summary>Zkk of every node and Zmk of its neighbours: what each element contributes to a fault at its own end.</summary>
+    public LocalImpedances Local => _local.Value;
+
+    /// <summary>Where the entries of <see cref="Local"/> stand.</summary>
+    public CircuitMatrix Matrix => _matrix;
 
     /// <summary>Whether <see cref="DrivingPoints"/> are there already.</summary>
     public bool HasDrivingPoints => _drivingPoints.IsValueCreated;
@@ -85,7 +93,24 @@ internal sealed class SolvedNetwork
             _matrix.RefuseResonance(Values, impedances);
         return new DrivingPointImpedances(impedances, Math.Max(health.WorstResidual, health.WorstRounding));
     });
+
+    private LocalImpedances FindLocal() => _matrix.Guarded(() =>
+    {
+        var inverse = SelectedInverse.Of(_factor, Values.Diagonal, Values.OffDiagonal, out var health);
+        if (_refusesResonance)
+            _matrix.RefuseResonance(Values, inverse.Diagonal);
+        var neighbours = new Complex[_matrix.Symbolic.Pattern.SlotCount];
+        for (var slot = 0; slot < neighbours.Length; slot++)
+            neighbours[slot] = inverse.OffDiagonal(slot);
+        return new LocalImpedances(
+            new DrivingPointImpedances(inverse.Diagonal.ToArray(), Math.Max(health.WorstResidual, health.WorstRounding)), neighbours);
+    });
 }
+
+/// <summary>The entries of Zbus where Ybus is not zero.</summary>
+/// <param name="DrivingPoints">Zkk of all nodes.</param>
+/// <param name="Neighbours">Zmk by slot of the matrix's pattern, per unit.</param>
+internal sealed record LocalImpedances(DrivingPointImpedances DrivingPoints, Complex[] Neighbours);
 
 /// <summary>The driving-point impedances Zkk of all nodes.</summary>
 /// <param name="Impedances">Zkk by node, per unit.</param>

@@ -47,6 +47,15 @@ internal abstract class FaultCurrents
     /// <summary>The bound of the error with which a time's currents were found, relative to I″k; 0 for closed formulas.</summary>
     public virtual double ErrorBoundAt(double seconds) => 0.0;
 
+    /// <summary>
+    /// The thermal equivalent current in kA: the current whose heat in the time is that of AC and DC component together. Here the AC component is
+    /// held at I″k.
+    /// </summary>
+    /// <param name="durationSeconds">Tk.</param>
+    /// <param name="omega">ω in rad/s.</param>
+    public virtual double ThermalEquivalentKa(double durationSeconds, double omega) =>
+        InitialSymmetricalKa * Math.Sqrt(1.0 + ThermalHeat.OfDc(Ratio, durationSeconds, omega));
+
     /// <summary>i_dc(t) in kA.</summary>
     public abstract double DcComponentKa(double seconds);
 
@@ -59,6 +68,12 @@ internal abstract class CurrentsOfMethod
 {
     /// <summary>The currents of a fault at a bus, from the impedances seen there in the method's networks.</summary>
     public abstract FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen);
+
+    /// <summary>
+    /// The network of a variant as a fault at a node sees it, where that is another one than elsewhere (IEC 60909-0 inside power station units);
+    /// else null.
+    /// </summary>
+    public virtual SolvedNetwork? NetworkSeenFrom(int node, NetworkVariant variant) => null;
 
     /// <summary>What the flows of a fault at a bus are found from.</summary>
     public abstract FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant);
@@ -73,4 +88,20 @@ internal abstract class CurrentsOfMethod
 
     /// <summary>What the currents over time of every bus are found from, beside the method's networks.</summary>
     public virtual IReadOnlyList<DecayPart> PartsOverTime() => [];
+}
+
+/// <summary>The heat of a current's DC component.</summary>
+internal static class ThermalHeat
+{
+    /// <summary>
+    /// Over that of I″k in the same time: (1/(I″k²·Tk))·∫i_dc² dt = (τ/Tk)·(1 − e^(−2·Tk/τ)), τ = (X/R)/ω; 2 without decay. With τ of κ it is m of
+    /// IEC 60909-0.
+    /// </summary>
+    public static double OfDc(in ReactanceRatio ratio, double durationSeconds, double omega)
+    {
+        if (ratio.XOverR is not { } xOverR)
+            return 2.0;
+        var share = xOverR / (omega * durationSeconds);
+        return share * (1.0 - Math.Exp(-2.0 / share));
+    }
 }

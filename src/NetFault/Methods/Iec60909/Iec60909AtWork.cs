@@ -62,6 +62,8 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
         new Iec60909Currents(this, context, context.Network.Buses[bus], seen);
 
+    public override SolvedNetwork? NetworkSeenFrom(int node, NetworkVariant variant) => Inside.Of(node)?.Solved(Method, variant);
+
     public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant)
     {
         var at = context.Network.Buses[bus];
@@ -127,7 +129,8 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     }
 
     /// <summary>Zkk in a network that is not among the method's standing ones, with the fault's own impedance.</summary>
-    public Complex Seen(NetworkVariant variant, in SeenImpedances seen) => Seen(variant, seen.Node) + variant.OfFault(seen.FaultPu);
+    public Complex Seen(NetworkVariant variant, in SeenImpedances seen) =>
+        seen.Through?.Impedance(variant) ?? Seen(variant, seen.Node) + variant.OfFault(seen.FaultPu);
 
     private Complex Seen(NetworkVariant variant, int node) =>
         Corrected(variant, node, Networks.Of(variant).DrivingPoints.Impedances[node]);

@@ -12,6 +12,7 @@ internal sealed class Iec60909Currents : FaultCurrents
     // Made when first asked for; two threads may make the same twice, and either is right.
     private SteadyStateCurrent? _steadyState;
     private BreakingCurrent? _breaking;
+    private Iec60909Currents? _whole;
 
     public Iec60909Currents(Iec60909AtWork work, StudyContext context, Bus bus, in SeenImpedances seen)
     {
@@ -20,13 +21,14 @@ internal sealed class Iec60909Currents : FaultCurrents
         _seen = seen;
         Bus = bus;
         DrivingVoltagePu = work.DrivingVoltagePu(seen.Node, bus);
-        WithoutMotorsPu = work.Corrected(Iec60909.WithoutMotors, seen.Node, seen[1]);
-        var withMotors = work.Corrected(Iec60909.Initial, seen.Node, seen[0]);
-        MotorsLeftOut = work.LeavesMotorsOut(seen.Node, DrivingVoltagePu, WithoutMotorsPu);
+        WithoutMotorsPu = Impedance(Iec60909.WithoutMotors, 1);
+        var withMotors = Impedance(Iec60909.Initial, 0);
+        MotorsLeftOut = work.LeavesMotorsOut(seen.Node, DrivingVoltagePu, seen.Through?.Whole(Iec60909.WithoutMotors) ?? WithoutMotorsPu);
         ImpedancePu = MotorsLeftOut ? WithoutMotorsPu : withMotors;
         ImpedancePartKa = Ka(DrivingVoltagePu / Complex.Abs(ImpedancePu));
         ConverterPartKa = Ka(
-            work.Converters.At(seen.Node, FaultInstant.Initial, Network, work.Inside.Of(seen.Node)) / Complex.Abs(ImpedancePu));
+            work.Converters.At(seen.Node, FaultInstant.Initial, Network, work.Inside.Of(seen.Node))
+                / Complex.Abs(seen.Through?.Whole(Network) ?? ImpedancePu));
     }
 
     /// <summary>The bus.</summary>
@@ -53,7 +55,10 @@ internal sealed class Iec60909Currents : FaultCurrents
     /// <summary>What flows through the impedance at the fault, in kA.</summary>
     public double ImpedancePartKa { get; }
 
-    /// <summary>What full-size converters add at the beginning, in kA.</summary>
+    /// <summary>
+    /// What full-size converters add at the beginning, in kA. To the current through a device all that they add to the fault: no more of it can come
+    /// from one side.
+    /// </summary>
     public double ConverterPartKa { get; }
 
     /// <summary>Whether this is one of the results at every bus.</summary>
@@ -69,7 +74,7 @@ internal sealed class Iec60909Currents : FaultCurrents
 
     public override ReactanceRatio Ratio => _work.Method.PeakNetwork is { } network
         ? EquivalentFrequency.Ratio(
-            MotorsLeftOut ? _work.Seen(WithoutMotors(network), _seen) : _work.Corrected(network, Node, _seen[2]), network.FrequencyRatio)
+            MotorsLeftOut ? _work.Seen(WithoutMotors(network), _seen) : Impedance(network, 2), network.FrequencyRatio)
         : _work.Smallest.At(Node, withMotors: !MotorsLeftOut);
 
     /// <summary>By the real resistances: those of κ are fictitious.</summary>
@@ -107,8 +112,42 @@ internal sealed class Iec60909Currents : FaultCurrents
         return DcComponent.Ka(ImpedancePartKa, ratio, _context.Omega * seconds);
     }
 
-    public override double SymmetricalRmsKa(double seconds) =>
-        seconds < DecrementFactors.ShortestDelaySeconds ? InitialSymmetricalKa : Breaking.Ka(seconds);
+    public override double SymmetricalRmsKa(double seconds)
+    {
+        if (seconds < DecrementFactors.ShortestDelaySeconds)
+            return InitialSymmetricalKa;
+        return _seen.Through is null ? Breaking.Ka(seconds) : NotAboveWhole(InitialSymmetricalKa, whole => whole.SymmetricalRmsKa(seconds));
+    }
+
+    public override double ThermalEquivalentKa(double durationSeconds, double omega)
+    {
+        var m = ThermalFactors.M(Kappa, durationSeconds * _context.Network.FrequencyHz);
+        return _seen.Through is null
+            ? InitialSymmetricalKa * Math.Sqrt(m + ThermalFactors.N(InitialSymmetricalKa / SteadyState.Ka, durationSeconds))
+            : NotAboveWhole(InitialSymmetricalKa * Math.Sqrt(m + 1.0), whole => whole.ThermalEquivalentKa(durationSeconds, omega));
+    }
+
+    /// <summary>
+    /// The standard gives Ib and the heat of the AC component at the fault, not of a part of the current. A part has no decrement credited, but it
+    /// is not taken above the whole, which it is one of several in phase of; a part that is larger than the whole from the beginning is.
+    /// </summary>
+    private double NotAboveWhole(double partKa, Func<Iec60909Currents, double> ofWhole)
+    {
+        if (_seen.Through is not { } through || Complex.Abs(through.Share(Network)) > 1.0 + 1e-9 || through.WholeSeen() is not { } seen)
+            return partKa;
+        try
+        {
+            return Math.Min(partKa, ofWhole(_whole ??= new Iec60909Currents(_work, _context, Bus, seen)));
+        }
+        catch (MethodDataException)
+        {
+            return partKa;      // without the data of the decrement there is none
+        }
+    }
+
+    /// <summary>An impedance of the method's list, with the factors for faults inside a power station unit.</summary>
+    private Complex Impedance(NetworkVariant variant, int place) =>
+        _seen.Through is null ? _work.Corrected(variant, Node, _seen[place]) : _seen[place];
 
     /// <summary>Ib with the rule it comes by.</summary>
     public BreakingCurrent Breaking => _breaking ??= BreakingCurrent.Of(_work, this);

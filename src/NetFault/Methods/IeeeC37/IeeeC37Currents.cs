@@ -63,9 +63,13 @@ internal sealed class IeeeC37Currents : FaultCurrents
             ? 0.0
             : _context.CurrentKa(_bus, Impedance(instant)) + InjectedKa(instant);
 
-    /// <summary>What sources of their own current add in an instant's network, in kA.</summary>
+    /// <summary>
+    /// What sources of their own current add in an instant's network, in kA; through a device all that they add to the fault, for no more of it can
+    /// come from one side.
+    /// </summary>
     public double InjectedKa(FaultInstant instant) =>
-        _work.Injected.At(Node, _context.Method.NetworkAt(instant)) / Complex.Abs(Impedance(instant)) * _context.BaseKa(_bus);
+        _work.Injected.At(Node, _context.Method.NetworkAt(instant))
+        / Complex.Abs(_seen.Through?.Whole(_context.Method.NetworkAt(instant)) ?? Impedance(instant)) * _context.BaseKa(_bus);
 
     /// <summary>
     /// Current and X/R of what a breaker must interrupt: those of the first cycle before the interrupting network's time.

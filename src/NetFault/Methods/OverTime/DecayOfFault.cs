@@ -9,6 +9,7 @@ internal sealed class DecayOfFault
     private readonly DecaySolution _solution;
     private readonly int _node;
     private readonly Complex _faultPu;
+    private readonly ThroughView? _through;
     private readonly ConcurrentDictionary<DecayPart, Complex[]>? _own;     // null among the results at every bus, which share theirs
 
     /// <param name="solution">The study's quadratures.</param>
@@ -18,6 +19,7 @@ internal sealed class DecayOfFault
         _solution = solution;
         _node = seen.Node;
         _faultPu = seen.FaultPu;
+        _through = seen.Through;
         _own = seen.CoversEveryBus ? null : new ConcurrentDictionary<DecayPart, Complex[]>();
     }
 
@@ -60,6 +62,8 @@ internal sealed class DecayOfFault
     /// <summary>F at the nodes of the quadrature, for a fault that was solved alone.</summary>
     private Complex[] Samples(DecayPart part)
     {
+        if (_through is { } through)
+            return through.Samples(part);
         var samples = part.ImpedancesOf(_node);
         for (var q = 0; q < samples.Length; q++)
         {

@@ -58,6 +58,9 @@ internal sealed class DecayPart
         ? Array.ConvertAll(known, impedances => impedances[node])
         : OnAllCores(null, CancellationToken.None, point => _solution.NetworkAt(point).Column(node, out _)[node]);
 
+    /// <summary>Something of the network at each node of the quadrature; the network itself is not kept.</summary>
+    public T[] OfEveryNode<T>(Func<SolvedNetwork, T> work) => OnAllCores(null, CancellationToken.None, point => work(_solution.NetworkAt(point)));
+
     /// <summary>Does something at each node of the quadrature.</summary>
     private T[] OnAllCores<T>(Action? step, CancellationToken cancellation, Func<Complex, T> work)
     {
