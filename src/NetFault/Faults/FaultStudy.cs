@@ -109,7 +109,7 @@ public sealed class FaultStudy
 
     /// <summary>
     /// The currents through one device for a fault at its bus and for one just beyond it: the fault's current less what does not flow through the
-    /// device, with X/R and DC component of that current. The duty check does the same for all devices at once.
+    /// device, with X/R and DC component of that current. <see cref="DutyCheck"/> does the same for all devices at once.
     /// </summary>
     /// <param name="device">A circuit-breaker, switch or fuse of this network.</param>
     /// <exception cref="UnknownIdException">The device's <see cref="TerminalDevice.Feeds"/> names nothing at its bus in this network.</exception>

@@ -29,7 +29,8 @@ internal static class CsvReport
         WriteComment(writer, ReportTexts.Caution);
     }
 
-    private static void WriteComment(TextWriter writer, string? text)
+    /// <summary>Writes one comment line; nothing for null.</summary>
+    public static void WriteComment(TextWriter writer, string? text)
     {
         if (text is not null)
             writer.Write("# " + text.Replace('\r', ' ').Replace('\n', ' ') + LineEnd);

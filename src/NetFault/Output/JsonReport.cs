@@ -27,7 +27,8 @@ internal static class JsonReport
         json.WriteEndObject();
     }
 
-    private static void WriteAssumptions(Utf8JsonWriter json, FaultStudy study)
+    /// <summary>Writes what the study assumed.</summary>
+    public static void WriteAssumptions(Utf8JsonWriter json, FaultStudy study)
     {
         json.WriteStartArray("assumptions");
         foreach (var group in ReportTexts.Group(study.Assumptions))
@@ -74,7 +75,8 @@ internal static class JsonReport
         json.WriteEndArray();
     }
 
-    private static void WriteValue(Utf8JsonWriter json, string name, object? value)
+    /// <summary>Writes a value of any kind.</summary>
+    public static void WriteValue(Utf8JsonWriter json, string name, object? value)
     {
         switch (value)
         {
