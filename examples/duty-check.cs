@@ -10,7 +10,7 @@
 //
 // --method decrement (default) takes --prefault and --x-over-r complex|separate; --method iec, which is IEC 60909-0, takes --x-over-r a|b|c, the
 // standard's three ways to the factor kappa; --method ieee, which is IEEE C37.010, takes --prefault and --current e/z|e/x. --duration is that of
-// the short circuit for the thermal duties, --marginal the margin in percent below which a duty that passes is marked, --dc current|percent how the
+// the short circuit for the thermal duties, --marginal the margin in percent below which a duty that passes is marked, --dc current|percent|total how the
 // DC component is held against the rating, --low-voltage icu|ics which rating of IEC 60947-2 counts.
 //
 // Exit codes: 0 no device fails, 1 the network cannot be read or solved, 2 wrong arguments, 3 at least one device fails.
@@ -21,7 +21,7 @@ using NetFault;
 
 const string Usage =
     "usage: dotnet run examples/duty-check.cs -- NETWORK.yaml [--csv FILE] [--json FILE] [--method decrement|iec|ieee] [--current e/z|e/x]"
-    + " [--x-over-r complex|separate|a|b|c] [--prefault PU] [--duration SECONDS] [--marginal PERCENT] [--dc current|percent] [--low-voltage icu|ics]";
+    + " [--x-over-r complex|separate|a|b|c] [--prefault PU] [--duration SECONDS] [--marginal PERCENT] [--dc current|percent|total] [--low-voltage icu|ics]";
 
 Console.OutputEncoding = Encoding.UTF8;
 try
@@ -147,7 +147,8 @@ sealed record Arguments(string NetworkPath, FaultMethod Method, DutyOptions Duty
     {
         FaultDurationSeconds = Number("--duration", options.GetValueOrDefault("--duration", "1"), zeroAllowed: false),
         MarginalPercent = Number("--marginal", options.GetValueOrDefault("--marginal", "5"), zeroAllowed: true),
-        DcCriterion = Choice(options, "--dc", ("current", DcCriterion.ByCurrent), ("percent", DcCriterion.ByPercent)),
+        DcCriterion = Choice(options, "--dc", ("current", DcCriterion.ByCurrent), ("percent", DcCriterion.ByPercent),
+            ("total", DcCriterion.ByTotalCurrent)),
         LowVoltageRating = Choice(options, "--low-voltage", ("icu", LowVoltageBreakingRating.Ultimate), ("ics", LowVoltageBreakingRating.Service)),
     };
 

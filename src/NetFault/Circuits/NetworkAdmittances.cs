@@ -45,6 +45,10 @@ internal static class NetworkAdmittances
         return admittances;
     }
 
+    /// <summary>The admittance of one series impedance, not a capacitor's, in a network.</summary>
+    public static Complex OfSeries(Complex z, NetworkVariant variant) => Reciprocal(Part(
+        variant.ReactanceFactor is { } s ? z.Real + z.Imaginary * s : AtFrequency(z, BranchKind.Series, variant.FrequencyRatio), variant.Part));
+
     /// <summary>The branch impedances with their reactances at the variant's frequency.</summary>
     private static Complex[] AtFrequency(Circuit circuit, Complex[] branchImpedances, NetworkVariant variant)
     {

@@ -73,4 +73,41 @@ public sealed class DutyCheck
     /// <param name="id">Its id.</param>
     /// <exception cref="UnknownIdException">There is none; the exception names the nearest ids.</exception>
     public DeviceDuty CircuitBreaker(string id) => Device("circuit_breakers", id);
+
+    /// <summary>
+    /// The smallest series reactor at a place that brings all duties of a failing device within their ratings. It is found with the low-rank formula for a
+    /// change of one branch, without a factorisation for each reactance, and confirmed by a full solution of the network with the reactor in it.
+    /// </summary>
+    /// <param name="device">A device of this check.</param>
+    /// <param name="placeId">The element that the reactor is in series with: a branch, a source or a closed coupler.</param>
+    /// <param name="placeSection">Its section, where elements of several sections have the id; otherwise null.</param>
+    /// <param name="busId">
+    /// The bus between which and the element it stands; null takes the device's bus where the element is connected there, else the element's first one.
+    /// </param>
+    /// <returns>The reactor, or the reason why none there helps.</returns>
+    /// <exception cref="UnknownIdException">There is no such element, or it is not connected with that bus.</exception>
+    /// <exception cref="ArgumentException">The device is not of this check, or elements of several sections have the id.</exception>
+    public ReactorProposal SmallestReactor(DeviceDuty device, string placeId, string? placeSection = null, string? busId = null)
+    {
+        if (!Devices.Contains(Guard.NotNull(device)))
+            throw new ArgumentException("the device is of another check", nameof(device));
+        var study = StudyOf(device);
+        var places = study.Network.Elements.Take(study.Network.ConductingCount)
+            .Where(one => one.Id == Guard.NotNull(placeId) && one.Terminals.Count > 0 && (placeSection is null || one.Section == placeSection)).ToList();
+        if (places.Count > 1)
+            throw new ArgumentException($"\"{placeId}\" stands in {string.Join(" and ", places.Select(one => one.Section))}: name the section too", nameof(placeId));
+        if (places.Count == 0)
+            throw new UnknownIdException(placeSection ?? "the network", placeId, study.Network.Elements.Where(one => one.Terminals.Count > 0).Select(one => one.Id));
+        var ends = places[0].Terminals.OfType<string>().ToList();
+        var bus = busId ?? (ends.Contains(device.BusId) ? device.BusId : ends[0]);
+        if (!ends.Contains(bus))
+            throw new UnknownIdException($"the ends of {places[0].Section} {placeId}", bus, ends);
+        return new ReactorSearch(this, device, study, places[0], bus).Run();
+    }
+
+    /// <summary>The study that judged a device: for one at an open coupler that with the coupler closed.</summary>
+    private FaultStudy StudyOf(DeviceDuty device) =>
+        device.Device is TerminalDevice terminal && Study.Network.ElementBehind(terminal) is BusCoupler { Closed: false } tie
+            ? ClosedTie.Of(Study, tie, out _) ?? Study
+            : Study;
 }

@@ -28,11 +28,11 @@ public sealed record DutyOptions
     }
 
     /// <summary>How the DC component at contact separation is held against the rating. Default <see cref="DcCriterion.ByCurrent"/>.</summary>
-    /// <exception cref="ArgumentOutOfRangeException">None of the two.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">None of the three.</exception>
     public DcCriterion DcCriterion
     {
         get => _dcCriterion;
-        init => _dcCriterion = Guard.OneOf(value, DcCriterion.ByCurrent, DcCriterion.ByPercent);
+        init => _dcCriterion = Guard.OneOf(value, DcCriterion.ByCurrent, DcCriterion.ByPercent, DcCriterion.ByTotalCurrent);
     }
 
     /// <summary>Which breaking capacity of IEC 60947-2 counts. Default <see cref="LowVoltageBreakingRating.Ultimate"/>.</summary>
@@ -55,6 +55,12 @@ public enum DcCriterion
 
     /// <summary>In percent of the AC component's peak, as the words of IEC 62271-100 have it, whatever the current is.</summary>
     ByPercent,
+
+    /// <summary>
+    /// Not by itself: only the total RMS current counts, so that a smaller AC component makes up for a larger DC component. The mildest; ask the maker.
+    /// Generator circuit-breakers keep the duty in kA.
+    /// </summary>
+    ByTotalCurrent,
 }
 
 /// <summary>A breaking capacity of IEC 60947-2.</summary>

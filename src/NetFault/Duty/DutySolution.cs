@@ -64,7 +64,7 @@ internal sealed class DutySolution
         for (var i = 0; i < seats.Count; i++)
         {
             _cancellation.ThrowIfCancellationRequested();
-            found[seats[i].Device] = DutyRules.Judge(_context, _options, _devices[seats[i].Device], through.Of(i),
+            found[seats[i].Device] = DutyRules.Judge(_context, _options, _devices[seats[i].Device], through.ForDuty(i),
                 seats[i].Place.IsInRing ? [InRing] : []);
         }
     }
@@ -90,7 +90,7 @@ internal sealed class DutySolution
             return NoCurrent(device, $"de-energised even with {tie.Id} closed");
         var place = new ThroughPlaces(context.Networks.Circuit).Of(bus, context.Network.Find<BusCoupler>(tie.Id));
         string[] remarks = place.IsInRing ? [WithClosed(tie), InRing] : [WithClosed(tie)];
-        return DutyRules.Judge(context, _options, device, new ThroughStudy(context, [place]).Of(0), remarks);
+        return DutyRules.Judge(context, _options, device, new ThroughStudy(context, [place]).ForDuty(0), remarks);
     }
 
     private static string WithClosed(BusCoupler tie) => $"judged with the open coupler {tie.Id} closed";

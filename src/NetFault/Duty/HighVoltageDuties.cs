@@ -11,9 +11,10 @@ internal static class HighVoltageDuties
         sheet.Judge(DutyKind.Making, Making(breaker, sheet), "short_circuit_making_current_ka", sheet.Both, side => side.PeakKa,
             "peak through the breaker against the rated short-circuit making current (IEC 62271-100)");
         Symmetrical(DutyKind.BreakingSymmetrical, rated, "short_circuit_breaking_current_ka", sheet.Both, parting, sheet);
-        Direct(DutyKind.BreakingDcComponent, rated, RatedDcComponent.Of(breaker, parting, StandardRatings.StandardTimeConstantSeconds, sheet),
-            "short_circuit_breaking_current_ka", sheet.Both, parting, sheet);
-        Total(rated, RatedDcComponent.Of(breaker, parting, StandardRatings.StandardTimeConstantSeconds, sheet), parting, sheet);
+        var share = RatedDcComponent.Of(breaker, parting, StandardRatings.StandardTimeConstantSeconds, sheet);
+        if (sheet.Options.DcCriterion != DcCriterion.ByTotalCurrent)
+            Direct(DutyKind.BreakingDcComponent, rated, share, "short_circuit_breaking_current_ka", sheet.Both, parting, sheet);
+        Total(rated, share, parting, sheet);
         WithstandDuties.OfBreaker(breaker, Making(breaker, sheet), sheet);
     }
 

@@ -84,11 +84,16 @@ internal sealed class ThroughSolution : ThroughValues
     private readonly StudyContext _context;
     private readonly ThroughPlace[] _places;
     private readonly bool _fewNodes;
+    private readonly bool _forTransformers;
     private readonly ConcurrentDictionary<NetworkVariant, Lazy<PlaceValue[]>> _values = new();
     private readonly ConcurrentDictionary<DecayPart, Lazy<PlaceValue[][]>> _overTime = new();
 
-    public ThroughSolution(StudyContext context, IEnumerable<ThroughPlace> places)
+    /// <param name="context">The study.</param>
+    /// <param name="places">The places.</param>
+    /// <param name="forTransformers">Whether unit transformers are uncorrected for faults inside their units (IEC 60909-0).</param>
+    public ThroughSolution(StudyContext context, IEnumerable<ThroughPlace> places, bool forTransformers = false)
     {
+        _forTransformers = forTransformers;
         _context = context;
         _places = places.ToArray();
         _fewNodes = _places.Select(place => place.Node).Where(node => node >= 0).Distinct().Take(FewNodes + 1).Count() <= FewNodes;
@@ -129,7 +134,7 @@ internal sealed class ThroughSolution : ThroughValues
         var values = Solve(_context.Networks.Of(variant));
         for (var i = 0; i < values.Length; i++)
         {
-            if (_places[i].Node >= 0 && _context.Currents.NetworkSeenFrom(_places[i].Node, variant) is { } other)
+            if (_places[i].Node >= 0 && _context.Currents.NetworkSeenFrom(_places[i].Node, variant, _forTransformers) is { } other)
                 values[i] = ByColumn(other, _places[i], other.Column(_places[i].Node, out _));
         }
         return values;
@@ -170,7 +175,9 @@ internal static class ThroughShares
     /// <param name="place">The place.</param>
     /// <param name="whole">Zkk.</param>
     /// <param name="neighbour">Zmk of the other node of a branch.</param>
-    public static PlaceValue Of(Circuit circuit, AdmittanceValues values, ThroughPlace place, Complex whole, Func<int, Complex> neighbour)
+    /// <param name="admittance">The admittance of a branch; null takes those of the network.</param>
+    public static PlaceValue Of(
+        Circuit circuit, AdmittanceValues values, ThroughPlace place, Complex whole, Func<int, Complex> neighbour, Func<int, Complex>? admittance = null)
     {
         var beyond = Complex.Zero;
         foreach (var end in place.Beyond)
@@ -182,7 +189,7 @@ internal static class ThroughShares
             }
             var branch = circuit.Branches[end.Index];
             var (here, there) = end.Kind == ElementEndKind.From ? (branch.FromRatio, branch.ToRatio) : (branch.ToRatio, branch.FromRatio);
-            beyond += here * values.Branches[end.Index] * (here * whole - there * neighbour(end.Index));
+            beyond += here * (admittance?.Invoke(end.Index) ?? values.Branches[end.Index]) * (here * whole - there * neighbour(end.Index));
         }
         return new PlaceValue(whole, beyond);
     }

@@ -73,7 +73,10 @@ internal abstract class CurrentsOfMethod
     /// The network of a variant as a fault at a node sees it, where that is another one than elsewhere (IEC 60909-0 inside power station units);
     /// else null.
     /// </summary>
-    public virtual SolvedNetwork? NetworkSeenFrom(int node, NetworkVariant variant) => null;
+    /// <param name="node">The node with the fault.</param>
+    /// <param name="variant">The variant.</param>
+    /// <param name="forTransformer">For the part through a unit transformer, which the standard takes uncorrected.</param>
+    public virtual SolvedNetwork? NetworkSeenFrom(int node, NetworkVariant variant, bool forTransformer = false) => null;
 
     /// <summary>What the flows of a fault at a bus are found from.</summary>
     public abstract FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant);

@@ -38,7 +38,14 @@ internal static class DutyTexts
 
     /// <summary>How was judged, in one line.</summary>
     public static string OptionsLine(DutyOptions options) => FormattableString.Invariant(
-        $"Margin: rated over required, less one; marginal below {options.MarginalPercent} %. Thermal duty for {options.FaultDurationSeconds} s. DC component judged in {(options.DcCriterion == DcCriterion.ByCurrent ? "kA" : "percent")}. Low voltage by {(options.LowVoltageRating == LowVoltageBreakingRating.Ultimate ? "Icu" : "Ics")}.");
+        $"Margin: rated over required, less one; marginal below {options.MarginalPercent} %. Thermal duty for {options.FaultDurationSeconds} s. DC component judged {Criterion(options.DcCriterion)}. Low voltage by {(options.LowVoltageRating == LowVoltageBreakingRating.Ultimate ? "Icu" : "Ics")}.");
+
+    private static string Criterion(DcCriterion criterion) => criterion switch
+    {
+        DcCriterion.ByCurrent => "in kA",
+        DcCriterion.ByPercent => "in percent",
+        _ => "by the total RMS current alone",
+    };
 
     /// <summary>The verdicts counted.</summary>
     public static string Summary(DutyCheck check) => FormattableString.Invariant(

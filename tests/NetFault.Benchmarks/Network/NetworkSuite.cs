@@ -22,6 +22,7 @@ internal static class NetworkSuite
         {
             AgainstKlu("case10000_goc", large, table, goal: 200);
             Iec("case10000_goc", large, table);
+            DutySuite.Add("case10000_goc", large, table);
         }
         AgainstKlu("generated, 1,000 buses", Grids.Meshed(40, 25), table, goal: null);
         AgainstKlu("generated, 10,000 buses", Grids.Meshed(125, 80), table, goal: null);

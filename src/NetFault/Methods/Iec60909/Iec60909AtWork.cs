@@ -62,7 +62,9 @@ internal sealed class Iec60909AtWork : CurrentsOfMethod
     public override FaultCurrents At(StudyContext context, int bus, in SeenImpedances seen) =>
         new Iec60909Currents(this, context, context.Network.Buses[bus], seen);
 
-    public override SolvedNetwork? NetworkSeenFrom(int node, NetworkVariant variant) => Inside.Of(node)?.Solved(Method, variant);
+    public override SolvedNetwork? NetworkSeenFrom(int node, NetworkVariant variant, bool forTransformer = false) => forTransformer
+        ? Inside.Of(node)?.SolvedForTransformer(Method, variant)
+        : Inside.Of(node)?.Solved(Method, variant);
 
     public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant)
     {

@@ -75,6 +75,7 @@ internal sealed class InsideUnit
     private readonly int _branch;
     private readonly ConcurrentDictionary<NetworkVariant, Lazy<RankTwoUpdate>> _updates = new();
     private readonly ConcurrentDictionary<NetworkVariant, Lazy<SolvedNetwork>> _solved = new();
+    private readonly ConcurrentDictionary<NetworkVariant, Lazy<SolvedNetwork>> _solvedForTransformer = new();
 
     public InsideUnit(StudyNetworks networks, Iec60909Sources sources, PowerStationUnit unit, int branch, int source)
     {
@@ -106,14 +107,20 @@ internal sealed class InsideUnit
 
     /// <summary>The whole network with the factors for faults inside.</summary>
     public SolvedNetwork Solved(FaultMethod method, NetworkVariant variant) =>
-        _solved.GetOrAdd(variant, one => new Lazy<SolvedNetwork>(() => Solve(method, one))).Value;
+        _solved.GetOrAdd(variant, one => new Lazy<SolvedNetwork>(() => Solve(method, one, Unit.TransformerInside))).Value;
 
-    private SolvedNetwork Solve(FaultMethod method, NetworkVariant variant)
+    /// <summary>
+    /// The same with the unit transformer uncorrected, by which the standard finds the part of the current that flows through it (7.2): it is larger.
+    /// </summary>
+    public SolvedNetwork SolvedForTransformer(FaultMethod method, NetworkVariant variant) =>
+        _solvedForTransformer.GetOrAdd(variant, one => new Lazy<SolvedNetwork>(() => Solve(method, one, 1.0))).Value;
+
+    private SolvedNetwork Solve(FaultMethod method, NetworkVariant variant, double transformerFactor)
     {
         var sources = method.SourceImpedances(_networks.Circuit, variant, log: null);
         var branches = (Complex[])_networks.Circuit.BranchImpedances.Clone();
         sources[Source] *= MachineRatio;
-        branches[_branch] *= Unit.TransformerInside / Unit.Factor;
+        branches[_branch] *= transformerFactor / Unit.Factor;
         return SolvedNetwork.Of(_networks.Matrix, sources, branches, variant);
     }
 
