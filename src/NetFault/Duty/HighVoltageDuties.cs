@@ -100,12 +100,13 @@ internal static class HighVoltageDuties
                 "i_dc in percent of √2·Iac against the rated percentage, " + given, "%");
             return;
         }
-        sheet.Judge(kind, PerUnit.Sqrt2 * rated * beta, key, sides, side => side.DcComponentKa(time),
-            "i_dc in kA against √2 times the rated breaking current times its DC share, " + given);
-        if (sides.Max(side => Percent(side, time)) is var percent && percent > 100.0 * beta * (1.0 + 1e-9) && sides.Max(side => side.DcComponentKa(time)) > 0.0)
+        var percent = sides.Max(side => Percent(side, time));
+        sheet.Judge(kind, PerUnit.Sqrt2 * rated * beta, key, sides, side => side.DcComponentKa(time), FormattableString.Invariant(
+            $"i_dc in kA against √2 times the rated breaking current times its DC share, {given}; here up to {percent:0.#} % of the AC component"));
+        if (percent > 100.0 * beta * (1.0 + 1e-9))
         {
-            sheet.Remark(FormattableString.Invariant(
-                $"DC component {percent:0} % of the AC component on one side, above the rated {100.0 * beta:0} %: judged in kA; the standard's words speak of percent, ask the maker"));
+            sheet.Remark("the DC component is a larger part of the AC component than in the rated current: it is judged in kA, while the standard's words "
+                + "speak of percent; ask the maker");
         }
     }
 

@@ -77,8 +77,38 @@ public class ThroughCurrentTests
         }
         Close(-through.AtBus.Share * atBus.FaultCurrentKa, contribution, cut, atBus);
         Close(through.BeyondDevice.Share * beyond.FaultCurrentKa, rest, cut, beyond);
+        if (study.Method is MachineDecrement { XOverRRule: XOverRRule.ComplexImpedance })
+            AssertRatio(through.BeyondDevice, rest, beyond);
         Close(through.AtBus.InitialSymmetricalKa, contribution.Magnitude, cut, atBus);
         Close(through.BeyondDevice.InitialSymmetricalKa, rest.Magnitude, cut, beyond);
+    }
+
+    /// <summary>X/R of the current is that of the impedance V/I through which the driving voltage would send it.</summary>
+    private static void AssertRatio(ThroughCurrent through, Complex current, FaultFlows flows)
+    {
+        if (through.XOverR is { } ratio && ratio < 1e3 && through.Share.Magnitude > 1e-3)
+            ratio.Should().BeApproximately(-current.Imaginary / current.Real, 1e-5 * ratio, flows.BusId);
+    }
+
+    /// <summary>Inductive currents do not jump: at the beginning the DC component of each branch is the AC component with the opposite sign.</summary>
+    [Fact]
+    public void The_exact_DC_component_through_a_breaker_begins_at_the_peak_of_the_AC_component()
+    {
+        var method = new MachineDecrement { AcComponentRule = AcComponentRule.Exact, DcDecayRule = DcDecayRule.Exact };
+        RandomNetworks.Cases(10).Sample((seed, buses) =>
+        {
+            var network = RandomNetworks.Make(seed, buses);
+            var study = new FaultStudy(network, method);
+            foreach (var (bus, element) in Terminals(network).Where((one, i) => (i + seed) % 7 == 0 && IsThere(network, one.Bus, one.Element)))
+            {
+                var through = study.ThroughCurrents(Breaker(bus, element));
+                foreach (var side in new[] { through.AtBus, through.BeyondDevice })
+                {
+                    side.DcComponentKa(0).Should().BeApproximately(
+                        Math.Sqrt(2) * side.SymmetricalRmsKa(0), 1e-5 * study.At(bus).InitialSymmetricalKa, $"{bus} to {element.Id}");
+                }
+            }
+        }, iter: 8);
     }
 
     private static void Close(Complex actual, Complex expected, FaultStudy cut, FaultFlows flows) =>
