@@ -9,12 +9,14 @@ switch (args.FirstOrDefault())
         return KernelSuite.Run(args[1..]);
     case "network":
         return NetworkSuite.Run(args[1..]);
+    case "time":
+        return NetworkSuite.RunOverTime(args[1..]);
     case "memory":
         return MemorySuite.Run();
     case "dotnet":
         BenchmarkSwitcher.FromTypes([typeof(StudyBenchmarks)]).Run(args[1..]);
         return 0;
     default:
-        Console.WriteLine("usage: <suite> [options]; suites: kernel and network, with [networks-folder] [--quick]; memory; dotnet, with the options of BenchmarkDotNet");
+        Console.WriteLine("usage: <suite> [options]; suites: kernel and network, with [networks-folder] [--quick]; time, with [networks-folder]; memory; dotnet, with the options of BenchmarkDotNet");
         return args.Length == 0 ? 0 : 1;
 }

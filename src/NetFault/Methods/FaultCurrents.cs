@@ -41,6 +41,9 @@ internal abstract class FaultCurrents
     /// <summary>The current of a phase in kA at a closing angle in radians; null where the method gives no waveform.</summary>
     public virtual double? InstantaneousKa(double seconds, double closingAngle) => null;
 
+    /// <summary>The DC component of that phase; null where the method gives no waveform.</summary>
+    public virtual double? DcOfPhaseKa(double seconds, double closingAngle) => null;
+
     /// <summary>The largest instantaneous current over time and closing angle; null where the method gives no waveform.</summary>
     public virtual PeakCurrent? WorstPeak => null;
 

@@ -156,4 +156,13 @@ internal sealed record PoleLimits
 
     /// <summary>The largest impedance that the motors together see towards the rest of the network, over their own.</summary>
     public double MotorsSee { get; init; }
+
+    /// <summary>The limits for people.</summary>
+    public override string ToString()
+    {
+        var rates = Machines.SelectMany(machine => new[] { machine.TransientRate, machine.SubtransientRate }).Concat(MotorRates).ToList();
+        return FormattableString.Invariant($"R/X from {SmallestResistanceRatio:0.####} to {LargestResistanceRatio:0.###}")
+            + FormattableString.Invariant($", time constants of machines from {1.0 / rates.DefaultIfEmpty().Max():0.#}/ω")
+            + (MotorsSee > 0.0 ? FormattableString.Invariant($", motors behind up to {MotorsSee:0.##} times their impedance") : string.Empty);
+    }
 }
