@@ -56,8 +56,8 @@ static void Run(Arguments arguments)
     Console.WriteLine($"contacts part at {arguments.Parting * 1000:0.#} ms: AC {fault.SymmetricalRmsKa(arguments.Parting):0.000} kA, "
         + $"DC {fault.DcComponentKa(arguments.Parting):0.000} kA, total {fault.AsymmetricalRmsKa(arguments.Parting):0.000} kA RMS");
     Console.WriteLine($"AC {Words(fault.AcComponentRule)}, DC {Words(fault.DcDecayRule)}; error bound {fault.DecayErrorBound(arguments.Parting):0.0e+0} of I″k");
-    foreach (var assumption in fault.Assumptions)
-        Console.WriteLine($"assumed: {assumption}");
+    foreach (var alike in fault.Assumptions.GroupBy(one => (one.Section, one.Text)))
+        Console.WriteLine($"assumed: {alike.Key.Section} {string.Join(", ", alike.Select(one => one.ElementId))}: {alike.Key.Text}");
     Console.WriteLine($"drawn to {arguments.OutPath}");
     Console.WriteLine("For study by qualified engineers. Check against the applicable standards and local codes; this does not replace licensed practice.");
 }
@@ -97,6 +97,7 @@ sealed class Picture(Network network, BusFault fault, double angleDegrees, Argum
         Line(lower, "#555", 1.0, "7 4", null);
         Line(dc, "#000", 1.6, "10 3 2 3", "DC component");
         Line(current, "#000", 1.9, null, null);
+        Labels();
         MarkPeak(current);
         MarkParting();
         _svg.Append("</svg>\n");
@@ -132,7 +133,7 @@ sealed class Picture(Network network, BusFault fault, double angleDegrees, Argum
             Text(X(t), Height - Bottom + 20, (t * 1000).ToString("0.###"), anchor: "middle", size: 12);
         }
         Text(Width - Right, Height - Bottom + 40, "time after the beginning, ms", anchor: "end", size: 12);
-        Text(Left - 8, Top - 6, "kA", anchor: "end", size: 12);
+        Text(Left - 44, (Top + Height - Bottom) / 2 + 5, "kA", anchor: "middle", size: 12);
     }
 
     private void Line(double[] ka, string stroke, double width, string? dashes, string? label)
@@ -140,19 +141,21 @@ sealed class Picture(Network network, BusFault fault, double angleDegrees, Argum
         var path = string.Join(" ", ka.Select((value, i) => $"{X(_seconds[i]):0.0},{Y(value):0.0}"));
         _svg.Append($"<polyline fill=\"none\" stroke=\"{stroke}\" stroke-width=\"{width}\"{(dashes is null ? "" : $" stroke-dasharray=\"{dashes}\"")} points=\"{path}\"/>\n");
         if (label is not null)
-            Label(label, ka[^1]);
+            _labels.Add((Y(ka[^1]) + 4, label));
     }
 
-    private readonly List<double> _labels = [];
+    private readonly List<(double Y, string Text)> _labels = [];
 
-    /// <summary>A label at the end of its line, moved down where another stands already.</summary>
-    private void Label(string label, double ka)
+    /// <summary>The labels at the ends of their lines, from above, moved down where there is no room.</summary>
+    private void Labels()
     {
-        var y = Y(ka) + 4;
-        while (_labels.Any(other => Math.Abs(other - y) < 16))
-            y += 4;
-        _labels.Add(y);
-        Text(Width - Right + 8, y, label, size: 12);
+        var free = double.NegativeInfinity;
+        foreach (var (y, label) in _labels.OrderBy(one => one.Y))
+        {
+            var at = Math.Max(y, free);
+            Text(Width - Right + 8, at, label, size: 12);
+            free = at + 16;
+        }
     }
 
     private void MarkPeak(double[] current)
