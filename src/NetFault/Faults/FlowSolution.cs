@@ -43,7 +43,8 @@ internal sealed class FlowSolution
     /// <summary>The flows of a fault through an impedance in ohm, at a time.</summary>
     public FaultFlows AtTime(double seconds, Complex faultImpedanceOhm)
     {
-        foreach (var basis in _context.Currents.FlowsAtTime(_context, _bus, seconds))
+        var faultPu = faultImpedanceOhm / _context.BaseOhm(_network.Buses[_bus]);
+        foreach (var basis in _context.Currents.FlowsAtTime(_context, _bus, seconds, faultPu))
         {
             if (IsEnergised)
                 Add(basis, faultImpedanceOhm);

@@ -67,8 +67,8 @@ internal abstract class CurrentsOfMethod
     public abstract FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant);
 
     /// <summary>What the flows of a fault at a bus at a time are summed from, one after the other.</summary>
-    public virtual IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds) => throw new NotSupportedException(
-        $"{context.Method.Name} gives no branch currents over time; ask for those of an instant, or take MachineDecrement");
+    public virtual IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds, Complex faultPu) =>
+        throw new NotSupportedException($"{context.Method.Name} gives no branch currents over time; ask for those of an instant, or take MachineDecrement");
 
     /// <summary>The rules for the DC component beside the exact one.</summary>
     public virtual DcRuleComparison CompareDcRules(StudyContext context, double seconds, CancellationToken cancellation) =>

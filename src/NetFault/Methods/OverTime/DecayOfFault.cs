@@ -15,7 +15,7 @@ internal sealed class DecayOfFault
     /// <param name="seen">The place of the fault and the fault's own impedance.</param>
     public DecayOfFault(DecaySolution solution, in SeenImpedances seen)
     {
-        _solution = solution;
+        _solution = solution.For(seen.FaultPu);
         _node = seen.Node;
         _faultPu = seen.FaultPu;
         _own = seen.CoversEveryBus ? null : new ConcurrentDictionary<DecayPart, Complex[]>();

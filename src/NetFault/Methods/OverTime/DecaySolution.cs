@@ -14,6 +14,7 @@ internal sealed class DecaySolution
     private readonly double _horizonAngle;
     private readonly OperationalSource?[] _sources;
     private readonly Lazy<PoleLimits> _limits;
+    private readonly Lazy<DecaySolution> _throughResistance;
     private readonly Lazy<PoleRegion> _region;
     private readonly DecayPart[] _parts;
 
@@ -21,18 +22,27 @@ internal sealed class DecaySolution
     /// <param name="quasiStatic">Whether reactances are kept at rated frequency.</param>
     /// <param name="horizonAngle">ω times the horizon.</param>
     /// <param name="errorLimit">The largest bound of the error that is accepted.</param>
-    public DecaySolution(StudyNetworks networks, bool quasiStatic, double horizonAngle, double errorLimit)
+    /// <param name="faultRatio">The largest R/X of the fault's own impedance.</param>
+    public DecaySolution(StudyNetworks networks, bool quasiStatic, double horizonAngle, double errorLimit, double faultRatio = 0.0)
     {
         _networks = networks;
         _quasiStatic = quasiStatic;
         _horizonAngle = horizonAngle;
         _errorLimit = errorLimit;
         _sources = OperationalSources.Of(networks.Circuit, log: null);
-        _limits = new(() => NetworkPoles.LimitsOf(networks, _sources, quasiStatic));
+        _limits = new(() => NetworkPoles.LimitsOf(networks, _sources, quasiStatic).WithRatio(faultRatio));
+        _throughResistance = new(() => new DecaySolution(networks, quasiStatic, horizonAngle, errorLimit, double.PositiveInfinity));
         _region = new(() => new PoleRegion(_limits.Value, quasiStatic));
         var windows = quasiStatic ? DecayWindow.QuasiStatic : DecayWindow.Exact;
         _parts = windows.Select(window => new DecayPart(this, window)).ToArray();
     }
+
+    /// <summary>
+    /// The solution for a fault through an impedance. One of larger R/X than all of the network moves the poles' limits; a rule for it takes no
+    /// R/X for granted.
+    /// </summary>
+    public DecaySolution For(Complex faultPu) =>
+        faultPu == Complex.Zero || faultPu.Real <= _limits.Value.LargestResistanceRatio * faultPu.Imaginary ? this : _throughResistance.Value;
 
     /// <summary>The window's part for a time.</summary>
     /// <param name="angle">ω·t, within the horizon.</param>
