@@ -110,6 +110,7 @@ internal sealed class FlowSolution
         var branches = Branches(injections);
         return new FaultFlows(_network.Buses[_bus].Id, instant, seconds)
         {
+            AcComponentRule = seconds is null ? null : _context.Currents.AcRuleOfFlows,
             FaultCurrentKa = _fault * _context.BaseKa(_network.Buses[_bus]),
             SolutionResidual = _residual,
             Voltages = Voltages(),

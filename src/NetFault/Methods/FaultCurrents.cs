@@ -66,6 +66,9 @@ internal abstract class CurrentsOfMethod
     /// <summary>What the flows of a fault at a bus are found from.</summary>
     public abstract FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant);
 
+    /// <summary>How the AC component of these flows is found.</summary>
+    public virtual AcComponentRule? AcRuleOfFlows => null;
+
     /// <summary>What the flows of a fault at a bus at a time are summed from, one after the other.</summary>
     public virtual IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds, Complex faultPu) =>
         throw new NotSupportedException($"{context.Method.Name} gives no branch currents over time; ask for those of an instant, or take MachineDecrement");

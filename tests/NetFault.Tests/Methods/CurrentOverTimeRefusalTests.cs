@@ -141,6 +141,30 @@ public class CurrentOverTimeRefusalTests
     }
 
     [Fact]
+    public void The_three_phases_add_to_nothing_and_the_worst_is_one_of_them()
+    {
+        var fault = new FaultStudy(TwoSources.Make(), Exact).At("BUS");
+        foreach (var t in new[] { 0.0, 0.004, 0.0073, 0.05 })
+        {
+            var phases = new[] { 20.0, -100.0, 140.0 }.Select(angle => fault.InstantaneousKa(t, angle)).ToList();
+            phases.Sum().Should().BeApproximately(0, 1e-9);
+            var worst = fault.WorstPhaseKa(t, 20);
+            phases.Should().Contain(one => Math.Abs(one - worst) < 1e-9);
+            Math.Abs(worst).Should().BeApproximately(phases.Max(Math.Abs), 1e-9);
+        }
+        var peak = fault.WorstPeak!;
+        Math.Abs(fault.WorstPhaseKa(peak.Seconds, peak.ClosingAngleDegrees + 120)).Should().BeApproximately(peak.Ka, 1e-5);
+    }
+
+    [Fact]
+    public void Flows_of_a_time_say_how_they_were_found()
+    {
+        var flows = new FaultStudy(Machine(), Exact).FlowsAtTime("T", 0.06);
+        (flows.Seconds, flows.Instant, flows.AcComponentRule).Should().Be((0.06, null, AcComponentRule.Exact));
+        flows.Source("G").IntoBusKa.Magnitude.Should().BeApproximately(new FaultStudy(Machine(), Exact).At("T").SymmetricalRmsKa(0.06), 1e-9);
+    }
+
+    [Fact]
     public void De_energised_buses_have_no_current_at_any_time()
     {
         var network = Machine().With(new Bus { Id = "DARK", NominalKv = 10 });

@@ -46,6 +46,8 @@ internal sealed class MachineDecrementAtWork : CurrentsOfMethod
     public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant) =>
         FlowBasis.Of(context.Networks.At(instant), context.Method.DrivingVoltagePu(context.Network.Buses[bus]));
 
+    public override AcComponentRule? AcRuleOfFlows => _method.AcComponentRule;
+
     public override IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds, Complex faultPu)
     {
         if (AcSolution?.For(faultPu) is not { } solution)
