@@ -36,7 +36,8 @@ catch (UsageException wrong)
     Console.Error.WriteLine(Usage);
     return 2;
 }
-catch (Exception known) when (known is NetworkFileException or MethodDataException or SingularNetworkException or IOException or UnauthorizedAccessException)
+catch (Exception known) when (known is NetworkFileException or MethodDataException or SingularNetworkException
+    or CurrentOverTimeException or IOException or UnauthorizedAccessException)
 {
     Console.Error.WriteLine(known.Message);
     return 1;

@@ -162,14 +162,47 @@ public sealed class BusFault
     {
         Guard.NotNegative(seconds);
         Guard.Finite(closingAngleDegrees);
-        if (_currents is null)
-            return 0.0;
-        return _currents.InstantaneousKa(seconds, closingAngleDegrees * Math.PI / 180.0) ?? throw new NotSupportedException(
-            $"{_context.Method.Name} gives no waveform; take MachineDecrement");
+        return _currents is null ? 0.0 : Waveform(_currents.InstantaneousKa(seconds, closingAngleDegrees * Math.PI / 180.0));
     }
 
     /// <summary>
-    /// A bound of the error of <see cref="SymmetricalRmsKa"/> and <see cref="DcComponentKa"/> at a time, relative to I″k: that of the quadrature,
+    /// The instantaneous current in kA of the worst of the three phases: the one that carries the most at that time, when the fault begins with the
+    /// voltage of one of them at the closing angle and of the others 120 degrees before and behind.
+    /// </summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where a rule has one.</param>
+    /// <param name="closingAngleDegrees">The closing angle of any of the phases in degrees; 0 is a voltage zero.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon; or the angle is not finite.</exception>
+    /// <exception cref="NotSupportedException">The method gives no waveform, as IEC 60909-0.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
+    public double WorstPhaseKa(double seconds, double closingAngleDegrees)
+    {
+        var worst = InstantaneousKa(seconds, closingAngleDegrees);
+        foreach (var shift in new[] { -120.0, 120.0 })
+        {
+            var other = InstantaneousKa(seconds, closingAngleDegrees + shift);
+            worst = Math.Abs(other) > Math.Abs(worst) ? other : worst;
+        }
+        return worst;
+    }
+
+    /// <summary>
+    /// The DC component in kA, with its sign, of the phase whose voltage is √2·U·sin(ωt + closing angle) when the fault begins: what
+    /// <see cref="InstantaneousKa"/> has beside the AC component √2·Iac·sin(ωt + closing angle − φ).
+    /// </summary>
+    /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where a rule has one.</param>
+    /// <param name="closingAngleDegrees">The closing angle in degrees; 0 is a voltage zero.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon; or the angle is not finite.</exception>
+    /// <exception cref="NotSupportedException">The method gives no waveform, as IEC 60909-0.</exception>
+    /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
+    public double DcComponentKa(double seconds, double closingAngleDegrees)
+    {
+        Guard.NotNegative(seconds);
+        Guard.Finite(closingAngleDegrees);
+        return _currents is null ? 0.0 : Waveform(_currents.DcOfPhaseKa(seconds, closingAngleDegrees * Math.PI / 180.0));
+    }
+
+    /// <summary>
+    /// A bound of the error of <see cref="SymmetricalRmsKa"/> and <see cref="DcComponentKa(double)"/> at a time, relative to I″k: that of the quadrature,
     /// found from the network's data before anything is solved (docs/current-over-time.md); 0 where closed formulas give both.
     /// </summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where a rule has one.</param>
@@ -194,6 +227,9 @@ public sealed class BusFault
     public override string ToString() => FormattableString.Invariant($"{BusId}: I\u2033k = {InitialSymmetricalKa:0.###} kA");
 
     internal static BusFault DeEnergised(StudyContext context, int bus) => new(context, bus);
+
+    private double Waveform(double? value) =>
+        value ?? throw new NotSupportedException($"{_context.Method.Name} gives no waveform; take MachineDecrement");
 
     private double? ZeroIf(FaultInstants instant) => _context.Method.CalculatedInstants.HasFlag(instant) ? 0.0 : null;
 }

@@ -28,6 +28,9 @@ public sealed class FaultFlows
     /// <summary>The time after the beginning of the fault to which these belong, in seconds; null where they are those of an instant.</summary>
     public double? Seconds { get; }
 
+    /// <summary>How the AC component was found, where these are the flows of a time; null where they are those of an instant.</summary>
+    public AcComponentRule? AcComponentRule { get; internal init; }
+
     /// <summary>The current into the fault in kA; 0 where the bus is de-energised.</summary>
     public Complex FaultCurrentKa { get; internal init; }
 

@@ -137,7 +137,7 @@ public sealed class FaultStudy
         var total = parts.Sum(part => part.Rule.Nodes.Length);
         var counter = new StepCounter(progress, total);
         foreach (var part in parts)
-            part.EveryNode(() => counter.Done("node of the quadrature"), cancellationToken);
+            part.SamplesOfEveryNode(() => counter.Done("node of the quadrature"), cancellationToken);
     }
 
     /// <summary>

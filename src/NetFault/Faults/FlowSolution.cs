@@ -43,7 +43,8 @@ internal sealed class FlowSolution
     /// <summary>The flows of a fault through an impedance in ohm, at a time.</summary>
     public FaultFlows AtTime(double seconds, Complex faultImpedanceOhm)
     {
-        foreach (var basis in _context.Currents.FlowsAtTime(_context, _bus, seconds))
+        var faultPu = faultImpedanceOhm / _context.BaseOhm(_network.Buses[_bus]);
+        foreach (var basis in _context.Currents.FlowsAtTime(_context, _bus, seconds, faultPu))
         {
             if (IsEnergised)
                 Add(basis, faultImpedanceOhm);
@@ -109,6 +110,7 @@ internal sealed class FlowSolution
         var branches = Branches(injections);
         return new FaultFlows(_network.Buses[_bus].Id, instant, seconds)
         {
+            AcComponentRule = seconds is null ? null : _context.Currents.AcRuleOfFlows,
             FaultCurrentKa = _fault * _context.BaseKa(_network.Buses[_bus]),
             SolutionResidual = _residual,
             Voltages = Voltages(),

@@ -41,6 +41,9 @@ internal abstract class FaultCurrents
     /// <summary>The current of a phase in kA at a closing angle in radians; null where the method gives no waveform.</summary>
     public virtual double? InstantaneousKa(double seconds, double closingAngle) => null;
 
+    /// <summary>The DC component of that phase; null where the method gives no waveform.</summary>
+    public virtual double? DcOfPhaseKa(double seconds, double closingAngle) => null;
+
     /// <summary>The largest instantaneous current over time and closing angle; null where the method gives no waveform.</summary>
     public virtual PeakCurrent? WorstPeak => null;
 
@@ -81,9 +84,12 @@ internal abstract class CurrentsOfMethod
     /// <summary>What the flows of a fault at a bus are found from.</summary>
     public abstract FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant);
 
+    /// <summary>How the AC component of these flows is found.</summary>
+    public virtual AcComponentRule? AcRuleOfFlows => null;
+
     /// <summary>What the flows of a fault at a bus at a time are summed from, one after the other.</summary>
-    public virtual IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds) => throw new NotSupportedException(
-        $"{context.Method.Name} gives no branch currents over time; ask for those of an instant, or take MachineDecrement");
+    public virtual IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds, Complex faultPu) =>
+        throw new NotSupportedException($"{context.Method.Name} gives no branch currents over time; ask for those of an instant, or take MachineDecrement");
 
     /// <summary>The rules for the DC component beside the exact one.</summary>
     public virtual DcRuleComparison CompareDcRules(StudyContext context, double seconds, CancellationToken cancellation) =>

@@ -35,6 +35,18 @@ internal static class NetworkSuite
         return 0;
     }
 
+    /// <summary>The currents over time alone.</summary>
+    public static int RunOverTime(string[] args)
+    {
+        var folder = args.FirstOrDefault() ?? Environment.GetEnvironmentVariable("NETFAULT_NETWORKS") ?? Path.Combine("..", "shared", "networks");
+        var table = new ResultTable();
+        if (TryRead(folder, "case10000_goc") is { } large)
+            OverTimeSuite.Run("case10000_goc", large, table);
+        OverTimeSuite.Run("generated, 10,000 buses", Grids.Meshed(125, 80), table);
+        table.Print(Console.Out);
+        return 0;
+    }
+
     private static NetFault.Network? TryRead(string folder, string name)
     {
         var path = Path.Combine(folder, name + ".yaml");

@@ -102,19 +102,20 @@ internal sealed class RandomDecayPlants
     });
 
     /// <summary>
-    /// A passive one: the two impedances of the low-voltage winding differ by less than that of the other pair, all on one rating. The
-    /// medium-voltage leg may be negative.
+    /// A passive one: the two impedances of the low-voltage winding differ by less than that of the other pair, all on one rating, and so do the
+    /// resistances. The medium-voltage leg may be negative.
     /// </summary>
     private void AddThreeWindings(Bus hv, Bus mv, Bus lv)
     {
         double low = PowerMva(lv), high = low + Between(5, 40), medium = low + Between(5, 40);
-        double hvMv = Between(8, 12), hvLv = Between(6, 9);
+        double hvMv = Between(8, 12), hvLv = Between(6, 9), part = Between(0.1, 0.8), onLow = low / Math.Min(high, medium);
+        double hvMvLosses = Between(0.2, 0.6), hvLvLosses = Between(0.3, 0.6);
         _builder.Add(new ThreeWindingTransformer
         {
             Id = Id(), Hv = hv.Id, Mv = mv.Id, Lv = lv.Id, RatedMva = new WindingValues(high, medium, low),
             RatedKv = new WindingValues(hv.NominalKv * Between(0.97, 1.03), mv.NominalKv * Between(0.97, 1.03), lv.NominalKv),
-            ShortCircuitVoltagePercent = new WindingPairValues(hvMv, hvLv, hvLv - Between(0.1, 0.8) * Math.Min(5, hvMv * low / Math.Min(high, medium))),
-            ResistivePercent = new WindingPairValues(Between(0.2, 0.6), Between(0.2, 0.6), Between(0.2, 0.6)),
+            ShortCircuitVoltagePercent = new WindingPairValues(hvMv, hvLv, hvLv - part * Math.Min(5, hvMv * onLow)),
+            ResistivePercent = new WindingPairValues(hvMvLosses, hvLvLosses, hvLvLosses - part * Math.Min(0.25, hvMvLosses * onLow)),
         });
     }
 

@@ -1,3 +1,5 @@
+using System.Numerics;
+
 namespace NetFault;
 
 /// <summary>The machine decrement at work on one study: the decay over time is found when it is first asked for, once for all faults.</summary>
@@ -44,9 +46,11 @@ internal sealed class MachineDecrementAtWork : CurrentsOfMethod
     public override FlowBasis FlowsAt(StudyContext context, int bus, FaultInstant instant) =>
         FlowBasis.Of(context.Networks.At(instant), context.Method.DrivingVoltagePu(context.Network.Buses[bus]));
 
-    public override IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds)
+    public override AcComponentRule? AcRuleOfFlows => _method.AcComponentRule;
+
+    public override IEnumerable<FlowBasis> FlowsAtTime(StudyContext context, int bus, double seconds, Complex faultPu)
     {
-        if (AcSolution is not { } solution)
+        if (AcSolution?.For(faultPu) is not { } solution)
             return [FlowsAt(context, bus, FaultInstant.Initial)];
         var angle = AngleOf(seconds);
         var part = solution.PartAt(angle);

@@ -57,6 +57,9 @@ internal sealed class MachineDecrementCurrents : FaultCurrents
         AcOfDecay is { } ac ? ac.WeightsAt(AngleOf(seconds, ac)).AcError : 0.0,
         DcOfDecay is { } dc ? dc.WeightsAt(AngleOf(seconds, dc)).DcError : 0.0);
 
+    public override double? DcOfPhaseKa(double seconds, double closingAngle) =>
+        Waveform.DcOfPhaseKa(AngleOf(seconds, DcOfDecay), closingAngle);
+
     private CurrentWaveform Waveform => new(_context.Omega, Ac, Dc);
 
     private MachineDecrement Method => (MachineDecrement)_context.Method;

@@ -16,7 +16,10 @@ internal sealed class CurrentWaveform(double omega, Func<double, Complex> ac, Fu
 
     /// <summary>The current of a phase in kA.</summary>
     public double InstantaneousKa(double angle, double closingAngle) =>
-        PerUnit.Sqrt2 * ((Ac(angle) + Dc(angle)) * Complex.FromPolarCoordinates(1.0, angle + closingAngle)).Imaginary;
+        OfPhase(Ac(angle) + Dc(angle), angle + closingAngle);
+
+    /// <summary>The DC component of a phase in kA.</summary>
+    public double DcOfPhaseKa(double angle, double closingAngle) => OfPhase(Dc(angle), angle + closingAngle);
 
     /// <summary>
     /// The largest instantaneous current over time and closing angle: √2·max|AC + DC|, for at each time there is a closing angle that brings it
@@ -37,6 +40,8 @@ internal sealed class CurrentWaveform(double omega, Func<double, Complex> ac, Fu
 
     /// <summary>The first peak is about half a cycle after the beginning; no later one is higher.</summary>
     private const double FirstAngle = 0.2, LastAngle = 5.5;
+
+    private static double OfPhase(Complex rms, double angle) => PerUnit.Sqrt2 * (rms * Complex.FromPolarCoordinates(1.0, angle)).Imaginary;
 
     private static double Magnitude(ChebyshevPair components, double angle) => Complex.Abs(Current(components, angle));
 

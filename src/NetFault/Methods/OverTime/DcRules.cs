@@ -36,7 +36,7 @@ internal sealed class DcRules
     public static DcRuleComparison At(StudyContext context, MachineDecrementAtWork work, double seconds, CancellationToken cancellation)
     {
         foreach (var part in work.ExactSolution.PartsUpTo(work.AngleOf(seconds)))
-            part.EveryNode(null, cancellation);
+            part.SamplesOfEveryNode(null, cancellation);
         var rules = new DcRules(context, work, seconds);
         var buses = new List<BusDcComparison>();
         for (var bus = 0; bus < context.Network.Buses.Count; bus++)

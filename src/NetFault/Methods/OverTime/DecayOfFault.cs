@@ -16,7 +16,7 @@ internal sealed class DecayOfFault
     /// <param name="seen">The place of the fault and the fault's own impedance.</param>
     public DecayOfFault(DecaySolution solution, in SeenImpedances seen)
     {
-        _solution = solution;
+        _solution = solution.For(seen.FaultPu);
         _node = seen.Node;
         _faultPu = seen.FaultPu;
         _through = seen.Through;
@@ -47,29 +47,14 @@ internal sealed class DecayOfFault
         var sum = Complex.Zero;
         if (_own is { } own)
         {
-            var samples = own.GetOrAdd(part, Samples);
+            var samples = own.GetOrAdd(part, one => _through?.Samples(one) ?? one.SamplesOf(_node, _faultPu));
             for (var q = 0; q < weights.Length; q++)
                 sum += weights[q] * samples[q];
             return sum;
         }
-        var nodes = part.Rule.Nodes;
-        var impedances = part.EveryNode();
+        var everyNode = part.SamplesOfEveryNode();
         for (var q = 0; q < weights.Length; q++)
-            sum += weights[q] / (nodes[q] * impedances[q][_node]);
+            sum += weights[q] * everyNode[q][_node];
         return sum;
-    }
-
-    /// <summary>F at the nodes of the quadrature, for a fault that was solved alone.</summary>
-    private Complex[] Samples(DecayPart part)
-    {
-        if (_through is { } through)
-            return through.Samples(part);
-        var samples = part.ImpedancesOf(_node);
-        for (var q = 0; q < samples.Length; q++)
-        {
-            var node = part.Rule.Nodes[q];
-            samples[q] = 1.0 / (node * (samples[q] + _solution.VariantAt(node).OfFault(_faultPu)));
-        }
-        return samples;
     }
 }

@@ -13,7 +13,7 @@ internal sealed class DecayPart
     private readonly Lazy<QuadratureRule> _rule;
     private readonly ConcurrentDictionary<double, NodeWeights> _weights = new();
     private readonly object _gate = new();
-    private volatile Complex[][]? _everyNode;
+    private volatile Complex[][]? _samples;
 
     public DecayPart(DecaySolution solution, DecayWindow window)
     {
@@ -42,21 +42,35 @@ internal sealed class DecayPart
         return weights;
     }
 
-    /// <summary>Zkk per unit at each node of the quadrature, by node of the circuit; solved by the first who asks.</summary>
+    /// <summary>
+    /// F = 1/(p·Zkk(p)) at each node p of the quadrature, by node of the circuit, for bolted faults; solved by the first who asks.
+    /// </summary>
     /// <param name="step">Told after each node of the quadrature; may be null.</param>
     /// <param name="cancellation">Stops the work between nodes.</param>
-    public Complex[][] EveryNode(Action? step = null, CancellationToken cancellation = default)
+    public Complex[][] SamplesOfEveryNode(Action? step = null, CancellationToken cancellation = default)
     {
-        if (_everyNode is { } known)
+        if (_samples is { } known)
             return known;
         lock (_gate)
-            return _everyNode ??= OnAllCores(step, cancellation, point => _solution.NetworkAt(point).DrivingPoints.Impedances);
+        {
+            return _samples ??= OnAllCores(step, cancellation, point =>
+                Array.ConvertAll(_solution.NetworkAt(point).DrivingPoints.Impedances, z => 1.0 / (point * z)));
+        }
     }
 
-    /// <summary>Zkk per unit of one node of the circuit at each node of the quadrature.</summary>
-    public Complex[] ImpedancesOf(int node) => _everyNode is { } known
-        ? Array.ConvertAll(known, impedances => impedances[node])
-        : OnAllCores(null, CancellationToken.None, point => _solution.NetworkAt(point).Column(node, out _)[node]);
+    /// <summary>F at each node of the quadrature, for one node of the circuit and a fault through an impedance.</summary>
+    /// <param name="node">The node with the fault.</param>
+    /// <param name="faultPu">The fault's own impedance per unit at rated frequency.</param>
+    public Complex[] SamplesOf(int node, Complex faultPu)
+    {
+        if (_samples is { } known)
+        {
+            return Array.ConvertAll(Enumerable.Range(0, known.Length).ToArray(), q =>
+                1.0 / (1.0 / known[q][node] + Rule.Nodes[q] * _solution.VariantAt(Rule.Nodes[q]).OfFault(faultPu)));
+        }
+        return OnAllCores(null, CancellationToken.None, point =>
+            1.0 / (point * (_solution.NetworkAt(point).Column(node, out _)[node] + _solution.VariantAt(point).OfFault(faultPu))));
+    }
 
     /// <summary>Something of the network at each node of the quadrature; the network itself is not kept.</summary>
     public T[] OfEveryNode<T>(Func<SolvedNetwork, T> work) => OnAllCores(null, CancellationToken.None, point => work(_solution.NetworkAt(point)));

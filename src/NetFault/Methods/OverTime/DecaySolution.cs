@@ -13,6 +13,8 @@ internal sealed class DecaySolution
     private readonly double _errorLimit;
     private readonly double _horizonAngle;
     private readonly OperationalSource?[] _sources;
+    private readonly Lazy<PoleLimits> _limits;
+    private readonly Lazy<DecaySolution> _throughResistance;
     private readonly Lazy<PoleRegion> _region;
     private readonly DecayPart[] _parts;
 
@@ -20,17 +22,27 @@ internal sealed class DecaySolution
     /// <param name="quasiStatic">Whether reactances are kept at rated frequency.</param>
     /// <param name="horizonAngle">ω times the horizon.</param>
     /// <param name="errorLimit">The largest bound of the error that is accepted.</param>
-    public DecaySolution(StudyNetworks networks, bool quasiStatic, double horizonAngle, double errorLimit)
+    /// <param name="faultRatio">The largest R/X of the fault's own impedance.</param>
+    public DecaySolution(StudyNetworks networks, bool quasiStatic, double horizonAngle, double errorLimit, double faultRatio = 0.0)
     {
         _networks = networks;
         _quasiStatic = quasiStatic;
         _horizonAngle = horizonAngle;
         _errorLimit = errorLimit;
         _sources = OperationalSources.Of(networks.Circuit, log: null);
-        _region = new(() => new PoleRegion(NetworkPoles.LimitsOf(networks, _sources, quasiStatic), quasiStatic));
+        _limits = new(() => NetworkPoles.LimitsOf(networks, _sources, quasiStatic).WithRatio(faultRatio));
+        _throughResistance = new(() => new DecaySolution(networks, quasiStatic, horizonAngle, errorLimit, double.PositiveInfinity));
+        _region = new(() => new PoleRegion(_limits.Value, quasiStatic));
         var windows = quasiStatic ? DecayWindow.QuasiStatic : DecayWindow.Exact;
         _parts = windows.Select(window => new DecayPart(this, window)).ToArray();
     }
+
+    /// <summary>
+    /// The solution for a fault through an impedance. One of larger R/X than all of the network moves the poles' limits; a rule for it takes no
+    /// R/X for granted.
+    /// </summary>
+    public DecaySolution For(Complex faultPu) =>
+        faultPu == Complex.Zero || faultPu.Real <= _limits.Value.LargestResistanceRatio * faultPu.Imaginary ? this : _throughResistance.Value;
 
     /// <summary>The window's part for a time.</summary>
     /// <param name="angle">ω·t, within the horizon.</param>
@@ -63,16 +75,29 @@ internal sealed class DecaySolution
     /// <exception cref="CurrentOverTimeException">None does.</exception>
     public QuadratureRule RuleOf(DecayWindow window)
     {
-        var best = double.PositiveInfinity;
-        QuadratureRule? last = null;
-        foreach (var table in window.Tables)
+        for (var i = 0; ; i++)
         {
-            last = new QuadratureRule(table, _region.Value);
-            best = window.Probes(_horizonAngle).Max(angle => last.At(angle).Error);
-            if (best <= WantedError)
-                return last;
+            var rule = new QuadratureRule(window.Tables[i], _region.Value);
+            var isLast = i == window.Tables.Count - 1;
+            var error = ErrorOf(rule, window, isLast ? double.PositiveInfinity : WantedError);
+            if (error <= WantedError || (isLast && error <= _errorLimit))
+                return rule;
+            if (isLast)
+                throw TooLarge(error);
         }
-        return best <= _errorLimit && last is not null ? last : throw TooLarge(best);
+    }
+
+    /// <summary>The largest error bound of a rule in its window, or one above what is good enough to go on.</summary>
+    private double ErrorOf(QuadratureRule rule, DecayWindow window, double enough)
+    {
+        var worst = 0.0;
+        foreach (var angle in window.Probes(_horizonAngle))
+        {
+            worst = Math.Max(worst, rule.At(angle).Error);
+            if (worst > enough)
+                break;
+        }
+        return worst;
     }
 
     /// <summary>Refuses a time at which the bound is above what is accepted, which the times that were probed did not show.</summary>
@@ -87,5 +112,5 @@ internal sealed class DecaySolution
 
     private CurrentOverTimeException TooLarge(double bound) => CurrentOverTimeException.Because(
         FormattableString.Invariant($"the error bound is {bound:0.#e+0} of I″k, above the {_errorLimit:0.#e+0} that MachineDecrement.DecayErrorLimit accepts"),
-        "raise DecayErrorLimit; or look at the largest R/X and the shortest time constants of the network, which make it so large");
+        $"raise DecayErrorLimit, shorten HorizonSeconds, or look at what spreads the poles so far: {_limits.Value}");
 }

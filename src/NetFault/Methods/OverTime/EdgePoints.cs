@@ -8,15 +8,23 @@ internal sealed class EdgePoints(bool quasiStatic)
     /// <summary>Points nearer to the middle of a cluster than this are as good as in it: nothing moves there within the longest window.</summary>
     private const double Middle = 1e-7;
 
-    private readonly List<Complex> _points = [];
+    private readonly List<Complex> _ac = [];
+    private readonly List<Complex> _dc = [];
 
-    /// <summary>Adds a point.</summary>
-    public void Add(Complex point) => _points.Add(point);
+    /// <summary>Adds a point to the cluster in which it lies.</summary>
+    public void Add(Complex point, Clusters wanted = Clusters.Both)
+    {
+        var isAc = quasiStatic || point.Imaginary > -0.5;
+        if (isAc && wanted.HasFlag(Clusters.Ac))
+            _ac.Add(point);
+        else if (!isAc && wanted.HasFlag(Clusters.Dc) && point.Real >= -PoleRegion.LargestDcRate)
+            _dc.Add(point);
+    }
 
     /// <summary>
     /// Adds the roots of s·A(p) + B(p) = 0 with the coefficients of A and B from the constant up, s = p + j, or j in quasi-static networks.
     /// </summary>
-    public void AddRootsOf(double[] atS, double[] alone)
+    public void AddRootsOf(double[] atS, double[] alone, Clusters wanted = Clusters.Both)
     {
         var degree = quasiStatic ? atS.Length - 1 : atS.Length;
         var polynomial = new Complex[degree + 1];
@@ -26,17 +34,15 @@ internal sealed class EdgePoints(bool quasiStatic)
             if (!quasiStatic)
                 polynomial[i + 1] += atS[i];
         }
-        _points.AddRange(Roots(polynomial));
+        foreach (var root in Roots(polynomial))
+            Add(root, wanted);
     }
 
     /// <summary>The points about p = 0.</summary>
-    public Complex[] Ac(double pointsAnEFold) =>
-        Thinned(_points.Where(point => quasiStatic || point.Imaginary > -0.5), Complex.Zero, pointsAnEFold);
+    public Complex[] Ac(double pointsAnEFold) => Thinned(_ac, Complex.Zero, pointsAnEFold);
 
     /// <summary>The points about p = −j that are resolved.</summary>
-    public Complex[] Dc(double pointsAnEFold) => quasiStatic
-        ? []
-        : Thinned(_points.Where(point => point.Imaginary <= -0.5 && point.Real >= -PoleRegion.LargestDcRate), -Complex.ImaginaryOne, pointsAnEFold);
+    public Complex[] Dc(double pointsAnEFold) => Thinned(_dc, -Complex.ImaginaryOne, pointsAnEFold);
 
     private static Complex[] Thinned(IEnumerable<Complex> points, Complex middle, double pointsAnEFold)
     {
@@ -87,4 +93,18 @@ internal sealed class EdgePoints(bool quasiStatic)
         roots[index] -= step;
         return Complex.Abs(step) / (Complex.Abs(roots[index]) + 1e-9);
     }
+}
+
+/// <summary>The clusters of poles.</summary>
+[Flags]
+internal enum Clusters
+{
+    /// <summary>About p = 0: the AC component.</summary>
+    Ac = 1,
+
+    /// <summary>About p = −j: the DC component.</summary>
+    Dc = 2,
+
+    /// <summary>Both.</summary>
+    Both = Ac | Dc,
 }

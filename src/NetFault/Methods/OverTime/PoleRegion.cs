@@ -61,9 +61,12 @@ internal sealed class PoleRegion
         var external = External(double.PositiveInfinity, density).ToList();
         foreach (var machine in _limits.Machines)
             AddMachine(edges, machine, external);
-        external = External(_limits.MotorsSee, density).ToList();
+        var seenByMotors = External(_limits.MotorsSee, density).ToList();
         foreach (var rate in _limits.MotorRates)
-            AddMotor(edges, rate, external);
+        {
+            AddMotor(edges, rate, seenByMotors, Clusters.Ac);
+            AddMotor(edges, rate, external, Clusters.Dc);
+        }
         return edges;
     }
 
@@ -97,13 +100,16 @@ internal sealed class PoleRegion
         }
     }
 
-    /// <summary>A motor behind w: (ρ + s)·(p + g) + (x·s + μ)·p = 0. What a motor sees is bounded, so w is.</summary>
-    private void AddMotor(EdgePoints edges, double rate, List<Complex> external)
+    /// <summary>
+    /// A motor behind w: (ρ + s)·(p + g) + (x·s + μ)·p = 0. What motors see is bounded, so that their AC poles are; a DC pole is that of the path
+    /// the less shifted the longer it is.
+    /// </summary>
+    private void AddMotor(EdgePoints edges, double rate, List<Complex> external, Clusters wanted)
     {
         foreach (var rho in new[] { 0.0, _limits.LargestMotorResistanceRatio }.Distinct())
         {
             foreach (var w in external)
-                edges.AddRootsOf(atS: [rate, 1.0 + w.Imaginary], alone: [rho * rate, rho + w.Real]);
+                edges.AddRootsOf(atS: [rate, 1.0 + w.Imaginary], alone: [rho * rate, rho + w.Real], wanted);
         }
     }
 
@@ -156,4 +162,16 @@ internal sealed record PoleLimits
 
     /// <summary>The largest impedance that the motors together see towards the rest of the network, over their own.</summary>
     public double MotorsSee { get; init; }
+
+    /// <summary>The limits with one more element of an R/X.</summary>
+    public PoleLimits WithRatio(double ratio) => this with { LargestResistanceRatio = Math.Max(ratio, LargestResistanceRatio) };
+
+    /// <summary>The limits for people.</summary>
+    public override string ToString()
+    {
+        var rates = Machines.SelectMany(machine => new[] { machine.TransientRate, machine.SubtransientRate }).Concat(MotorRates).ToList();
+        return FormattableString.Invariant($"R/X from {SmallestResistanceRatio:0.####} to {LargestResistanceRatio:0.###}")
+            + FormattableString.Invariant($", time constants of machines from {1.0 / rates.DefaultIfEmpty().Max():0.#}/ω")
+            + (MotorsSee > 0.0 ? FormattableString.Invariant($", motors behind up to {MotorsSee:0.##} times their impedance") : string.Empty);
+    }
 }
