@@ -5,8 +5,8 @@ namespace NetFault;
 
 /// <summary>
 /// What the currents through one device become when the reactance of one reactor changes, without a factorisation: with Δ the change of its admittance
-/// and u = e_a − e_b, Z′ = Z − (Z·u)·(Δ/(1 + Δ·uᵀZ·u))·(Z·u)ᵀ (J. Sherman, W. J. Morrison 1950). Two solves for each network of the method serve all
-/// reactances.
+/// and u = e_a − e_b, Z′ = Z − (Z·u)·(Δ/(1 + Δ·uᵀZ·u))·(Z·u)ᵀ (J. Sherman, W. J. Morrison 1950). Three solves for each network of the method serve
+/// all reactances.
 /// </summary>
 internal sealed class ReactorColumns
 {

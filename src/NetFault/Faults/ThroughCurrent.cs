@@ -68,7 +68,7 @@ public sealed class ThroughCurrent
     /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>
     public double PeakKa => _currents?.PeakKa ?? 0.0;
 
-    /// <summary>The DC component through the device, by the rule of <see cref="BusFault.DcComponentKa"/>.</summary>
+    /// <summary>The DC component through the device, by the rule of <see cref="BusFault.DcComponentKa(double)"/>.</summary>
     /// <param name="seconds">The time after the beginning of the fault in seconds, not negative; within the horizon where a rule has one.</param>
     /// <exception cref="ArgumentOutOfRangeException">The time is negative, not finite or beyond the method's horizon.</exception>
     /// <exception cref="CurrentOverTimeException">The current over time cannot be found within the error that the method accepts.</exception>

@@ -26,7 +26,8 @@ public class DutyReportTests
         {
             check.Devices.Select(one => (one.Section, one.Id)).Should().BeEquivalentTo(
                 check.Study.Network.Elements.OfType<RatedDevice>().Select(one => (one.Section, one.Id)));
-            check.Devices.Select(one => one.Verdict).Should().BeInAscendingOrder(verdict => verdict == DutyVerdict.Pass ? 2 : verdict == DutyVerdict.Fail ? 0 : 3);
+            check.Devices.Select(one => DeviceDuty.Rank(one.WorstDuty)).Should().BeInAscendingOrder();
+            check.Devices.Where(one => one.Verdict == DutyVerdict.Fail).Select(one => one.MarginPercent).Should().BeInAscendingOrder();
         }
     }
 
