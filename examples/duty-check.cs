@@ -11,7 +11,8 @@
 // --method decrement (default) takes --prefault and --x-over-r complex|separate; --method iec, which is IEC 60909-0, takes --x-over-r a|b|c, the
 // standard's three ways to the factor kappa; --method ieee, which is IEEE C37.010, takes --prefault and --current e/z|e/x. --duration is that of
 // the short circuit for the thermal duties, --marginal the margin in percent below which a duty that passes is marked, --dc current|percent|total how the
-// DC component is held against the rating, --low-voltage icu|ics which rating of IEC 60947-2 counts.
+// DC component is held against the rating, --low-voltage icu|ics which rating of IEC 60947-2 counts. --reactor ELEMENT looks, for each device that
+// fails, for the smallest series reactor between that branch, source or closed coupler and its bus.
 //
 // Exit codes: 0 no device fails, 1 the network cannot be read or solved, 2 wrong arguments, 3 at least one device fails.
 
@@ -21,7 +22,7 @@ using NetFault;
 
 const string Usage =
     "usage: dotnet run examples/duty-check.cs -- NETWORK.yaml [--csv FILE] [--json FILE] [--method decrement|iec|ieee] [--current e/z|e/x]"
-    + " [--x-over-r complex|separate|a|b|c] [--prefault PU] [--duration SECONDS] [--marginal PERCENT] [--dc current|percent|total] [--low-voltage icu|ics]";
+    + " [--x-over-r complex|separate|a|b|c] [--prefault PU] [--duration SECONDS] [--marginal PERCENT] [--dc current|percent|total] [--low-voltage icu|ics] [--reactor ELEMENT]";
 
 Console.OutputEncoding = Encoding.UTF8;
 try
@@ -35,7 +36,7 @@ catch (UsageException wrong)
     return 2;
 }
 catch (Exception known) when (known is NetworkFileException or MethodDataException or SingularNetworkException or CurrentOverTimeException
-    or IOException or UnauthorizedAccessException)
+    or UnknownIdException or IOException or UnauthorizedAccessException)
 {
     Console.Error.WriteLine(known.Message);
     return 1;
@@ -60,15 +61,29 @@ static int Run(Arguments arguments)
         using var json = File.Create(jsonPath);
         DutyReport.WriteJson(json, check);
     }
+    if (arguments.Reactor is { } place)
+        PrintReactors(check, place);
     return check.HasFailure ? 3 : 0;
 }
 
+static void PrintReactors(DutyCheck check, string place)
+{
+    Console.WriteLine($"\nThe smallest series reactor at {place} that brings a device within its ratings, confirmed by a full solution:");
+    foreach (var device in check.Devices.Where(one => one.Verdict == DutyVerdict.Fail))
+    {
+        var proposal = check.SmallestReactor(device, place);
+        Console.WriteLine($"{device.Id}: {proposal}");
+        if (proposal.After is { } after)
+            Console.WriteLine($"   by the low-rank formula {proposal.ByFormula!.Required:0.######}, by the full solution {proposal.ByFullSolution!.Required:0.######} {proposal.ByFullSolution.Unit}; with it {after.Count(DutyVerdict.Fail)} devices fail");
+    }
+}
+
 /// <summary>What the command line asks for.</summary>
-sealed record Arguments(string NetworkPath, FaultMethod Method, DutyOptions Duty, string? CsvPath, string? JsonPath)
+sealed record Arguments(string NetworkPath, FaultMethod Method, DutyOptions Duty, string? CsvPath, string? JsonPath, string? Reactor)
 {
     private static readonly string[] Known =
     [
-        "--csv", "--json", "--method", "--current", "--x-over-r", "--prefault", "--duration", "--marginal", "--dc", "--low-voltage",
+        "--csv", "--json", "--method", "--current", "--x-over-r", "--prefault", "--duration", "--marginal", "--dc", "--low-voltage", "--reactor",
     ];
 
     public static Arguments Parse(string[] args)
@@ -89,7 +104,7 @@ sealed record Arguments(string NetworkPath, FaultMethod Method, DutyOptions Duty
         if (paths.Count != 1 || paths[0].Length == 0)
             throw new UsageException($"one network file is needed; given: {(paths.Count == 0 ? "none" : string.Join(", ", paths))}");
         string? csvPath = options.GetValueOrDefault("--csv"), jsonPath = options.GetValueOrDefault("--json");
-        return new Arguments(paths[0], MethodOf(options), DutyOf(options), csvPath, jsonPath);
+        return new Arguments(paths[0], MethodOf(options), DutyOf(options), csvPath, jsonPath, options.GetValueOrDefault("--reactor"));
     }
 
     private static FaultMethod MethodOf(Dictionary<string, string> options)

@@ -24,7 +24,7 @@ public sealed class DeviceDuty
     /// <summary>Its section of the network file, such as <c>circuit_breakers</c>.</summary>
     public string Section => Device.Section;
 
-    /// <summary>Its id.</summary>
+    /// <summary>Its id, unique in its section.</summary>
     public string Id => Device.Id;
 
     /// <summary>The bus at which it stands.</summary>

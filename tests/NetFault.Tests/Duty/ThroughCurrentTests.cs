@@ -29,6 +29,8 @@ public class ThroughCurrentTests
         {
             var network = RandomNetworks.Make(seed, buses);
             var study = new FaultStudy(network, method);
+            if (!HasCurrentOverTime(study))
+                return;
             foreach (var (bus, element) in Terminals(network).Where((_, i) => (i + seed) % 5 == 0))
             {
                 if (!IsThere(network, bus, element))
@@ -48,6 +50,33 @@ public class ThroughCurrentTests
             }
         }, iter: 15);
     }
+
+    [Theory]
+    [MemberData(nameof(Methods))]
+    public void A_check_of_a_breaker_at_every_terminal_finds_the_larger_of_the_two_currents_of_each(string name) =>
+        RandomNetworks.Cases(25).Sample((seed, buses) =>
+        {
+            var network = name == "iec" ? IecRandomNetworks.Make(seed, buses, equalRatios: true) : RandomNetworks.Make(seed, buses);
+            var breakers = Terminals(network).Select((one, i) => Breaker(one.Bus, one.Element) with
+            {
+                Id = $"CB{i}", ShortCircuitBreakingCurrentKa = 40, MinimumOpeningTimeSeconds = 0.04,
+            }).Where(one => network.Find<Bus>(one.Bus).NominalKv > 1).ToArray<NetworkElement>();
+            var study = new FaultStudy(network.With(breakers), MethodOf(name));
+            if (!HasCurrentOverTime(study))
+                return;
+            var check = DutyCheck.Of(study);
+            check.Devices.Should().HaveCount(breakers.Length);
+            foreach (var device in check.Devices.Where(one => one.Verdict != DutyVerdict.NoCurrent && !one.Remarks.Any(remark => remark.Contains("closed"))))
+            {
+                var currents = study.ThroughCurrents((CircuitBreaker)device.Device);
+                var peak = Math.Max(currents.AtBus.PeakKa, currents.BeyondDevice.PeakKa);
+                var required = device.Duties.Single(one => one.Kind == DutyKind.Making).Required!.Value;
+                // Inside power station units the check takes the larger of two rules.
+                required.Should().BeGreaterThanOrEqualTo(peak * (1 - 1e-6));
+                if (name != "iec")
+                    required.Should().BeApproximately(peak, 1e-6 * peak);
+            }
+        }, iter: 12);
 
     private static void AssertAll(Network network, FaultMethod method, int seed)
     {
@@ -99,6 +128,8 @@ public class ThroughCurrentTests
         {
             var network = RandomNetworks.Make(seed, buses);
             var study = new FaultStudy(network, method);
+            if (!HasCurrentOverTime(study))
+                return;
             foreach (var (bus, element) in Terminals(network).Where((one, i) => (i + seed) % 7 == 0 && IsThere(network, one.Bus, one.Element)))
             {
                 var through = study.ThroughCurrents(Breaker(bus, element));
@@ -119,6 +150,20 @@ public class ThroughCurrentTests
     {
         var admittance = study.AdmittanceMatrix().Diagonal().Select(Complex.Abs).DefaultIfEmpty().Max();
         return 1e-13 * admittance * study.Network.BaseMva / (Math.Sqrt(3) * study.Network.Find<Bus>(bus).NominalKv) + 1e-300;
+    }
+
+    /// <summary>Some generated networks have negative reactances in their star equivalents that the current over time is refused for.</summary>
+    private static bool HasCurrentOverTime(FaultStudy study)
+    {
+        try
+        {
+            study.SolveOverTime();
+            return true;
+        }
+        catch (CurrentOverTimeException)
+        {
+            return false;
+        }
     }
 
     private static FaultMethod MethodOf(string name) => name switch
