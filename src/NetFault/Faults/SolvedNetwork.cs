@@ -66,14 +66,6 @@ internal sealed class SolvedNetwork
         return column;
     }
 
-    /// <summary>The voltages of all nodes for currents into them, per unit.</summary>
-    public Complex[] Solve(Complex[] currents)
-    {
-        var voltages = (Complex[])currents.Clone();
-        _matrix.Guarded(() => _factor.SolveRefined(Values.Diagonal, Values.OffDiagonal, voltages, new SolveScratch(_factor.Order)));
-        return voltages;
-    }
-
     /// <summary>
     /// In a network of reactances alone, the negative eigenvalues of the matrix of the susceptances 1/x: by J. J. Sylvester's law of inertia as
     /// many as negative pivots. Null where pivots had to be shifted, so that they do not tell.

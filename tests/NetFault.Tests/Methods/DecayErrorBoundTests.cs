@@ -36,7 +36,7 @@ public class DecayErrorBoundTests
                 fault.SymmetricalRmsKa(t).Should().BeApproximately(oracle.AcRmsKa(t), most, $"AC at {bus} at {t} s");
                 (fault.DcComponentKa(t) / Math.Sqrt(2)).Should().BeApproximately(oracle.DcEnvelopeKa(t) / Math.Sqrt(2), most, $"DC at {bus} at {t} s");
             }
-        }, iter: 15);
+        }, iter: 12);
     }
 
     [Fact]

@@ -108,7 +108,7 @@ internal sealed class DecaySolution
     }
 
     /// <summary>Quasi-static decay is cheap to have nearly to rounding; the inductances' transients are held to what was asked for.</summary>
-    private double WantedError => _quasiStatic ? Math.Min(_errorLimit, 1e-9) : 0.7 * _errorLimit;
+    private double WantedError => _quasiStatic ? Math.Min(_errorLimit, 1e-9) : 0.4 * _errorLimit;
 
     private CurrentOverTimeException TooLarge(double bound) => CurrentOverTimeException.Because(
         FormattableString.Invariant($"the error bound is {bound:0.#e+0} of I″k, above the {_errorLimit:0.#e+0} that MachineDecrement.DecayErrorLimit accepts"),

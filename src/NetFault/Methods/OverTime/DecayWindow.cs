@@ -37,7 +37,7 @@ internal sealed record DecayWindow(double FirstAngle, double LastAngle, IReadOnl
     /// <summary>Some values of ω·t of the window up to a horizon, close enough to tell how well a table serves it.</summary>
     public IEnumerable<double> Probes(double horizonAngle)
     {
-        const int count = 12;
+        const int count = 16;
         var last = Math.Min(LastAngle, horizonAngle);
         var first = FirstAngle > 0.0 ? FirstAngle : Math.Min(0.05, last);
         if (FirstAngle <= 0.0)

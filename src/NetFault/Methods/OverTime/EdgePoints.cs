@@ -12,19 +12,18 @@ internal sealed class EdgePoints(bool quasiStatic)
     private readonly List<Complex> _dc = [];
 
     /// <summary>Adds a point to the cluster in which it lies.</summary>
-    public void Add(Complex point, Clusters wanted = Clusters.Both)
+    public void Add(Complex point)
     {
-        var isAc = quasiStatic || point.Imaginary > -0.5;
-        if (isAc && wanted.HasFlag(Clusters.Ac))
+        if (quasiStatic || point.Imaginary > -0.5)
             _ac.Add(point);
-        else if (!isAc && wanted.HasFlag(Clusters.Dc) && point.Real >= -PoleRegion.LargestDcRate)
+        else if (point.Real >= -PoleRegion.LargestDcRate)
             _dc.Add(point);
     }
 
     /// <summary>
     /// Adds the roots of s·A(p) + B(p) = 0 with the coefficients of A and B from the constant up, s = p + j, or j in quasi-static networks.
     /// </summary>
-    public void AddRootsOf(double[] atS, double[] alone, Clusters wanted = Clusters.Both)
+    public void AddRootsOf(double[] atS, double[] alone)
     {
         var degree = quasiStatic ? atS.Length - 1 : atS.Length;
         var polynomial = new Complex[degree + 1];
@@ -35,7 +34,7 @@ internal sealed class EdgePoints(bool quasiStatic)
                 polynomial[i + 1] += atS[i];
         }
         foreach (var root in Roots(polynomial))
-            Add(root, wanted);
+            Add(root);
     }
 
     /// <summary>The points about p = 0.</summary>
@@ -93,18 +92,4 @@ internal sealed class EdgePoints(bool quasiStatic)
         roots[index] -= step;
         return Complex.Abs(step) / (Complex.Abs(roots[index]) + 1e-9);
     }
-}
-
-/// <summary>The clusters of poles.</summary>
-[Flags]
-internal enum Clusters
-{
-    /// <summary>About p = 0: the AC component.</summary>
-    Ac = 1,
-
-    /// <summary>About p = −j: the DC component.</summary>
-    Dc = 2,
-
-    /// <summary>Both.</summary>
-    Both = Ac | Dc,
 }

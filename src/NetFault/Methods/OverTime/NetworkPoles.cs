@@ -12,20 +12,15 @@ internal sealed class NetworkPoles
     /// <summary>Machines whose shares and rates differ by less than this are alike to the region.</summary>
     private const double SharesAlike = 0.02, RatesAlike = 1.0 / 16.0;
 
-    /// <summary>Room for the directions of impedances in a bound that is found from magnitudes.</summary>
-    private const double MotorMargin = 1.25;
-
-    private readonly StudyNetworks _networks;
     private readonly Circuit _circuit;
     private readonly OperationalSource[] _sources;
     private readonly bool _quasiStatic;
     private double _largestRatio;
     private bool _needsProof;
 
-    private NetworkPoles(StudyNetworks networks, IEnumerable<OperationalSource?> sources, bool quasiStatic)
+    private NetworkPoles(Circuit circuit, IEnumerable<OperationalSource?> sources, bool quasiStatic)
     {
-        _networks = networks;
-        _circuit = networks.Circuit;
+        _circuit = circuit;
         _sources = sources.OfType<OperationalSource>().ToArray();
         _quasiStatic = quasiStatic;
     }
@@ -37,7 +32,7 @@ internal sealed class NetworkPoles
     /// <exception cref="CurrentOverTimeException">Nothing bounds them.</exception>
     public static PoleLimits LimitsOf(StudyNetworks networks, OperationalSource?[] sources, bool quasiStatic)
     {
-        var work = new NetworkPoles(networks, sources, quasiStatic);
+        var work = new NetworkPoles(networks.Circuit, sources, quasiStatic);
         work.ReadBranches();
         foreach (var source in work._sources)
             work.TakeRatio(source.ResistanceRatio);
@@ -51,7 +46,6 @@ internal sealed class NetworkPoles
             Machines = work.DifferentMachines(),
             MotorRates = work.DifferentMotorRates(),
             LargestMotorResistanceRatio = work.Motors.Select(motor => motor.ResistanceRatio).DefaultIfEmpty().Max(),
-            MotorsSee = work.Motors.Any() ? MotorMargin * work.LargestVoltageOfMotors(sources) : 0.0,
         };
     }
 
@@ -122,27 +116,4 @@ internal sealed class NetworkPoles
         Motors.Select(motor => motor.MotorRate).GroupBy(Ring).Select(group => group.Max()).ToList();
 
     private static double Ring(double rate) => rate > 0.0 ? Math.Round(Math.Log(rate) / RatesAlike) : double.NegativeInfinity;
-
-    /// <summary>
-    /// The largest impedance that the motors see together, over their own. Let them all draw their locked-rotor current, 1/|Z|, from the network
-    /// with the synchronous reactances: the voltage at them is that ratio (with A the impedances between motors and D their own, the norm of
-    /// D^(-1/2)·A·D^(-1/2) is not above the largest row of |A|·1/|Z|). A fault only brings it down.
-    /// </summary>
-    private double LargestVoltageOfMotors(OperationalSource?[] sources)
-    {
-        var currents = new Complex[_circuit.NodeCount];
-        for (var i = 0; i < sources.Length; i++)
-        {
-            if (sources[i] is { MotorRate: > 0.0 } motor)
-                currents[_circuit.Sources[i].Node] += 1.0 / Math.Sqrt(motor.Resistance * motor.Resistance + motor.Reactance * motor.Reactance);
-        }
-        var voltages = _networks.Of(MachineDecrement.SteadyState).Solve(currents);
-        var largest = 0.0;
-        for (var i = 0; i < voltages.Length; i++)
-        {
-            if (currents[i] != Complex.Zero)
-                largest = Math.Max(largest, Complex.Abs(voltages[i]));
-        }
-        return largest;
-    }
 }

@@ -13,12 +13,16 @@ internal sealed class PoleRegion
 {
     /// <summary>
     /// Points of an edge for each e-fold of distance from the point about which the cluster lies: a rule of some 60 nodes has no more than about 5
-    /// extremes of its error in one. A small region has more, for it takes more points than nodes to hold a rule down everywhere.
+    /// extremes of its error in one. A small region has more, for it takes several points a node to hold a rule down everywhere (with two a
+    /// node, bounds came out up to 30 times as large as with eight).
     /// </summary>
-    private const int FewestAnEFold = 10, MostAnEFold = 160, PointsANode = 2;
+    private const int FewestAnEFold = 10, MostAnEFold = 160, PointsANode = 8;
 
     /// <summary>So many points at which errors are looked up come on one that weights are fitted to.</summary>
     private const double ChecksAPoint = 2.4;
+
+    /// <summary>External impedances over a machine's own reactance between which its poles move at all.</summary>
+    private const double SmallestExternal = 1e-2, LargestExternal = 1e3;
 
     /// <summary>Poles that decay faster than this many times ω are not resolved: they are gone within 0.2 ms.</summary>
     public const double LargestDcRate = 100.0;
@@ -58,15 +62,11 @@ internal sealed class PoleRegion
         edges.Add(Complex.Zero);
         if (!_quasiStatic)
             AddNetworkAlone(edges, density);
-        var external = External(double.PositiveInfinity, density).ToList();
+        var external = External(density).ToList();
         foreach (var machine in _limits.Machines)
             AddMachine(edges, machine, external);
-        var seenByMotors = External(_limits.MotorsSee, density).ToList();
         foreach (var rate in _limits.MotorRates)
-        {
-            AddMotor(edges, rate, seenByMotors, Clusters.Ac);
-            AddMotor(edges, rate, external, Clusters.Dc);
-        }
+            AddMotor(edges, rate, external);
         return edges;
     }
 
@@ -100,33 +100,27 @@ internal sealed class PoleRegion
         }
     }
 
-    /// <summary>
-    /// A motor behind w: (ρ + s)·(p + g) + (x·s + μ)·p = 0. What motors see is bounded, so that their AC poles are; a DC pole is that of the path
-    /// the less shifted the longer it is.
-    /// </summary>
-    private void AddMotor(EdgePoints edges, double rate, List<Complex> external, Clusters wanted)
+    /// <summary>A motor behind w: (ρ + s)·(p + g) + (x·s + μ)·p = 0.</summary>
+    private void AddMotor(EdgePoints edges, double rate, List<Complex> external)
     {
         foreach (var rho in new[] { 0.0, _limits.LargestMotorResistanceRatio }.Distinct())
         {
             foreach (var w in external)
-                edges.AddRootsOf(atS: [rate, 1.0 + w.Imaginary], alone: [rho * rate, rho + w.Real], wanted);
+                edges.AddRootsOf(atS: [rate, 1.0 + w.Imaginary], alone: [rho * rate, rho + w.Real]);
         }
     }
 
-    /// <summary>External impedances on the edges of the sector in which they lie, from 0 to the largest, over the machine's own reactance.</summary>
-    private IEnumerable<Complex> External(double largest, int density)
+    /// <summary>External impedances on the edges of the sector in which they lie, over the machine's own reactance.</summary>
+    private IEnumerable<Complex> External(int density)
     {
         yield return Complex.Zero;
-        var last = double.IsInfinity(largest) ? 1e3 : largest;
         var flattest = Math.Atan2(1.0, _limits.LargestResistanceRatio);
         var steepest = Math.Atan2(1.0, _limits.SmallestResistanceRatio);
-        foreach (var size in Steps(Math.Min(1e-2, 0.1 * last), last, density))
+        foreach (var size in Steps(SmallestExternal, LargestExternal, density))
         {
             yield return Complex.FromPolarCoordinates(size, flattest);
             yield return Complex.FromPolarCoordinates(size, steepest);
         }
-        for (var i = 1; i < 2 * density && !double.IsInfinity(largest); i++)
-            yield return Complex.FromPolarCoordinates(last, flattest + i / (2.0 * density) * (steepest - flattest));
     }
 
     private static IEnumerable<double> Steps(double first, double last, int density)
@@ -160,9 +154,6 @@ internal sealed record PoleLimits
     /// <summary>The largest R/X of a motor.</summary>
     public double LargestMotorResistanceRatio { get; init; }
 
-    /// <summary>The largest impedance that the motors together see towards the rest of the network, over their own.</summary>
-    public double MotorsSee { get; init; }
-
     /// <summary>The limits with one more element of an R/X.</summary>
     public PoleLimits WithRatio(double ratio) => this with { LargestResistanceRatio = Math.Max(ratio, LargestResistanceRatio) };
 
@@ -171,7 +162,6 @@ internal sealed record PoleLimits
     {
         var rates = Machines.SelectMany(machine => new[] { machine.TransientRate, machine.SubtransientRate }).Concat(MotorRates).ToList();
         return FormattableString.Invariant($"R/X from {SmallestResistanceRatio:0.####} to {LargestResistanceRatio:0.###}")
-            + FormattableString.Invariant($", time constants of machines from {1.0 / rates.DefaultIfEmpty().Max():0.#}/ω")
-            + (MotorsSee > 0.0 ? FormattableString.Invariant($", motors behind up to {MotorsSee:0.##} times their impedance") : string.Empty);
+            + FormattableString.Invariant($", time constants of machines from {1.0 / rates.DefaultIfEmpty().Max():0.#}/ω");
     }
 }
