@@ -5,8 +5,8 @@ namespace NetFault.NodeTables;
 /// <summary>
 /// A class of networks that tables are made for, as points where its poles can lie, by the library's own <see cref="PoleRegion"/>.
 /// Impedances between machines have R/X up to 5. Transient time constants are from 0.1 s at 50 Hz with X′d/Xd from 0.08, subtransient
-/// ones have X″d/X′d from 0.3, each alone, and both in one machine where they are apart by a factor of 10. Motors have R/X up to 0.5 and
-/// see up to 1.5 times their own impedance. How fast the R-L modes and the fastest machines decay is what sets the two classes apart. A
+/// ones have X″d/X′d from 0.3, each alone, and both in one machine where they are apart by a factor of 10. Motors have R/X up to 0.5.
+/// How fast the R-L modes and the fastest machines decay is what sets the two classes apart. A
 /// network outside of a class gets a larger error bound from the library, no wrong result.
 /// </summary>
 internal sealed class NetworkClass
@@ -64,7 +64,6 @@ internal sealed class NetworkClass
                 Machines = [.. Machines()],
                 MotorRates = [.. Rates(LargestMachineRate, 0.008, 12)],
                 LargestMotorResistanceRatio = 0.5,
-                MotorsSee = 1.5,
             },
             QuasiStatic);
 

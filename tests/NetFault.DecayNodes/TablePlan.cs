@@ -17,11 +17,11 @@ internal sealed record TablePlan(string Name, bool QuasiStatic, DecayWindow Wind
     public static IReadOnlyList<TablePlan> All { get; } =
     [
         new("QuasiStaticEarly", true, DecayWindow.QuasiStatic[0], Usual: [], Whole: [12, 16, 22, 26]),
-        new("QuasiStaticMiddle", true, DecayWindow.QuasiStatic[1], Usual: [], Whole: [20, 28, 34]),
-        new("QuasiStaticLate", true, DecayWindow.QuasiStatic[2], Usual: [], Whole: [16, 24, 28]),
-        new("ExactEarly", false, DecayWindow.Exact[0], Usual: [20, 26, 34, 42], Whole: [26, 34, 42, 50, 64]),
-        new("ExactMiddle", false, DecayWindow.Exact[1], Usual: [], Whole: [30, 36, 44, 56]),
-        new("ExactLate", false, DecayWindow.Exact[2], Usual: [], Whole: [24, 34, 44]),
+        new("QuasiStaticMiddle", true, DecayWindow.QuasiStatic[1], Usual: [], Whole: [20, 28, 36, 44]),
+        new("QuasiStaticLate", true, DecayWindow.QuasiStatic[2], Usual: [], Whole: [24, 36, 48]),
+        new("ExactEarly", false, DecayWindow.Exact[0], Usual: [20, 26, 34, 42], Whole: [34, 42, 50, 64]),
+        new("ExactMiddle", false, DecayWindow.Exact[1], Usual: [], Whole: [36, 48, 56, 64]),
+        new("ExactLate", false, DecayWindow.Exact[2], Usual: [], Whole: [34, 48, 60, 72]),
     ];
 
     /// <summary>The tables in the order in which the library tries them: few nodes first, then those for usual networks.</summary>

@@ -104,7 +104,7 @@ public class DecayNodesTests
         var rho = limits.LargestMotorResistanceRatio * random.NextDouble();
         var flattest = Math.Atan2(1.0, limits.LargestResistanceRatio);
         var direction = flattest + random.NextDouble() * (Math.PI / 2.0 - flattest);
-        var w = Complex.FromPolarCoordinates(limits.MotorsSee * random.NextDouble(), direction);
+        var w = Complex.FromPolarCoordinates(0.01 * Math.Pow(10, 4 * random.NextDouble()), direction);
         double x = w.Imaginary, mu = w.Real;
         var j = Complex.ImaginaryOne;
         Complex a = 1.0 + x, b = rho + j + rate + x * j + mu, c = (rho + j) * rate;
@@ -127,14 +127,13 @@ public class DecayNodesTests
 
     private static IReadOnlyList<DecayWindow> Windows(bool quasiStatic) => quasiStatic ? DecayWindow.QuasiStatic : DecayWindow.Exact;
 
-    /// <summary>Invented: two machines, of 35 and 20 ms at 50 Hz, and motors of 15 to 60 ms that see 0.6 of their own impedance.</summary>
+    /// <summary>Invented: two machines, of 35 and 20 ms at 50 Hz, and motors of 15 to 60 ms.</summary>
     private static PoleLimits Limits(double ratio, bool motors) => new()
     {
         LargestResistanceRatio = ratio,
         Machines = [Machine(0.5, 0.004, 0.3, 0.09), Machine(0.4, 0.006, 0.4, 0.16)],
         MotorRates = motors ? [0.05, 0.1, 0.2] : [],
         LargestMotorResistanceRatio = motors ? Math.Min(0.3, ratio) : 0.0,
-        MotorsSee = motors ? 0.6 : 0.0,
     };
 
     private static OperationalSource Machine(double share1, double rate1, double share2, double rate2) => new()
