@@ -22,7 +22,8 @@ using NetFault;
 
 const string Usage =
     "usage: dotnet run examples/duty-check.cs -- NETWORK.yaml [--csv FILE] [--json FILE] [--method decrement|iec|ieee] [--current e/z|e/x]"
-    + " [--x-over-r complex|separate|a|b|c] [--prefault PU] [--duration SECONDS] [--marginal PERCENT] [--dc current|percent|total] [--low-voltage icu|ics] [--reactor ELEMENT]";
+    + " [--x-over-r complex|separate|a|b|c] [--prefault PU] [--duration SECONDS] [--marginal PERCENT] [--dc current|percent|total]"
+    + " [--low-voltage icu|ics] [--reactor ELEMENT]";
 
 Console.OutputEncoding = Encoding.UTF8;
 try
@@ -73,8 +74,10 @@ static void PrintReactors(DutyCheck check, string place)
     {
         var proposal = check.SmallestReactor(device, place);
         Console.WriteLine($"{device.Id}: {proposal}");
-        if (proposal.After is { } after)
-            Console.WriteLine($"   by the low-rank formula {proposal.ByFormula!.Required:0.######}, by the full solution {proposal.ByFullSolution!.Required:0.######} {proposal.ByFullSolution.Unit}; with it {after.Count(DutyVerdict.Fail)} devices fail");
+        if (proposal is not { ByFormula: { } formula, ByFullSolution: { } full, After: { } after })
+            continue;
+        Console.WriteLine(FormattableString.Invariant($"   by the low-rank formula {formula.Required:0.######}, by the full solution {full.Required:0.######} ")
+            + FormattableString.Invariant($"{full.Unit}; with it {after.Count(DutyVerdict.Fail)} devices fail"));
     }
 }
 

@@ -93,11 +93,18 @@ public sealed class DutyCheck
             throw new ArgumentException("the device is of another check", nameof(device));
         var study = StudyOf(device);
         var places = study.Network.Elements.Take(study.Network.ConductingCount)
-            .Where(one => one.Id == Guard.NotNull(placeId) && one.Terminals.Count > 0 && (placeSection is null || one.Section == placeSection)).ToList();
+            .Where(one => one.Id == Guard.NotNull(placeId) && one.Terminals.Count > 0)
+            .Where(one => placeSection is null || one.Section == placeSection).ToList();
         if (places.Count > 1)
-            throw new ArgumentException($"\"{placeId}\" stands in {string.Join(" and ", places.Select(one => one.Section))}: name the section too", nameof(placeId));
+        {
+            var sections = string.Join(" and ", places.Select(one => one.Section));
+            throw new ArgumentException($"\"{placeId}\" stands in {sections}: name the section too", nameof(placeId));
+        }
         if (places.Count == 0)
-            throw new UnknownIdException(placeSection ?? "the network", placeId, study.Network.Elements.Where(one => one.Terminals.Count > 0).Select(one => one.Id));
+        {
+            var known = study.Network.Elements.Where(one => one.Terminals.Count > 0).Select(one => one.Id);
+            throw new UnknownIdException(placeSection ?? "the network", placeId, known);
+        }
         var ends = places[0].Terminals.OfType<string>().ToList();
         var bus = busId ?? (ends.Contains(device.BusId) ? device.BusId : ends[0]);
         if (!ends.Contains(bus))

@@ -22,8 +22,9 @@ internal static class LowVoltageDuties
         var testPeak = PeakFactorOf(powerFactor ?? 1.0);
         sheet.Judge(DutyKind.BreakingSymmetrical, rated,
             useService ? "service_short_circuit_breaking_capacity_ka" : "ultimate_short_circuit_breaking_capacity_ka", sheet.Both,
-            side => side.InitialSymmetricalKa * Math.Max(1.0, PeakFactorOf(side) / testPeak), FormattableString.Invariant(
-                $"I″k, times the ratio of the peak factors where the power factor is below that of the test ({powerFactor:0.##}), against {(useService ? "Ics" : "Icu")} (IEC 60947-2; the factor is common practice, after IEEE C37.13)"));
+            side => side.InitialSymmetricalKa * Math.Max(1.0, PeakFactorOf(side) / testPeak),
+            FormattableString.Invariant($"I″k, times the ratio of the peak factors where the power factor is below that of the test ({powerFactor:0.##}), ")
+            + $"against {(useService ? "Ics" : "Icu")} (IEC 60947-2; the factor is common practice, after IEEE C37.13)");
         if (breaker.ShortTimeWithstandCurrentKa is { } shortTime)
             WithstandDuties.Thermal(shortTime, breaker.ShortTimeDurationSeconds, 1.0, sheet);
     }
@@ -35,8 +36,9 @@ internal static class LowVoltageDuties
             sheet.Assume("test_power_factor", "0.15 assumed (X/R of 6.6), that of unfused power circuit-breakers of IEEE C37.13");
         var test = breaker.TestPowerFactor is { } given ? StandardRatings.XOverROfPowerFactor(given) : IeeeMultiplyingFactors.UnfusedTestXOverR;
         sheet.Judge(DutyKind.BreakingSymmetrical, breaker.ShortCircuitBreakingCurrentKa, "short_circuit_breaking_current_ka", sheet.Both,
-            side => side.InitialSymmetricalKa * IeeeMultiplyingFactors.LowVoltageUnfused(Undamped(side), Math.Max(test, 1e-3)), FormattableString.Invariant(
-                $"I″k times the multiplying factor by the peak above the test's X/R of {test:0.#}, against the rated short-circuit current (IEEE C37.13)"));
+            side => side.InitialSymmetricalKa * IeeeMultiplyingFactors.LowVoltageUnfused(Undamped(side), Math.Max(test, 1e-3)),
+            FormattableString.Invariant($"I″k times the multiplying factor by the peak above the test's X/R of {test:0.#}, ")
+            + "against the rated short-circuit current (IEEE C37.13)");
         if (breaker.ShortTimeWithstandCurrentKa is { } shortTime)
             WithstandDuties.Thermal(shortTime, breaker.ShortTimeDurationSeconds, 0.5, sheet);
     }
@@ -54,8 +56,9 @@ internal static class LowVoltageDuties
                 $"{powerFactor} assumed, the highest that {(isLow ? "IEC 60269-1" : "IEC 60282-1")} tests the breaking capacity at"));
         }
         sheet.Judge(DutyKind.BreakingSymmetrical, fuse.BreakingCapacityKa, "breaking_capacity_ka", sheet.Both,
-            side => side.InitialSymmetricalKa * IeeeMultiplyingFactors.LowVoltageFused(Undamped(side), Math.Max(test.Value, 1e-3)), FormattableString.Invariant(
-                $"I″k, times the ratio of the total RMS currents at half a cycle above the test's X/R of {test:0.#}, against the breaking capacity"));
+            side => side.InitialSymmetricalKa * IeeeMultiplyingFactors.LowVoltageFused(Undamped(side), Math.Max(test.Value, 1e-3)),
+            FormattableString.Invariant($"I″k, times the ratio of the total RMS currents at half a cycle above the test's X/R of {test:0.#}, ")
+            + "against the breaking capacity");
     }
 
     private static double? Making(CircuitBreaker breaker, DutySheet sheet)

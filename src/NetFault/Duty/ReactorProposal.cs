@@ -50,10 +50,10 @@ public sealed class ReactorProposal
     /// <summary>The same duty by a full solution of the network with the reactor in it.</summary>
     public Duty? ByFullSolution { get; internal init; }
 
-    /// <summary>The network with the reactor.</summary>
+    /// <summary>The network with the reactor; for a device at an open coupler with that coupler closed, as the device is judged.</summary>
     public Network? Network { get; internal init; }
 
-    /// <summary>The duty check of every device in the network with the reactor: it also shows what the reactor does to the others.</summary>
+    /// <summary>The duty check of every device in <see cref="Network"/>: it also shows what the reactor does to the others.</summary>
     public DutyCheck? After { get; internal init; }
 
     /// <summary>The proposal in one line.</summary>

@@ -94,8 +94,9 @@ internal sealed class ReactorSearch
     private static string WhyNot(DeviceDuty limit, double correction)
     {
         var worst = limit.Duties.Where(one => one.MarginPercent.HasValue).OrderBy(one => one.MarginPercent).First();
-        return FormattableString.Invariant(
-            $"even the largest reactor there leaves {DutyTexts.Name(worst.Kind)} at {worst.Required * correction:0.###} of {worst.Rated:0.###} {worst.Unit}, for a fault {(worst.FaultSide == FaultSide.AtBus ? "at" : "beyond the device at")} {worst.FaultBusId}: the current comes by other ways");
+        var where = worst.FaultSide == FaultSide.BeyondDevice ? "beyond the device at" : "at";
+        return FormattableString.Invariant($"even the largest reactor there leaves {DutyTexts.Name(worst.Kind)} at {worst.Required * correction:0.###} ")
+            + FormattableString.Invariant($"of {worst.Rated:0.###} {worst.Unit}, for a fault {where} {worst.FaultBusId}: the current comes by other ways");
     }
 
     private DeviceDuty FullSolution(double x)

@@ -3,7 +3,10 @@ namespace NetFault;
 /// <summary>What closed equipment must carry: the peak, and the heat.</summary>
 internal static class WithstandDuties
 {
-    /// <summary>A circuit-breaker above 1 kV: its making current stands for a peak withstand current that is not given, its breaking current for the short-time one.</summary>
+    /// <summary>
+    /// A circuit-breaker above 1 kV: its making current stands for a peak withstand current that is not given, its breaking current for the
+    /// short-time one.
+    /// </summary>
     public static void OfBreaker(CircuitBreaker breaker, double? makingKa, DutySheet sheet)
     {
         if (breaker.PeakWithstandCurrentKa is null && makingKa.HasValue)

@@ -11,7 +11,8 @@ internal static class DutyTable
         var text = new StringBuilder();
         if (check.Study.Network.Title is { } title)
             text.Append(title).Append('\n');
-        text.Append(FormattableString.Invariant($"Duty of {check.Devices.Count} devices in three-phase short circuits, {check.Study.Network.FrequencyHz} Hz, the worst first\n"));
+        text.Append(FormattableString.Invariant($"Duty of {check.Devices.Count} devices in three-phase short circuits, "))
+            .Append(FormattableString.Invariant($"{check.Study.Network.FrequencyHz} Hz, the worst first\n"));
         text.Append(ReportTexts.MethodLine(check.Study.Method)).Append('\n');
         text.Append(DutyTexts.OptionsLine(check.Options)).Append("\n\n");
         if (check.Devices.Count == 0)
@@ -61,7 +62,8 @@ internal static class DutyTable
             text.Append("\na: rests on ratings or times that the network does not give:\n");
         foreach (var group in ReportTexts.Group(assumptions))
             text.Append("   ").Append(group).Append('\n');
-        var remarks = check.Devices.SelectMany(device => device.Remarks, (device, remark) => (device.Id, remark)).GroupBy(one => one.remark).ToList();
+        var remarks = check.Devices
+            .SelectMany(device => device.Remarks, (device, remark) => (device.Id, remark)).GroupBy(one => one.remark).ToList();
         if (remarks.Count > 0)
             text.Append("\nr: to be known:\n");
         foreach (var group in remarks)

@@ -37,8 +37,11 @@ internal static class DutyTexts
     };
 
     /// <summary>How was judged, in one line.</summary>
-    public static string OptionsLine(DutyOptions options) => FormattableString.Invariant(
-        $"Margin: rated over required, less one; marginal below {options.MarginalPercent} %. Thermal duty for {options.FaultDurationSeconds} s. DC component judged {Criterion(options.DcCriterion)}. Low voltage by {(options.LowVoltageRating == LowVoltageBreakingRating.Ultimate ? "Icu" : "Ics")}.");
+    public static string OptionsLine(DutyOptions options) =>
+        FormattableString.Invariant($"Margin: rated over required, less one; marginal below {options.MarginalPercent} %. ")
+        + FormattableString.Invariant($"Thermal duty for {options.FaultDurationSeconds} s. ")
+        + $"DC component judged {Criterion(options.DcCriterion)}. "
+        + $"Low voltage by {(options.LowVoltageRating == LowVoltageBreakingRating.Ultimate ? "Icu" : "Ics")}.";
 
     private static string Criterion(DcCriterion criterion) => criterion switch
     {
@@ -48,8 +51,13 @@ internal static class DutyTexts
     };
 
     /// <summary>The verdicts counted.</summary>
-    public static string Summary(DutyCheck check) => FormattableString.Invariant(
-        $"{check.Count(DutyVerdict.Fail)} fail, {check.Count(DutyVerdict.CannotSay)} cannot say, {check.Count(DutyVerdict.Pass)} pass ({check.Devices.Count(one => one.IsMarginal)} marginal), {check.Count(DutyVerdict.NoCurrent)} without current.");
+    public static string Summary(DutyCheck check)
+    {
+        int Count(DutyVerdict verdict) => check.Count(verdict);
+        var marginal = check.Devices.Count(one => one.IsMarginal);
+        return FormattableString.Invariant($"{Count(DutyVerdict.Fail)} fail, {Count(DutyVerdict.CannotSay)} cannot say, ")
+            + FormattableString.Invariant($"{Count(DutyVerdict.Pass)} pass ({marginal} marginal), {Count(DutyVerdict.NoCurrent)} without current.");
+    }
 
     /// <summary>Ids in a line.</summary>
     public static string Ids(IReadOnlyList<string> ids) =>
