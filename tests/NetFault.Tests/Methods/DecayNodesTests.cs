@@ -24,12 +24,12 @@ public class DecayNodesTests
 
     [Theory]
     [MemberData(nameof(Networks))]
-    public void The_largest_tables_bound_the_quasi_static_decay_within_1e_9_of_the_initial_current(double ratio, bool motors) =>
+    public void The_largest_tables_bound_quasi_static_decay_within_1e_9_of_the_initial_current(double ratio, bool motors) =>
         LargestBounds(Limits(ratio, motors), quasiStatic: true).Should().OnlyContain(bound => bound < 1e-9);
 
     /// <summary>
-    /// Down to what the library asks for at the least: 0.7 of the smallest limit, 1e-7, and 1e-9 of quasi-static decay. Beyond that, a table for
-    /// the whole class may be worse in a usual network than a smaller one for usual networks.
+    /// Down to what the library asks for at the least: 0.7 of the smallest limit, 1e-7, and 1e-9 of quasi-static decay. Beyond that, a table
+    /// for the whole class may be worse in a usual network than a smaller one for usual networks.
     /// </summary>
     [Theory]
     [MemberData(nameof(Networks))]
