@@ -22,7 +22,7 @@ public class FaultReportTests
         lines.Should().ContainSingle(line => line.StartsWith("A "));
         lines.Should().ContainSingle(line => line.StartsWith("dead, \"quoted\" ")).Which.Should().EndWith("d");
         table.Should().Contain("I″k").And.Contain("i_dc(0.05 s)").And.Contain("xd is not given; x′d is kept");
-        table.Should().Contain("not for live switching decisions").And.Contain("AC component held at I″k");
+        table.Should().Contain("not for live switching decisions").And.Contain("AC component decaying with all machines");
         var bus = _study.At("A");
         lines.Single(line => line.StartsWith("A ")).Should().Contain(bus.PeakKa.ToString("0.000", CultureInfo.InvariantCulture));
     }

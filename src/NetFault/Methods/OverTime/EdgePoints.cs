@@ -11,19 +11,20 @@ internal sealed class EdgePoints(bool quasiStatic)
     private readonly List<Complex> _ac = [];
     private readonly List<Complex> _dc = [];
 
-    /// <summary>Adds a point to the cluster in which it lies.</summary>
-    public void Add(Complex point)
+    /// <summary>Adds a point to the cluster in which it lies, where that is wanted.</summary>
+    public void Add(Complex point, Clusters wanted = Clusters.Both)
     {
-        if (quasiStatic || point.Imaginary > -0.5)
+        var isAc = quasiStatic || point.Imaginary > -0.5;
+        if (isAc && wanted != Clusters.Dc)
             _ac.Add(point);
-        else if (point.Real >= -PoleRegion.LargestDcRate)
+        else if (!isAc && wanted != Clusters.Ac && point.Real >= -PoleRegion.LargestDcRate)
             _dc.Add(point);
     }
 
     /// <summary>
     /// Adds the roots of s·A(p) + B(p) = 0 with the coefficients of A and B from the constant up, s = p + j, or j in quasi-static networks.
     /// </summary>
-    public void AddRootsOf(double[] atS, double[] alone)
+    public void AddRootsOf(double[] atS, double[] alone, Clusters wanted)
     {
         var degree = quasiStatic ? atS.Length - 1 : atS.Length;
         var polynomial = new Complex[degree + 1];
@@ -34,7 +35,7 @@ internal sealed class EdgePoints(bool quasiStatic)
                 polynomial[i + 1] += atS[i];
         }
         foreach (var root in Roots(polynomial))
-            Add(root);
+            Add(root, wanted);
     }
 
     /// <summary>The points about p = 0.</summary>
@@ -92,4 +93,17 @@ internal sealed class EdgePoints(bool quasiStatic)
         roots[index] -= step;
         return Complex.Abs(step) / (Complex.Abs(roots[index]) + 1e-9);
     }
+}
+
+/// <summary>The clusters of poles.</summary>
+internal enum Clusters
+{
+    /// <summary>About p = 0: the AC component.</summary>
+    Ac,
+
+    /// <summary>About p = −j: the DC component.</summary>
+    Dc,
+
+    /// <summary>Both.</summary>
+    Both,
 }

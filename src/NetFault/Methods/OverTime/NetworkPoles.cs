@@ -36,18 +36,21 @@ internal sealed class NetworkPoles
         work.ReadBranches();
         foreach (var source in work._sources)
             work.TakeRatio(source.ResistanceRatio);
-        var smallest = 0.0;
-        if (work._needsProof)
-            (smallest, work._largestRatio) = NetworkForms.ResistanceRatios(networks, sources, work._largestRatio);
+        var whole = work._needsProof ? NetworkForms.Of(networks, sources, work._largestRatio) : new NetworkForms.Bounds(0.0, work._largestRatio, 1.0);
         return new PoleLimits
         {
-            SmallestResistanceRatio = smallest,
-            LargestResistanceRatio = work._largestRatio,
+            SmallestResistanceRatio = whole.Smallest,
+            LargestResistanceRatio = whole.Largest,
+            HoldAsAWhole = work._needsProof,
+            ReactanceLeft = whole.ReactanceLeft,
             Machines = work.DifferentMachines(),
+            LargestMachineResistanceRatio = work.Machines.Select(machine => machine.ResistanceRatio).DefaultIfEmpty().Max(),
             MotorRates = work.DifferentMotorRates(),
             LargestMotorResistanceRatio = work.Motors.Select(motor => motor.ResistanceRatio).DefaultIfEmpty().Max(),
         };
     }
+
+    private IEnumerable<OperationalSource> Machines => _sources.Where(source => source.TransientRate > 0.0 || source.SubtransientRate > 0.0);
 
     private IEnumerable<OperationalSource> Motors => _sources.Where(source => source.MotorRate > 0.0);
 
@@ -104,8 +107,7 @@ internal sealed class NetworkPoles
 
     private void TakeRatio(double ratio) => _largestRatio = Math.Max(_largestRatio, ratio);
 
-    private List<OperationalSource> DifferentMachines() => _sources
-        .Where(source => source.TransientRate > 0.0 || source.SubtransientRate > 0.0)
+    private List<OperationalSource> DifferentMachines() => Machines
         .GroupBy(source => (
             Math.Round(source.TransientShare / SharesAlike), Math.Round(source.SubtransientShare / SharesAlike),
             Ring(source.TransientRate), Ring(source.SubtransientRate)))

@@ -37,6 +37,13 @@ internal sealed record OperationalSource
     /// <summary>Whether nothing of it decays.</summary>
     public bool IsConstant => TransientRate == 0.0 && SubtransientRate == 0.0 && MotorRate == 0.0;
 
+    /// <summary>
+    /// What a machine has its rates on open circuit from, −h: (p + g1)(p + g2) − y1·g1·(p + g2) − y2·g2·(p + g1) = p² + Linear·p + Constant = 0.
+    /// </summary>
+    public (double Constant, double Linear) OpenCircuit => (
+        TransientRate * SubtransientRate * (1.0 - TransientShare - SubtransientShare),
+        TransientRate + SubtransientRate - TransientShare * TransientRate - SubtransientShare * SubtransientRate);
+
     /// <summary>The impedance at a point of the plane.</summary>
     /// <param name="p">p over ω, not 0 and not a pole.</param>
     /// <param name="s">p + j, or j where reactances are kept at rated frequency.</param>

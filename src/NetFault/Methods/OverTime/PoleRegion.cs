@@ -6,8 +6,8 @@ namespace NetFault;
 /// <summary>
 /// Where the poles of a network's fault currents can lie, found from its data alone, as points of the regions' edges in units of ω. A pole is
 /// possible at p only where no open half-plane holds the impedances of all branches at p (else Σ z·|i|² = 0 has no solution but i = 0), so that
-/// an edge consists of the poles of one machine behind an external impedance w, of which only the direction is bounded: w = κ·e^(jθ) with
-/// tan θ ≥ 1/(largest R/X). The error of a quadrature is analytic between the edges, so it is largest on them.
+/// an edge consists of the poles of one machine behind an external impedance, of which only the direction is bounded
+/// (<see cref="ExternalImpedances"/>). The error of a quadrature is analytic between the edges, so it is largest on them.
 /// </summary>
 internal sealed class PoleRegion
 {
@@ -20,9 +20,6 @@ internal sealed class PoleRegion
 
     /// <summary>So many points at which errors are looked up come on one that weights are fitted to.</summary>
     private const double ChecksAPoint = 2.4;
-
-    /// <summary>External impedances over a machine's own reactance between which its poles move at all.</summary>
-    private const double SmallestExternal = 1e-2, LargestExternal = 1e3;
 
     /// <summary>Poles that decay faster than this many times ω are not resolved: they are gone within 0.2 ms.</summary>
     public const double LargestDcRate = 100.0;
@@ -62,11 +59,11 @@ internal sealed class PoleRegion
         edges.Add(Complex.Zero);
         if (!_quasiStatic)
             AddNetworkAlone(edges, density);
-        var external = External(density).ToList();
-        foreach (var machine in _limits.Machines)
-            AddMachine(edges, machine, external);
-        foreach (var rate in _limits.MotorRates)
-            AddMotor(edges, rate, external);
+        var external = new ExternalImpedances(_limits, ChecksAPoint * density);
+        AddMachines(edges, external.OfMachineForAc(), Clusters.Ac);
+        AddMachines(edges, external.OfMachineForDc(), Clusters.Dc);
+        foreach (var ratio in new[] { 0.0, _limits.LargestMotorResistanceRatio }.Distinct())
+            AddMotors(edges, ratio, external.OfMotor(ratio).ToList());
         return edges;
     }
 
@@ -79,55 +76,40 @@ internal sealed class PoleRegion
         var last = Math.Min(_limits.LargestResistanceRatio, LargestDcRate);
         if (last <= 0.0)
             return;
-        foreach (var rate in Steps(1e-4 * last, last, density))
+        foreach (var rate in ExternalImpedances.Logarithmic(1e-4 * last, last, ChecksAPoint * density))
             edges.Add(new Complex(-rate, -1.0));
     }
 
-    /// <summary>
-    /// A machine behind w: s·(p + g1)(p + g2) + w·[(p + g1)(p + g2) − y1·g1·(p + g2) − y2·g2·(p + g1)] = 0, w = x·s + μ.
-    /// </summary>
-    private static void AddMachine(EdgePoints edges, OperationalSource machine, List<Complex> external)
+    private void AddMachines(EdgePoints edges, IEnumerable<Complex> external, Clusters wanted)
     {
-        double g1 = machine.TransientRate, g2 = machine.SubtransientRate;
-        double sum = g1 + g2, product = g1 * g2;
-        var linear = sum - machine.TransientShare * g1 - machine.SubtransientShare * g2;
-        var constant = product * (1.0 - machine.TransientShare - machine.SubtransientShare);
+        var points = external.ToList();
+        foreach (var machine in _limits.Machines)
+            AddMachine(edges, machine, points, wanted);
+    }
+
+    /// <summary>
+    /// A machine without its resistance behind w: s·(p + g1)(p + g2) + w·[(p + g1)(p + g2) − y1·g1·(p + g2) − y2·g2·(p + g1)] = 0, w = x·s + μ.
+    /// </summary>
+    private static void AddMachine(EdgePoints edges, OperationalSource machine, List<Complex> external, Clusters wanted)
+    {
+        double sum = machine.TransientRate + machine.SubtransientRate, product = machine.TransientRate * machine.SubtransientRate;
+        var (constant, linear) = machine.OpenCircuit;
         foreach (var w in external)
         {
             double x = w.Imaginary, mu = w.Real;
-            var weighted = new[] { constant, linear, 1.0 };
-            edges.AddRootsOf(atS: [product + x * constant, sum + x * linear, 1.0 + x], alone: Array.ConvertAll(weighted, value => value * mu));
+            edges.AddRootsOf(
+                atS: [product + x * constant, sum + x * linear, 1.0 + x], alone: [mu * constant, mu * linear, mu], wanted);
         }
     }
 
     /// <summary>A motor behind w: (ρ + s)·(p + g) + (x·s + μ)·p = 0.</summary>
-    private void AddMotor(EdgePoints edges, double rate, List<Complex> external)
+    private void AddMotors(EdgePoints edges, double rho, List<Complex> external)
     {
-        foreach (var rho in new[] { 0.0, _limits.LargestMotorResistanceRatio }.Distinct())
+        foreach (var rate in _limits.MotorRates)
         {
             foreach (var w in external)
-                edges.AddRootsOf(atS: [rate, 1.0 + w.Imaginary], alone: [rho * rate, rho + w.Real]);
+                edges.AddRootsOf(atS: [rate, 1.0 + w.Imaginary], alone: [rho * rate, rho + w.Real], Clusters.Both);
         }
-    }
-
-    /// <summary>External impedances on the edges of the sector in which they lie, over the machine's own reactance.</summary>
-    private IEnumerable<Complex> External(int density)
-    {
-        yield return Complex.Zero;
-        var flattest = Math.Atan2(1.0, _limits.LargestResistanceRatio);
-        var steepest = Math.Atan2(1.0, _limits.SmallestResistanceRatio);
-        foreach (var size in Steps(SmallestExternal, LargestExternal, density))
-        {
-            yield return Complex.FromPolarCoordinates(size, flattest);
-            yield return Complex.FromPolarCoordinates(size, steepest);
-        }
-    }
-
-    private static IEnumerable<double> Steps(double first, double last, int density)
-    {
-        var count = (int)Math.Ceiling(ChecksAPoint * density * Math.Log(last / first)) + 1;
-        for (var i = 0; i <= count; i++)
-            yield return first * Math.Pow(last / first, (double)i / count);
     }
 }
 
@@ -150,6 +132,17 @@ internal sealed record PoleLimits
 
     /// <summary>The decay rates of the motors, those that differ.</summary>
     public required IReadOnlyList<double> MotorRates { get; init; }
+
+    /// <summary>
+    /// Whether the bounds of R/X hold for the network as a whole only, single elements having negative reactance or resistance.
+    /// </summary>
+    public bool HoldAsAWhole { get; init; }
+
+    /// <summary>The part of a machine's or motor's own reactance that negative reactances about it leave at least; 1 where there are none.</summary>
+    public double ReactanceLeft { get; init; } = 1.0;
+
+    /// <summary>The largest R/X of a machine with time constants.</summary>
+    public double LargestMachineResistanceRatio { get; init; }
 
     /// <summary>The largest R/X of a motor.</summary>
     public double LargestMotorResistanceRatio { get; init; }
