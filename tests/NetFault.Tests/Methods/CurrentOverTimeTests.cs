@@ -95,12 +95,12 @@ public class CurrentOverTimeTests
                 foreach (var t in new[] { 0, 0.001, 0.02, 0.1, 0.5, 5 })
                     fault.SymmetricalRmsKa(t).Should().BeApproximately(oracle.AcRmsKa(t), most, $"{fault.BusId} at {t} s");
             }
-        }, iter: 12);
+        }, iter: 6);
 
     [Fact]
     public void At_every_bus_of_a_generated_plant_the_exact_current_is_that_of_the_eigenvalues() =>
         RandomDecayPlants.Cases().Sample(
-            (seed, buses, machines) => AssertExact(RandomDecayPlants.Make(seed, buses, machines), seed), iter: 4);
+            (seed, buses, machines) => AssertExact(RandomDecayPlants.Make(seed, buses, machines), seed), iter: 2);
 
     [Fact]
     public void At_every_bus_of_a_plant_of_60_buses_and_20_machines_the_exact_current_is_that_of_the_eigenvalues() =>
