@@ -19,7 +19,7 @@ internal static class OverTimeSuite
         var prepared = new FaultStudy(network, Exact);
         var faults = prepared.EveryBus();
         Console.WriteLine(FormattableString.Invariant(
-            $"{name}, exact AC and DC to 0.3 s: error bound {At(faults, 0.06).Bound:0.0e+0} at 60 ms, DC at B[0] {faults[0].DcComponentKa(0.06):0.000} kA"));
+            $"{name}, exact AC and DC to 0.3 s: error bound {At(faults, 0.06).Bound:0.0e+0} at 60 ms, DC at the first bus {faults[0].DcComponentKa(0.06):0.000} kA"));
         var later = 0.06;
         var times = Stopwatches.Medians(11, TimeSpan.FromSeconds(3),
             () => new FaultStudy(network, InitialOnly).EveryBus(),
