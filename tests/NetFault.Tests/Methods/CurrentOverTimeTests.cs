@@ -195,11 +195,12 @@ public class CurrentOverTimeTests
         foreach (var fault in new FaultStudy(network, Exact with { HorizonSeconds = 5 }).EveryBus())
         {
             var oracle = new DecayOracle(network, fault.BusId, DecayMode.Exact);
-            double most = 1e-6 * oracle.InitialKa, stated = Bound(fault) + 1e-10 * oracle.InitialKa;
+            var most = 1e-6 * oracle.InitialKa;
             var degrees = 360 * random.NextDouble();
             foreach (var t in new[] { 0.001, 0.003, 0.01, 0.03, 0.1, 0.4, 1.5, 5 })
             {
                 var because = $"{fault.BusId} at {t} s";
+                var stated = (fault.DecayErrorBound(t) + 1e-10) * oracle.InitialKa;
                 double ac = oracle.AcRmsKa(t), dc = oracle.DcEnvelopeKa(t);
                 fault.SymmetricalRmsKa(t).Should().BeApproximately(ac, Math.Min(most, stated), because);
                 fault.DcComponentKa(t).Should().BeApproximately(dc, Math.Min(most, Math.Sqrt(2) * stated), because);
